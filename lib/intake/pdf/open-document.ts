@@ -1,0 +1,101 @@
+import { createHash } from 'node:crypto'
+import { createRequire } from 'node:module'
+import { dirname, join } from 'node:path'
+import type { PDFDocumentProxy, PDFPageProxy } from 'pdfjs-dist'
+import { getDocument, VerbosityLevel } from 'pdfjs-dist/legacy/build/pdf.mjs'
+import type { ReadDocument, ReadFont, ReadPage, TextRun } from '@/lib/checks/types'
+
+const assets = dirname(createRequire(import.meta.url).resolve('pdfjs-dist/package.json'))
+
+export type PageRead = (page: number, of: number) => void
+
+type PositionedItem = {
+  str: string
+  transform: number[]
+  width: number
+  height: number
+  fontName: string
+  hasEOL: boolean
+}
+
+/** Reads every page's positioned text. Throws pdfjs's own errors (PasswordException, InvalidPDFException, …). */
+export async function readPages(
+  bytes: Uint8Array,
+  maxPages: number,
+  onPage: PageRead,
+): Promise<ReadDocument> {
+  const sha256 = createHash('sha256').update(bytes).digest('hex')
+  const loading = getDocument({
+    data: bytes,
+    cMapUrl: join(assets, 'cmaps/'),
+    cMapPacked: true,
+    standardFontDataUrl: join(assets, 'standard_fonts/'),
+    wasmUrl: join(assets, 'wasm/'),
+    isEvalSupported: false,
+    disableFontFace: true,
+    useSystemFonts: false,
+    stopAtErrors: false,
+    verbosity: VerbosityLevel.ERRORS,
+  })
+  try {
+    const pdf = await loading.promise
+    if (pdf.numPages > maxPages) throw new RangeError(`${pdf.numPages} pages`)
+    const fonts: Record<string, ReadFont> = {}
+    const pages: ReadPage[] = []
+    for (let number = 1; number <= pdf.numPages; number++) {
+      const page = await pdf.getPage(number)
+      pages.push(await readPage(page, fonts))
+      page.cleanup()
+      onPage(number, pdf.numPages)
+    }
+    return { sha256, title: await getTitle(pdf), pages, fonts }
+  } finally {
+    await loading.destroy()
+  }
+}
+
+async function readPage(page: PDFPageProxy, fonts: Record<string, ReadFont>): Promise<ReadPage> {
+  const content = await page.getTextContent({ disableNormalization: true, includeMarkedContent: false })
+  for (const [key, style] of Object.entries(content.styles)) {
+    fonts[key] ??= {
+      family: style.fontFamily,
+      ascent: finite(style.ascent, 0.75),
+      descent: finite(style.descent, -0.25),
+      vertical: style.vertical,
+    }
+  }
+  const runs: TextRun[] = []
+  for (const item of content.items) {
+    if (!('str' in item)) continue
+    const run = toRun(item as PositionedItem)
+    if (run) runs.push(run)
+  }
+  const [x0 = 0, y0 = 0, x1 = 0, y1 = 0] = page.view
+  return { number: page.pageNumber, width: x1 - x0, height: y1 - y0, rotation: page.rotate, runs }
+}
+
+function toRun(item: PositionedItem): TextRun | null {
+  const [a = 0, b = 0, c = 0, d = 0, x = 0, y = 0] = item.transform
+  if (![a, b, c, d, x, y, item.width].every(Number.isFinite)) return null
+  if (item.str === '' && !item.hasEOL) return null
+  return {
+    text: item.str,
+    x,
+    y,
+    width: item.width,
+    size: Math.hypot(c, d) || item.height,
+    angle: (Math.atan2(b, a) * 180) / Math.PI,
+    font: item.fontName,
+    endsLine: item.hasEOL,
+  }
+}
+
+async function getTitle(pdf: PDFDocumentProxy): Promise<string | null> {
+  const { info } = await pdf.getMetadata()
+  const title: unknown = 'Title' in info ? info.Title : null
+  return typeof title === 'string' && title.trim() !== '' ? title.trim() : null
+}
+
+function finite(value: number, otherwise: number): number {
+  return Number.isFinite(value) && value !== 0 ? value : otherwise
+}
