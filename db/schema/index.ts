@@ -1,0 +1,5 @@
+export * from './people'
+export * from './manuscripts'
+export * from './audits'
+export * from './reviews'
+export * from './work'
