@@ -1,0 +1,6 @@
+export { defaultHouseRules } from './house-rules'
+export { adjust, type AdjustOptions } from './procedures/adjust'
+export { adjustBounds, type Bounds } from './procedures/adjust-bounds'
+export { procedureTable, type ProcedureRow } from './procedures/table'
+export * from './types'
+export * from './vocabulary'

@@ -1,0 +1,67 @@
+import type { Procedure } from '../vocabulary'
+import { adjust, type AdjustOptions } from './adjust'
+import { firstStageLevel } from './bky'
+
+export type Bounds = { low: number[]; high: number[] }
+
+/**
+ * The exact bounds of each adjusted p-value when every p[i] ranges over [low[i], high[i]] on its own. Shapes,
+ * ranges and errors as in `adjust`; RangeError also where `low` and `high` differ in length, in what is NaN, or in
+ * order. Every procedure but the two-stage one is monotone in each p-value, so that the ends of the box give the
+ * bounds. For 'bky' a lower bound may be an infimum that is not attained (the last p just above the level of the
+ * first stage); it is then right to 1e-13.
+ */
+export function adjustBounds(
+  procedure: Procedure,
+  low: readonly number[],
+  high: readonly number[],
+  options: AdjustOptions = {},
+): Bounds {
+  checkBox(low, high)
+  const run = (p: readonly number[]) => adjust(procedure, p, options)
+  if (procedure !== 'bky') return { low: run(low), high: run(high) }
+  return boundTwoStage(low, high, firstStageLevel(options.alpha ?? 0.05), run)
+}
+
+function checkBox(low: readonly number[], high: readonly number[]) {
+  if (low.length !== high.length) throw new RangeError('low and high differ in length')
+  low.forEach((value, i) => {
+    const end = high[i] ?? NaN
+    const ordered = value <= end || (Number.isNaN(value) && Number.isNaN(end))
+    if (!ordered) throw new RangeError(`low[${i}] = ${value} is not at most high[${i}] = ${end}`)
+  })
+}
+
+/**
+ * The two-stage procedure is monotone as long as its first stage rejects all, and as long as it does not; it drops
+ * where the largest p passes `level`. The bounds are those over both regimes. Where every low end lies below the
+ * level, the second regime begins with one p raised just above it, and raising the largest that can be raised
+ * leaves all others lowest; for that one itself the next largest is raised.
+ */
+function boundTwoStage(
+  low: readonly number[],
+  high: readonly number[],
+  level: number,
+  run: (p: readonly number[]) => number[],
+): Bounds {
+  const above = level * (1 + 1e-14)
+  const lows: number[][] = []
+  const highs: number[][] = []
+
+  if (low.every((p) => !(p > level))) {
+    lows.push(run(low))
+    highs.push(run(high.map((p) => Math.min(p, level))))
+    const raisable = low.map((_, i) => i).filter((i) => (high[i] ?? NaN) > level)
+    const [first, second] = raisable.sort((a, b) => (low[b] ?? 0) - (low[a] ?? 0))
+    for (const raised of [first, second]) {
+      if (raised !== undefined) lows.push(run(low.map((p, i) => (i === raised ? above : p))))
+    }
+  } else {
+    lows.push(run(low))
+  }
+  if (high.some((p) => p > level)) highs.push(run(high))
+
+  const over = (vectors: number[][], pick: (...values: number[]) => number) =>
+    low.map((_, i) => pick(...vectors.map((vector) => vector[i] ?? NaN)))
+  return { low: over(lows, Math.min), high: over(highs, Math.max) }
+}
