@@ -1,6 +1,7 @@
 export { defaultHouseRules } from './house-rules'
 export { adjust, type AdjustOptions } from './procedures/adjust'
 export { adjustBounds, type Bounds } from './procedures/adjust-bounds'
+export { logTail, tail, type TailTest } from './distributions/tail'
 export { procedureTable, type ProcedureRow } from './procedures/table'
 export * from './types'
 export * from './vocabulary'

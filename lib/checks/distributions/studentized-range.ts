@@ -1,0 +1,60 @@
+import { normalDensity, normalLogUpper, normalUpper } from './normal'
+import { averageOverScale } from './scale-mixture'
+
+/** Grid of the trapezoidal rule for the largest of `groups` normals: its values do not depend on the range. */
+type Grid = { start: number; step: number; log: Float64Array; weight: Float64Array }
+
+const FIRST = -9
+const LAST = 39
+const grids = new Map<number, Grid>()
+
+/** The step falls with √groups, so that the rule's error, exp(−2π² / (groups step²)), stays below 1e-15. */
+function getGrid(groups: number): Grid {
+  const known = grids.get(groups)
+  if (known !== undefined) return known
+  const step = Math.min(0.3, 0.74 / Math.sqrt(groups))
+  const size = Math.ceil((LAST - FIRST) / step)
+  const log = new Float64Array(size)
+  const weight = new Float64Array(size)
+  for (let j = 0; j < size; j++) {
+    const z = FIRST + j * step
+    log[j] = normalLogUpper(-z)
+    weight[j] = step * groups * normalDensity(z) * Math.exp((groups - 1) * (log[j] ?? 0))
+  }
+  const grid = { start: FIRST, step, log, weight }
+  grids.set(groups, grid)
+  return grid
+}
+
+/**
+ * P(range of `groups` independent standard normals > w), groups >= 2, w >= 0, with relative accuracy:
+ * ∫ k φ(z) [Φ(z)^(k−1) − (Φ(z) − Φ(z − w))^(k−1)] dz over the largest value z.
+ * Source: Hartley (1942), Biometrika 32, 334–348; the difference of powers written so that it does not cancel.
+ */
+export function rangeUpper(w: number, groups: number): number {
+  if (w > 60) return 0
+  const { start, step, log, weight } = getGrid(groups)
+  const from = Math.max(0, Math.floor((w / 2 - 7.5 - start) / step))
+  const to = Math.min(weight.length - 1, Math.ceil((Math.max(9, w / 2 + 7.5) - start) / step))
+  let sum = 0
+  for (let j = from; j <= to; j++) {
+    const share = Math.min(1, normalUpper(w - (start + j * step)) * Math.exp(-(log[j] ?? 0)))
+    sum += (weight[j] ?? 0) * (share === 1 ? 1 : -Math.expm1((groups - 1) * Math.log1p(-share)))
+  }
+  return Math.min(1, sum)
+}
+
+/**
+ * P(Q > q) for the studentized range of `groups` >= 2 means on `df` > 0 degrees of freedom (Infinity: known
+ * variance). Relative accuracy about 1e-10 down to 1e-100.
+ */
+export function studentizedRangeUpper(q: number, groups: number, df: number): number {
+  if (q <= 0) return 1
+  if (q === Infinity) return 0
+  const pairs = Math.log(groups * (groups - 1))
+  const logBound = (s: number) => Math.min(0, pairs + normalLogUpper(q * s * Math.SQRT1_2))
+  return Math.min(
+    1,
+    averageOverScale(df, (s) => rangeUpper(q * s, groups), logBound),
+  )
+}

@@ -1,0 +1,94 @@
+import { expect, test } from 'vitest'
+import { logTail, tail } from '@/lib/checks'
+import { readReference, toNumber, type Printed } from '../reference'
+
+// mpmath at 50 digits, rounded to double; the studentized range by double quadrature in R (header of dists.json).
+// Tolerance: 1e-11 relative, 1e-9 where df >= 1e5, p < 1e-100 or the range is studentized; logarithms near 0
+// absolutely to 1e-15.
+type Row = {
+  fn: string
+  x: Printed
+  df?: Printed
+  df1?: Printed
+  df2?: Printed
+  upper: Printed
+  log_upper: Printed
+}
+type Range = { q: number; nmeans: number; df: Printed; upper: number }
+type Correlation = { r: number; n: number; p: number; log_p: number }
+const reference = readReference<{ probability: Row[]; correlation: Correlation[]; ptukey: Range[] }>(
+  'dists.json',
+)
+
+function compare(found: number, wanted: number, tolerance: number, what: unknown) {
+  if (found === wanted) return
+  expect(Math.abs(found - wanted) / Math.abs(wanted), JSON.stringify(what)).toBeLessThan(tolerance)
+}
+
+const FUNCTIONS = [
+  ['pnorm', 'z', 60],
+  ['pt', 't', 300],
+  ['pf', 'F', 300],
+  ['pchisq', 'chi2', 250],
+] as const
+
+for (const [fn, kind, least] of FUNCTIONS) {
+  test(`upper tails of ${kind} agree with 50-digit values down to 1e-300`, () => {
+    const rows = reference.probability.filter((row) => row.fn === fn)
+    expect(rows.length).toBeGreaterThanOrEqual(least)
+    for (const row of rows) {
+      const df = [row.df, row.df1, row.df2].filter((value) => value !== undefined).map(toNumber)
+      const hard = toNumber(row.upper) < 1e-100 || df.some((value) => Number.isFinite(value) && value >= 1e5)
+      const tolerance = hard ? 1e-9 : 1e-11
+      compare(tail(kind, toNumber(row.x), df, 1), toNumber(row.upper), tolerance, row)
+      const log = logTail(kind, toNumber(row.x), df, 1)
+      if (Math.abs(log - toNumber(row.log_upper)) > 1e-15)
+        compare(log, toNumber(row.log_upper), tolerance, row)
+    }
+  })
+}
+
+test('two-sided p-values of correlations agree with 50-digit values', () => {
+  expect(reference.correlation.length).toBeGreaterThanOrEqual(80)
+  for (const row of reference.correlation) {
+    compare(tail('r', row.r, [row.n - 2]), row.p, 1e-11, row)
+    const log = logTail('r', row.r, [row.n - 2])
+    if (Math.abs(log - row.log_p) > 1e-15) compare(log, row.log_p, 1e-11, row)
+  }
+})
+
+test('upper tails of the studentized range agree with the quadrature in R down to 1e-120', () => {
+  expect(reference.ptukey.length).toBeGreaterThanOrEqual(600)
+  for (const row of reference.ptukey)
+    compare(tail('q', row.q, [row.nmeans, toNumber(row.df)]), row.upper, 1e-9, row)
+})
+
+test('the range of two means is √2 |t|', () => {
+  for (const [t, df] of [
+    [0.3, 1],
+    [2.1, 1.5],
+    [4, 12],
+    [9, 40],
+    [30, 200],
+  ] as const) {
+    compare(tail('q', Math.SQRT2 * t, [2, df]), tail('t', t, [df]), 1e-9, { t, df })
+  }
+})
+
+test('beyond what a double holds the logarithm goes on', () => {
+  expect(tail('z', 60, [])).toBe(0)
+  // Mills' ratio: log P(Z > x) = −x²/2 − log(x √(2π)) + log(1 − 1/x² + …)
+  expect(logTail('z', 60, [], 1)).toBeCloseTo(-1800 - Math.log(60 * Math.sqrt(2 * Math.PI)) - 1 / 3600, 6)
+  expect(tail('F', 1e300, [4, 30])).toBe(0)
+  expect(logTail('F', 1e300, [4, 30])).toBeLessThan(-9000)
+})
+
+test('degrees of freedom that a test does not have are refused', () => {
+  expect(() => tail('t', 2, [])).toThrow(RangeError)
+  expect(() => tail('z', 2, [4])).toThrow(RangeError)
+  expect(() => tail('F', 2, [4, 0])).toThrow(RangeError)
+  expect(() => tail('chi2', 2, [Infinity])).toThrow(RangeError)
+  expect(() => tail('q', 2, [2.5, 10])).toThrow(RangeError)
+  expect(() => tail('r', 1.2, [10])).toThrow(RangeError)
+  expect(tail('t', NaN, [3])).toBeNaN()
+})
