@@ -1,0 +1,58 @@
+import type { Claim, Family, Report } from '@/lib/checks/types'
+import { callWords, nameOfReport } from './describe-dot'
+import { printedP, recomputedInterval } from './printed-p'
+import { steppedFor, thresholdOf } from './thresholds'
+
+/** The content of the staircase for those who do not see the picture: ranks, values, thresholds, calls. */
+export function StaircaseTable(props: {
+  family: Family
+  reports: readonly Report[]
+  claim: Claim | null
+  alpha: number
+}) {
+  const { family, claim, alpha } = props
+  const stepped = steppedFor(claim?.procedure ?? null)
+  const m = Math.max(family.m.due ?? family.m.printed, 1)
+  const rows = family.decisions
+    .map((decision) => ({
+      decision,
+      report: props.reports.find((report) => report.id === decision.report),
+    }))
+    .filter((row): row is typeof row & { report: Report } => row.report !== undefined)
+    .sort((a, b) => a.report.value - b.report.value || a.report.low - b.report.low)
+  return (
+    <table className="w-full text-left text-xs tabular-nums">
+      <caption className="pb-1 text-left">
+        {`The p-values of ${family.label} by rank, with the threshold at m = ${m} and α = ${alpha}`}
+      </caption>
+      <thead>
+        <tr className="border-b border-rule">
+          <th scope="col">Rank</th>
+          <th scope="col">Comparison</th>
+          <th scope="col">Printed</th>
+          <th scope="col">Threshold</th>
+          <th scope="col">Adjusted</th>
+          <th scope="col">Call</th>
+        </tr>
+      </thead>
+      <tbody>
+        {rows.map(({ decision, report }, index) => (
+          <tr key={report.id} className="border-b border-rule">
+            <td>{index + 1}</td>
+            <th scope="row" className="font-normal">
+              {nameOfReport(report)}
+            </th>
+            <td>{printedP(report)}</td>
+            <td>
+              {report.scale === 'adjusted' || !stepped
+                ? alpha
+                : Number(thresholdOf[stepped](Math.min(index + 1, m), m, alpha).toPrecision(3))}
+            </td>
+            <td>{recomputedInterval(decision.adjusted, report.decimals)}</td>
+            <td>{callWords(decision)}</td>
+          </tr>
+        ))}
+      </tbody>
+    </table>
+  )
+}
