@@ -1,7 +1,28 @@
+export { dunnettUpper } from './distributions/dunnett'
+export { studentizedRangeUpper } from './distributions/studentized-range'
+export { logTail, tail, type TailTest } from './distributions/tail'
+export { dunnettQuantile, studentizedRangeQuantile, upperQuantile } from './distributions/upper-quantile'
 export { defaultHouseRules } from './house-rules'
+export { pBounds } from './numbers/p-bounds'
+export { parsePrinted, parsePrintedP, type PrintedNumber, type PrintedP } from './numbers/parse-printed'
+export { printedInterval, roundingInterval, type Interval } from './numbers/printed-interval'
 export { adjust, type AdjustOptions } from './procedures/adjust'
 export { adjustBounds, type Bounds } from './procedures/adjust-bounds'
-export { logTail, tail, type TailTest } from './distributions/tail'
+export { dunnettLoadings, pDunnettFromT } from './procedures/dunnett'
+export { pGamesHowellFromWelch } from './procedures/games-howell'
+export { pScheffeFromT } from './procedures/scheffe'
 export { procedureTable, type ProcedureRow } from './procedures/table'
+export { pTukeyFromT } from './procedures/tukey'
+export { fits, type FitOptions } from './recover/fits'
+export {
+  fitsFromStatistics,
+  type PrintedStatistic,
+  type StatisticFit,
+  type StatisticFitOptions,
+} from './recover/fits-from-statistics'
+export { thresholdFits, type ThresholdFit } from './recover/threshold-fits'
+export { familyWiseError, type DependenceOptions } from './sensitivity/family-wise-error'
+export { powerCost, powerOfTTest, sampleSizeOfTTest, type PowerDesign } from './sensitivity/power'
+export { survivesUpTo, survivesUpToByBh, survivesUpToByHolm } from './sensitivity/survives-up-to'
 export * from './types'
 export * from './vocabulary'

@@ -22,7 +22,8 @@ export function productNormalUpper(d: number, loadings: readonly number[], sides
   const steepest = distinct.reduce((largest, [l]) => Math.max(largest, Math.abs(l)), 0)
   const reach = WIDTH + Math.max(0, steepest * d)
   let sum = 0
-  for (let z = -Math.ceil(reach / step) * step; z <= reach; z += step) {
+  for (let j = -Math.ceil(reach / step); j <= reach / step; j++) {
+    const z = j * step
     let log = 0
     for (const [loading, times] of distinct) {
       const rest = Math.sqrt((1 - loading) * (1 + loading))

@@ -7,7 +7,8 @@ const REACH = 42
  * E f(S) for S = √(χ²_df / df), df > 0 (Infinity: S = 1): what turns a probability at known variance into one with
  * the variance estimated on `df` degrees of freedom. `f` is a smooth function of s > 0 in [0, 1]. `logBound(s)` is a
  * concave upper bound of log f(s) in log s, by which the stretch is found where density times f is not negligible,
- * so that the relative accuracy holds far into the tail (about 1e-11).
+ * so that the relative accuracy holds far into the tail (about 1e-11). `slope`: about the largest slope of f in
+ * log s, where it exceeds 1.
  * Source: trapezoidal rule in log s, which converges geometrically for an analytic integrand that dies away at both
  * ends; Trefethen and Weideman (2014), SIAM Review 56, 385–458.
  */
@@ -15,6 +16,7 @@ export function averageOverScale(
   df: number,
   f: (s: number) => number,
   logBound: (s: number) => number = () => 0,
+  slope: number = 1,
 ): number {
   if (df === Infinity) return f(1)
   const a = 0.5 * df
@@ -24,7 +26,7 @@ export function averageOverScale(
 
   const peak = findPeak(bound, -40, 3)
   const floor = bound(peak) - REACH
-  const step = Math.min(0.1, 0.42 / Math.sqrt(df))
+  const step = Math.min(0.1, 0.42 / Math.sqrt(df), 0.74 / slope)
   let sum = 0
   for (let u = peak; bound(u) > floor; u -= step) sum += Math.exp(logDensity(u)) * f(Math.exp(u))
   for (let u = peak + step; bound(u) > floor; u += step) sum += Math.exp(logDensity(u)) * f(Math.exp(u))
