@@ -4,12 +4,12 @@ import { assignments, conflicts, manuscripts } from '@/db/schema'
 import type { Standing } from '@/lib/rules/permissions'
 import type { Actor } from '@/lib/rules/roles'
 
-/** How the actor stands to a manuscript: own, offered, assigned; and whether a conflict is open. */
+/** How the actor stands to a manuscript. Nothing in it tells whether the actor may know of the manuscript. */
 export function getStanding(db: Reader, actor: Actor, manuscriptId: string): Standing {
-  const own = db
-    .select({ id: manuscripts.id })
+  const row = db
+    .select({ submitterId: manuscripts.submitterId, state: manuscripts.state })
     .from(manuscripts)
-    .where(and(eq(manuscripts.id, manuscriptId), eq(manuscripts.submitterId, actor.id)))
+    .where(eq(manuscripts.id, manuscriptId))
     .get()
   const mine = db
     .select({ status: assignments.status })
@@ -35,10 +35,11 @@ export function getStanding(db: Reader, actor: Actor, manuscriptId: string): Sta
     .get()
   return {
     relations: [
-      ...(own ? (['own'] as const) : []),
+      ...(row?.submitterId === actor.id ? (['own'] as const) : []),
       ...(mine.some((a) => a.status === 'offered') ? (['offered'] as const) : []),
       ...(mine.some((a) => a.status !== 'offered') ? (['assigned'] as const) : []),
     ],
     conflicted: conflict !== undefined,
+    handedIn: row !== undefined && row.state !== 'draft',
   }
 }

@@ -66,20 +66,26 @@ export const PERMISSIONS = {
 
 export type Permission = keyof typeof PERMISSIONS
 
-/** Facts about one manuscript and one person. A conflict takes away every grant but that of the submitter's own. */
+/**
+ * Facts about one manuscript and one person. Three of them take away every grant but that of the submitter's
+ * own: an open conflict; that it is one's own manuscript, which nobody may judge or manage in another role; and
+ * that it is not handed in yet, or not there at all.
+ */
 export type Standing = {
   readonly relations: readonly Exclude<ManuscriptRelation, 'any'>[]
   readonly conflicted: boolean
+  readonly handedIn: boolean
 }
 
-export const noStanding: Standing = { relations: [], conflicted: false }
+export const noStanding: Standing = { relations: [], conflicted: false, handedIn: true }
 
 /** True when one of the actor's roles is granted `permission` for this standing. */
 export function may(actor: Actor, permission: Permission, standing: Standing = noStanding): boolean {
   const grants: Grants = PERMISSIONS[permission]
+  const barred = standing.conflicted || !standing.handedIn || standing.relations.includes('own')
   return actor.roles.some((role) =>
     (grants[role] ?? []).some((needed) => {
-      if (standing.conflicted && needed !== 'own') return false
+      if (barred && needed !== 'own') return false
       return needed === 'any' || standing.relations.includes(needed)
     }),
   )
