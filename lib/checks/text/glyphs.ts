@@ -1,0 +1,107 @@
+/**
+ * Characters of a run as the engine reads them, each with its share of the run's width.
+ * Ligatures, full-width forms and mathematical alphabets become plain letters; odd spaces become a space;
+ * zero-width characters and soft hyphens inside a word disappear; raised and lowered digit characters
+ * (U+00B2, U+2075, U+2082 …) keep their level so that `write-line` can mark them.
+ */
+export type Glyph = { char: string; level: -1 | 0 | 1; from: number; to: number }
+
+const raised = '⁰¹²³⁴⁵⁶⁷⁸⁹⁺⁻⁼⁽⁾ⁿ'
+const raisedPlain = '0123456789+-=()n'
+const lowered = '₀₁₂₃₄₅₆₇₈₉₊₋₌₍₎'
+const loweredPlain = '0123456789+-=()'
+
+const plain: Readonly<Record<string, string>> = {
+  '\u2217': '*',
+  '\u204e': '*',
+  '\uff0a': '*',
+  '\u2212': '-',
+  '\u2010': '-',
+  '\u2011': '-',
+  '\ufe63': '-',
+  '\u2a7d': '≤',
+  '\u2a7e': '≥',
+  '\u2266': '≤',
+  '\u2267': '≥',
+  '\u2264': '≤',
+  '\u2265': '≥',
+  '\u2a85': '≤',
+  '\u2a86': '≥',
+  '\u02c2': '<',
+  '\u02c3': '>',
+  '\u3008': '<',
+  '\u3009': '>',
+  '\u00b5': 'μ',
+  '\u2019': '’',
+  '\u2236': ':',
+  '\u2223': '|',
+  '\u0394': 'Δ',
+  '\u2206': 'Δ',
+  '\u2126': 'Ω',
+  '\u03f5': 'ε',
+  '\u03d5': 'φ',
+}
+
+// ligatures, full-width forms, mathematical alphabets, letterlike symbols: what NFKC makes plain
+const compatible = /[\ufb00-\ufb06\uff01-\uff5e\u2100-\u214f\u{1d400}-\u{1d7ff}]/u
+// spaces of any width
+const space = /[\s\u00a0\u1680\u2000-\u200a\u202f\u205f\u3000]/u
+// zero-width characters, joiners, direction marks, controls that no font shows
+const invisible =
+  /[\u200b-\u200f\u2060-\u2064\ufeff\u202a-\u202e\u0000-\u0008\u000b\u000c\u000e-\u001f\u007f]/u
+
+const widths = new Map<string, number>()
+for (const [chars, width] of [
+  ["ijl.,:;'|!‘’`·", 0.28],
+  ['ftrI()[]{}-/\\"^°*‐', 0.36],
+  ['sczJ“”', 0.45],
+  ['mMW%@—', 0.86],
+  ['wANOQGDHUVKXYRCBT&ÆŒ', 0.7],
+  ['+=<>−±×≤≥≈~∼÷', 0.7],
+] as const)
+  for (const char of chars) widths.set(char, width)
+
+/** Rough advance of a character as a fraction of the font size, as in a common text face. */
+export function roughWidth(char: string): number {
+  const known = widths.get(char)
+  if (known !== undefined) return known
+  if (char === ' ') return 0.27
+  return char >= 'A' && char <= 'Z' ? 0.64 : 0.5
+}
+
+/**
+ * Splits a run's text into glyphs between `from` and `to` along the baseline. A space is kept as ' '.
+ * `even` for monospaced fonts, where every character has the same advance.
+ */
+export function readGlyphs(text: string, from: number, to: number, even: boolean): Glyph[] {
+  const chars = [...text]
+  const shares = chars.map((char) =>
+    invisible.test(char) ? 0 : even ? 1 : roughWidth(space.test(char) ? ' ' : char),
+  )
+  const total = shares.reduce((sum, share) => sum + share, 0) || 1
+  const glyphs: Glyph[] = []
+  let at = from
+  chars.forEach((char, index) => {
+    const start = at
+    at += ((shares[index] ?? 0) / total) * (to - from)
+    if (invisible.test(char)) return
+    const read = readCharacter(char)
+    const wide = (at - start) / Math.max(1, read.chars.length)
+    read.chars.forEach((one, part) =>
+      glyphs.push({ char: one, level: read.level, from: start + part * wide, to: start + (part + 1) * wide }),
+    )
+  })
+  return glyphs
+}
+
+function readCharacter(char: string): { chars: string[]; level: -1 | 0 | 1 } {
+  if (space.test(char)) return { chars: [' '], level: 0 }
+  const up = raised.indexOf(char)
+  if (up >= 0) return { chars: [raisedPlain[up] ?? char], level: 1 }
+  const down = lowered.indexOf(char)
+  if (down >= 0) return { chars: [loweredPlain[down] ?? char], level: -1 }
+  const known = plain[char]
+  if (known !== undefined) return { chars: [known], level: 0 }
+  if (compatible.test(char)) return { chars: [...char.normalize('NFKC')], level: 0 }
+  return { chars: [char], level: 0 }
+}

@@ -1,0 +1,169 @@
+import type { LaidOut, PdfTable, Place, ReadDocument } from '../types'
+import { readFlow, type FlowItem } from './flow'
+import { dropFurniture } from './furniture'
+import { depthOf, kindOfHeading, readRunIn, stripNumber } from './headings'
+import { textOf, isFigureCaption } from './captions'
+import { toParts, type Paragraph, type Part, type Usual } from './paragraphs'
+import { joinRows, readVocabulary, toProse, type Section, type Vocabulary } from './prose'
+import type { FoundTable } from './tables'
+import { readFrames, type Frame } from './words'
+import type { Origin } from './write-line'
+
+/**
+ * Makes readable text and tables of a document's positioned runs. Never throws on content.
+ *
+ * Conventions of the text that the extractors read:
+ * paragraphs are separated by '\n\n'; a line break inside a paragraph is one space; words broken at a line's
+ * end are whole again. Raised characters follow '^', lowered ones '_' ('10^-5', 'F_2,38', '12.3^a',
+ * 'p_adj'); χ² is 'χ2'; raised asterisks and daggers stand plain ('0.03*'). Minus signs, and dashes that
+ * stand for one before a digit, are '-'; dashes between numbers and between words stay '–'. All spaces are
+ * ' '. Ligatures are letters. A mid-dot decimal is '.'.
+ */
+export function layOut(document: ReadDocument): LaidOut {
+  const pages = document.pages.map((page) => ({ page, frames: readFrames(document, page) }))
+  const unread = pages
+    .filter(({ frames }) => frames.length === 0)
+    .map(({ page }) => toUnread(page.number, page.width, page.height))
+  const main = dropFurniture(pages.flatMap(({ frames }) => frames.slice(0, 1)))
+  const usual = findUsual(main)
+  const flows = pages.flatMap(({ page, frames }) => {
+    const kept = main.find((frame) => frame.page === page)
+    const others = frames.slice(1).filter((frame) => frame.words.length > 25)
+    return [...(kept && kept.words.length > 0 ? [kept] : []), ...others].map((frame) => ({
+      page: page.number,
+      items: readFlow(frame, usual.size),
+    }))
+  })
+  return write(toParts(flows, usual), flows, unread)
+}
+
+function toUnread(page: number, width: number, height: number): Place {
+  return { source: 'text', page, row: null, sheet: null, quote: '', boxes: [[0, 0, width, height]] }
+}
+
+/** Size, font and distance of lines of the running text: those of most characters. */
+function findUsual(frames: readonly Frame[]): Usual {
+  const sizes = new Map<number, number>()
+  const fonts = new Map<string, number>()
+  for (const frame of frames)
+    for (const word of frame.words) add(sizes, Math.round(word.size * 2) / 2, word.chars.length)
+  const size = largest(sizes) ?? 10
+  const pitches = new Map<number, number>()
+  for (const frame of frames) {
+    let last = Infinity
+    for (const word of frame.words) {
+      if (Math.abs(word.size - size) > 0.5) continue
+      add(fonts, word.font, word.chars.length)
+      const drop = last - word.v
+      if (drop > 0.9 * size && drop < 3.2 * size) add(pitches, Math.round(drop * 2) / 2, 1)
+      last = word.v
+    }
+  }
+  return { size, font: largest(fonts) ?? '', pitch: largest(pitches) ?? 1.2 * size }
+}
+
+function add<K>(counts: Map<K, number>, key: K, by: number): void {
+  counts.set(key, (counts.get(key) ?? 0) + by)
+}
+
+function largest<K>(counts: Map<K, number>): K | null {
+  let best: K | null = null
+  let most = 0
+  for (const [key, count] of counts)
+    if (count > most) {
+      most = count
+      best = key
+    }
+  return best
+}
+
+function write(parts: readonly Part[], flows: readonly { items: FlowItem[] }[], unread: Place[]): LaidOut {
+  const vocabulary = readVocabulary(linesOf(flows))
+  const chunks: string[] = []
+  const origins: Origin[] = []
+  const tables: PdfTable[] = []
+  const heads: { at: number; text: string; kind: Section['kind'] | null; depth: number }[] = []
+  let length = 0
+  for (const part of parts) {
+    if (part.kind === 'table') {
+      tables.push(toTable(part.table, part.page, length, vocabulary))
+      continue
+    }
+    const written = joinRows(part.rows, vocabulary)
+    if (written.text.trim() === '') continue
+    if (length > 0) {
+      chunks.push('\n\n')
+      origins.push(null, null)
+      length += 2
+    }
+    noteHeading(heads, part, written.text, length)
+    chunks.push(written.text)
+    for (const origin of written.origins) origins.push(origin)
+    length += written.text.length
+  }
+  const text = chunks.join('')
+  return { prose: toProse(text, origins, toSections(heads, length)), tables, unread }
+}
+
+function* linesOf(flows: readonly { items: FlowItem[] }[]): Generator<string> {
+  for (const { items } of flows) for (const item of items) if (item.kind === 'line') yield textOf(item.row)
+}
+
+function noteHeading(
+  heads: { at: number; text: string; kind: Section['kind'] | null; depth: number }[],
+  part: Paragraph,
+  text: string,
+  at: number,
+): void {
+  const run = part.kind === 'heading' ? null : readRunIn(text)
+  if (run) heads.push({ at, text: run.heading, kind: run.kind, depth: 1 })
+  else if (part.kind === 'heading') heads.push({ at, text, kind: kindOfHeading(text), depth: depthOf(text) })
+  else if (part.kind === 'aside' && isFigureCaption(text) && lastKind(heads) === 'references')
+    heads.push({ at, text: '', kind: 'other', depth: 1 })
+}
+
+function lastKind(heads: readonly { kind: Section['kind'] | null }[]): Section['kind'] | null {
+  for (let i = heads.length - 1; i >= 0; i--) {
+    const kind = heads[i]?.kind
+    if (kind) return kind
+  }
+  return null
+}
+
+function toSections(
+  heads: readonly { at: number; text: string; kind: Section['kind'] | null; depth: number }[],
+  length: number,
+): Section[] {
+  if (length === 0) return []
+  const sections: Section[] = []
+  let current: Section['kind'] = 'title'
+  let start = 0
+  let heading = ''
+  for (const head of heads) {
+    if (head.kind === null && current === 'title') continue
+    if (head.at > start) sections.push({ kind: current, heading, start, end: head.at })
+    current = head.kind ?? current
+    heading = stripNumber(head.text)
+    start = head.at
+  }
+  sections.push({
+    kind: sections.length === 0 && start === 0 && current === 'title' ? 'other' : current,
+    heading,
+    start,
+    end: length,
+  })
+  return sections
+}
+
+function toTable(found: FoundTable, page: number, offset: number, vocabulary: Vocabulary): PdfTable {
+  return {
+    page,
+    number: found.number,
+    caption: joinRows(found.caption, vocabulary).text,
+    notes: joinRows(found.notes, vocabulary).text,
+    columns: found.columns.length,
+    header: found.header,
+    rows: found.body,
+    offset,
+  }
+}

@@ -1,0 +1,166 @@
+import type { Box, PdfCell } from '../types'
+import type { Row } from './rows'
+import type { Column } from './table-columns'
+import { toPageBox, type Word } from './words'
+import { writeLine } from './write-line'
+
+// numbers, with relation, sign, percent, stars or marks: "<0.001", "-2.46", ".03*", "12.9 ± 3", "2e-16 ***", "–"
+const numeric = /^[<>≤≥=~≈]?\s*[-+±–]?\s*(?:\d|[.·]\d)|^[–—-]$/
+
+export function isNumeric(text: string): boolean {
+  return numeric.test(text.trim())
+}
+
+type Line = { cells: Word[][]; row: Row; spans: { from: number; to: number; words: Word[] }[] }
+
+/** Puts every row's words into the columns; rows above the first row of numbers are the header. */
+export function fillCells(
+  rows: readonly Row[],
+  columns: readonly Column[],
+): { header: PdfCell[][]; body: PdfCell[][] } {
+  const lines = rows.map((row) => toLine(row, columns))
+  const first = lines.findIndex((line) => isBody(line))
+  const headEnd = first < 0 ? Math.min(1, lines.length) : first
+  const header = lines.slice(0, headEnd).map((line) => toCells(line, columns.length, true))
+  const merged = mergeWrapped(lines.slice(headEnd))
+  return { header, body: merged.map((line) => toCells(line, columns.length, false)) }
+}
+
+function toLine(row: Row, columns: readonly Column[]): Line {
+  const cells: Word[][] = columns.map(() => [])
+  const spans: Line['spans'] = []
+  for (const segment of row.segments) {
+    for (const piece of cut(segment.words, columns)) {
+      const u0 = Math.min(...piece.map((w) => w.u0))
+      const u1 = Math.max(...piece.map((w) => w.u1))
+      const hit = columns.map((c, i) => ({ i, overlap: Math.min(u1, c.to) - Math.max(u0, c.from) }))
+      const over = hit.filter((h) => h.overlap > 1)
+      const best = hit.reduce((a, b) => (b.overlap > a.overlap ? b : a))
+      if (over.length > 1) spans.push({ from: over[0]?.i ?? 0, to: over.at(-1)?.i ?? 0, words: piece })
+      else cells[best.i]?.push(...piece)
+    }
+  }
+  return { cells, row, spans }
+}
+
+/** Cuts a piece at the gaps between columns wherever no word stands in the gap. */
+function cut(words: readonly Word[], columns: readonly Column[]): Word[][] {
+  const columnOf = (word: Word) => {
+    const middle = (word.u0 + word.u1) / 2
+    let best = 0
+    let distance = Infinity
+    columns.forEach((c, i) => {
+      const d = middle < c.from ? c.from - middle : middle > c.to ? middle - c.to : 0
+      if (d < distance) {
+        distance = d
+        best = i
+      }
+    })
+    return best
+  }
+  const pieces: Word[][] = []
+  let last: Word | null = null
+  for (const word of words) {
+    const gapWidth: number = last ? word.u0 - last.u1 : Infinity
+    const boundary =
+      last !== null &&
+      columnOf(last) !== columnOf(word) &&
+      word.level === 0 &&
+      columns.some((c, i) => {
+        const next = columns[i + 1]
+        return (
+          next !== undefined &&
+          last !== null &&
+          last.u1 <= next.from - 0.5 &&
+          word.u0 >= c.to + 0.5 &&
+          gapWidth >= Math.min(0.5 * (next.from - c.to), 0.8 * word.size)
+        )
+      })
+    if (!last || boundary) pieces.push([word])
+    else pieces.at(-1)?.push(word)
+    last = word
+  }
+  return pieces
+}
+
+function isBody(line: Line): boolean {
+  const filled = line.cells
+    .map((words, i) => ({ i, text: writeLine(words).text }))
+    .filter((c) => c.text !== '')
+  const rest = filled.length > 1 ? filled.filter((c) => c.i > 0) : filled
+  if (filled.length < 2) return false
+  return rest.filter((c) => isNumeric(c.text)).length >= 0.5 * rest.length
+}
+
+/** Labels that wrap: a line with nothing but a label that runs on into the next line, or from the last one. */
+function mergeWrapped(lines: readonly Line[]): Line[] {
+  const merged: Line[] = []
+  const pitches = lines.slice(1).map((line, i) => (lines[i]?.row.v ?? 0) - line.row.v)
+  const usual = pitches.length > 0 ? Math.max(...pitches) : 0
+  lines.forEach((line, index) => {
+    const last = merged.at(-1)
+    const pitch = pitches[index - 1] ?? Infinity
+    const onlyLabel = isLabelOnly(line)
+    if (last && onlyLabel && pitch < 1.5 * line.row.size && runsOn(last, line, pitch, usual)) {
+      line.cells.forEach((words, i) => last.cells[i]?.push(...words))
+      last.spans.push(...line.spans)
+    } else if (last && isLabelOnly(last) && !onlyLabel && runsInto(last, line)) {
+      line.cells.forEach((words, i) => last.cells[i]?.push(...words))
+      last.spans.push(...line.spans)
+    } else merged.push({ cells: line.cells.map((c) => [...c]), row: line.row, spans: [...line.spans] })
+  })
+  return merged
+}
+
+function isLabelOnly(line: Line): boolean {
+  return (
+    line.spans.length === 0 &&
+    line.cells.every((words, i) => (i === 0 ? words.length > 0 : words.length === 0))
+  )
+}
+
+function runsOn(last: Line, line: Line, pitch: number, usual: number): boolean {
+  if (isLabelOnly(last)) return false
+  const before = writeLine(last.cells[0] ?? []).text
+  const text = writeLine(line.cells[0] ?? []).text
+  return (
+    /^[\p{Ll}(+&]/u.test(text) || /(?:\bvs\.?|\band|[-–,+&]|\bof|\bor)$/.test(before) || pitch < 0.92 * usual
+  )
+}
+
+function runsInto(last: Line, line: Line): boolean {
+  const before = writeLine(last.cells[0] ?? []).text
+  const text = writeLine(line.cells[0] ?? []).text
+  return /(?:\bvs\.?|\band|[-–+&]|\bof|\bor)$/.test(before) || /^(?:\p{Ll}|vs\b|\+)/u.test(text)
+}
+
+function toCells(line: Line, count: number, header: boolean): PdfCell[] {
+  const groups: Word[][] = Array.from({ length: count }, (_, i) => [...(line.cells[i] ?? [])])
+  for (const span of line.spans)
+    for (let i = span.from; i <= (header ? span.to : span.from); i++) groups[i]?.push(...span.words)
+  return groups.map(toCell)
+}
+
+export function toCell(words: readonly Word[]): PdfCell {
+  if (words.length === 0) return { text: '', boxes: [] }
+  const lines: Word[][] = []
+  for (const word of words) {
+    const line = lines.at(-1)
+    const head = line?.find((w) => w.level === 0) ?? line?.[0]
+    if (line && head && (word.level !== 0 || Math.abs(head.v - word.v) < 0.5 * head.size)) line.push(word)
+    else lines.push([word])
+  }
+  const text = lines.map((line) => writeLine(line).text).join(' ')
+  return { text, boxes: lines.map(boxOf) }
+}
+
+export function boxOf(words: readonly Word[]): Box {
+  let [u0, u1, v0, v1] = [Infinity, -Infinity, Infinity, -Infinity]
+  for (const word of words) {
+    u0 = Math.min(u0, word.u0)
+    u1 = Math.max(u1, word.u1)
+    v0 = Math.min(v0, word.v + word.drop)
+    v1 = Math.max(v1, word.v + word.rise)
+  }
+  return toPageBox(words[0]?.turn ?? 0, u0, v0, u1, v1)
+}

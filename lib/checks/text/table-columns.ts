@@ -1,0 +1,55 @@
+import type { Row } from './rows'
+import { WIDE_GAP } from './segments'
+import type { Word } from './words'
+
+/** A column's extent; columns are apart from each other by the gaps that the rows have in common. */
+export type Column = { from: number; to: number }
+
+/**
+ * Columns as the stretches between the gaps that (nearly) all full rows share. A gap counts when it is wider
+ * than a word space in common, and wide in at least one row.
+ */
+export function findColumns(rows: readonly Row[]): Column[] {
+  const most = Math.max(0, ...rows.map((row) => row.segments.length))
+  const full = rows.filter((row) => row.segments.length >= Math.max(2, Math.ceil(0.6 * most)))
+  if (full.length === 0) return []
+  const size = Math.max(...full.map((row) => row.size))
+  const words = full.map((row) => row.segments.flatMap((segment) => segment.words))
+  const left = Math.min(...full.map((row) => row.u0))
+  const right = Math.max(...full.map((row) => row.u1))
+  const step = 0.5
+  const cover = new Uint16Array(Math.max(1, Math.ceil((right - left) / step) + 1))
+  for (const row of words) {
+    for (const word of row) {
+      const a = Math.max(0, Math.floor((word.u0 - left) / step))
+      const b = Math.min(cover.length - 1, Math.ceil((word.u1 - left) / step))
+      for (let i = a; i < b; i++) cover[i] = (cover[i] ?? 0) + 1
+    }
+  }
+  const allowed = Math.floor(full.length * 0.08)
+  const gaps: Column[] = []
+  let open = -1
+  for (let i = 0; i < cover.length; i++) {
+    const clear = (cover[i] ?? 0) <= allowed
+    if (clear && open < 0) open = i
+    if (!clear && open >= 0) {
+      const gap = { from: left + open * step, to: left + i * step }
+      if (gap.to - gap.from >= 0.35 * size && words.some((row) => isWide(row, gap, size))) gaps.push(gap)
+      open = -1
+    }
+  }
+  const edges = [left, ...gaps.flatMap((gap) => [gap.from, gap.to]), right]
+  const columns: Column[] = []
+  for (let i = 0; i + 1 < edges.length; i += 2) columns.push({ from: edges[i] ?? 0, to: edges[i + 1] ?? 0 })
+  return columns
+}
+
+function isWide(row: readonly Word[], gap: Column, size: number): boolean {
+  let before = -Infinity
+  let after = Infinity
+  for (const word of row) {
+    if (word.u1 <= gap.from + 1) before = Math.max(before, word.u1)
+    if (word.u0 >= gap.to - 1) after = Math.min(after, word.u0)
+  }
+  return after - before > WIDE_GAP * size && Number.isFinite(after - before)
+}
