@@ -1,0 +1,5 @@
+import { LoadingSteps } from '@/components/ui/mark'
+
+export default function Loading() {
+  return <LoadingSteps />
+}
