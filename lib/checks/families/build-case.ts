@@ -1,0 +1,186 @@
+import { fits } from '../recover/fits'
+import { survivesUpTo } from '../sensitivity/survives-up-to'
+import type { Fit, HouseRules } from '../types'
+import type { ClaimedProcedure, Outcome, Procedure } from '../vocabulary'
+import { worksOnP, worksOnT } from './adjusted'
+import type { Assigned } from './assign'
+import { impliedCall, statedCall } from './calls'
+import type { Case, Exemption, Judged } from './case'
+import type { Cluster, Evidence, Remarks } from './comparison'
+import { adjustFamily, isSignificant, type Yardstick } from './decide'
+import { designOf, type Design } from './design'
+import { expectAdjusted, readSeries, type Series } from './evidence'
+import { findExemption } from './exemption'
+import type { FamilyDraft } from './join-outcomes'
+import { labelOf } from './label'
+import { outcomeOf, whyOf } from './outcome'
+import { weighEvidence } from './weigh-evidence'
+
+export type Setting = { remarks: Remarks; rules: HouseRules; alpha: number; alphaStated: boolean }
+
+/** Judges one family under the claim that speaks for it. `number`: 1, 2 … for the id. */
+export function buildCase(draft: FamilyDraft, setting: Setting, number: number): Case {
+  const { remarks, alpha } = setting
+  const { cluster, assigned } = draft
+  const design = designOf(cluster, assigned?.view ?? null, remarks, draft.alternatives)
+  const claimed = toProcedure(assigned?.view.procedure ?? 'none')
+  const groups = groupsOf(design, assigned)
+  const counts = [...new Set([design.due, assigned?.view.m ?? null, ...design.alternatives])]
+    .flatMap((m) => m ?? [])
+    .map((m) => Math.max(m, cluster.comparisons.length))
+  const expected = expectAdjusted(cluster.comparisons, claimed, [...new Set(counts)], groups, alpha)
+  const series = readSeries(cluster.comparisons, expected, remarks.oneSided)
+  const used = { procedure: claimed, m: assigned?.view.m ?? design.due ?? cluster.comparisons.length }
+  const evidence = cluster.comparisons.map((comparison) => weighEvidence(comparison, series, used))
+  const printed = cluster.comparisons.map((_, i) => evidence[i]?.adjusted ?? null)
+  const found = fitsOf(evidence, printed, design)
+  const effective = isCorrected(assigned, series) ? assigned : null
+  const exemption = findExemption(cluster, design, effective, setting)
+  const procedure = yardstickOf(effective, exemption)
+  const trusted = claimed !== null && found.some((fit) => fit.procedure === claimed && fit.m === design.due)
+
+  const judgeAt = (m: number) => {
+    const yardstick = { procedure, m, groups, alpha }
+    const adjusted = adjustFamily(cluster.comparisons, evidence, yardstick, trusted)
+    return cluster.comparisons.map((comparison, i): Judged => {
+      const due = adjusted[i] ?? { low: 0, high: 1 }
+      const each = evidence[i]
+      const stated = statedCall(comparison)
+      const implied = stated === null ? impliedCall(comparison, effective?.view ?? null, series, alpha) : null
+      return {
+        ...comparison,
+        raw: each?.raw ?? null,
+        conflict: each?.conflict ?? false,
+        printed: each?.adjusted ?? null,
+        due,
+        called: stated ?? implied,
+        implied: stated === null && implied !== null,
+        significant: isSignificant(due, alpha),
+        survivesUpTo: each?.raw ? finite(survivesUpTo(each.raw.high, alpha)) : null,
+      }
+    })
+  }
+  const corrected = effective !== null || exemption !== null
+  const alternatives = design.alternatives.map((m) => ({ m, judged: judgeAt(m) }))
+  const under = alternatives.map(({ m, judged }) => ({ m, outcome: outcomeOf(judged, corrected) }))
+  const settledM = design.due ?? Math.max(...design.alternatives, cluster.comparisons.length)
+  const comparisons =
+    alternatives.length > 0 ? blur(alternatives.map(({ judged }) => judged)) : judgeAt(settledM)
+  const outcome = outcomeUnder(under) ?? outcomeOf(comparisons, corrected)
+  const asPrinted = procedure !== 'raw' && procedure !== 'any' && !worksOnP(procedure) && !worksOnT(procedure)
+  return {
+    family: {
+      id: `family-${number}`,
+      label: labelOf(cluster, design),
+      members: membersOf(cluster),
+      claim: assigned?.view.lead.id ?? null,
+      groups: design.groups.length > 0 ? design.groups.length : null,
+      m: {
+        printed: cluster.comparisons.length,
+        claimed: assigned?.view.m ?? null,
+        due: design.due,
+        why: design.why,
+      },
+      outcome,
+      why: whyOf(comparisons, outcome, { procedure, design, alpha, exemption, under }),
+      decisions: comparisons.map(({ items, called, due, significant, survivesUpTo: upTo }) => ({
+        report: items[0]?.report.id ?? '',
+        called,
+        adjusted: [due.low, due.high],
+        significant,
+        survivesUpTo: upTo,
+      })),
+      fits: found,
+    },
+    kind: cluster.kind,
+    comparisons,
+    assigned,
+    design,
+    procedure,
+    asPrinted,
+    alpha,
+    series,
+    exemption,
+    under,
+  }
+}
+
+function finite(m: number): number | null {
+  return Number.isFinite(m) ? m : null
+}
+
+/** A claim's word for a procedure as the one that is computed; null where it names none. */
+function toProcedure(claimed: ClaimedProcedure): Procedure | null {
+  if (claimed === 'fdr') return 'bh'
+  return claimed === 'unspecified' || claimed === 'none' ? null : claimed
+}
+
+function groupsOf(design: Design, assigned: Assigned): number {
+  const named = design.groups.length
+  const stated = assigned?.view.groups ?? 0
+  if (design.kind === 'many-to-one') return Math.max(named, (design.due ?? 0) + 1)
+  return Math.max(named, stated)
+}
+
+/**
+ * Whether the claim was acted on: a statement on the whole manuscript does not count for a family whose printed
+ * values are the raw ones, held against the full level.
+ */
+function isCorrected(assigned: Assigned, series: readonly Series[]): boolean {
+  if (!assigned || assigned.view.procedure === 'none') return false
+  if (assigned.own) return true
+  const inManuscript = series.filter(({ source }) => source !== 'results-table')
+  return !inManuscript.some(({ is }) => is === 'raw') || inManuscript.some(({ is }) => is === 'adjusted')
+}
+
+/** The procedure that the calls are judged by: Holm where none is claimed, or where control of the family-wise rate is. */
+function yardstickOf(assigned: Assigned, exemption: Exemption | null): Yardstick['procedure'] {
+  if (exemption) return 'raw'
+  if (!assigned) return 'holm'
+  const { procedure, errorRate } = assigned.view
+  const named = toProcedure(procedure)
+  if (procedure === 'unspecified') return 'any'
+  if (named === 'lsd') return 'raw'
+  if (named === 'bh' && errorRate === 'fwer') return 'holm'
+  return named ?? 'holm'
+}
+
+/** What reproduces the printed adjusted values; a list that is too long to tell anything is cut to the family's own m. */
+function fitsOf(evidence: readonly Evidence[], printed: Evidence['adjusted'][], design: Design): Fit[] {
+  const direct = evidence.map(({ raw, adjusted }, i) =>
+    adjusted && raw ? { raw, printed: printed[i] } : null,
+  )
+  const pairs = direct.flatMap((pair) => (pair?.printed ? [{ raw: pair.raw, printed: pair.printed }] : []))
+  if (pairs.length === 0) return []
+  const largest = Math.max(design.due ?? 0, ...design.alternatives, pairs.length)
+  return fits(
+    pairs.map((pair) => pair.printed),
+    pairs.map((pair) => pair.raw),
+    { mMax: Math.max(largest, Math.min(60, 2 * largest)) },
+  )
+}
+
+/** One judgement out of several admissible ones: a decision stands only where all agree. */
+function blur(judgements: readonly Judged[][]): Judged[] {
+  const [first = [], ...rest] = judgements
+  return first.map((judged, i) => {
+    const others = rest.flatMap((list) => list[i] ?? [])
+    const low = Math.min(judged.due.low, ...others.map(({ due }) => due.low))
+    const high = Math.max(judged.due.high, ...others.map(({ due }) => due.high))
+    const agreed = others.every(({ significant }) => significant === judged.significant)
+    return { ...judged, due: { low, high }, significant: agreed ? judged.significant : null }
+  })
+}
+
+function outcomeUnder(under: readonly { m: number; outcome: Outcome }[]): Outcome | null {
+  if (under.length === 0) return null
+  const outcomes = new Set(under.map(({ outcome }) => outcome))
+  return outcomes.size === 1 ? (under[0]?.outcome ?? null) : 'undecidable'
+}
+
+/** What the manuscript prints of the family; a results file stands in only where the manuscript prints nothing of it. */
+function membersOf({ comparisons }: Cluster): string[] {
+  const reports = comparisons.flatMap(({ items }) => items.map(({ report }) => report))
+  const printed = reports.filter(({ place }) => place.source !== 'results-table')
+  return [...new Set((printed.length > 0 ? printed : reports).map(({ id }) => id))]
+}

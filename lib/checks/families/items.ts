@@ -1,0 +1,53 @@
+import type { ReadReport, ReadStatistic, Reading } from '../types'
+import type { Item } from './comparison'
+import { canonicalNames, normaliseName } from './names'
+
+/** Sections whose p-values are never results of this manuscript. */
+const foreign = new Set(['introduction', 'references'])
+
+/**
+ * Why a reported p-value is no member of a family, in words that follow "left out:"; null where it may be one.
+ * Omnibus tests, baseline and assumption checks and interactions are not what a correction counts
+ * (an omnibus F or chi-square has more than one numerator degree of freedom).
+ */
+export function findReasonApart(report: ReadReport, statistic: ReadStatistic | null): string | null {
+  if (foreign.has(report.section)) return 'quoted from elsewhere'
+  const [df] = statistic?.df ?? []
+  const several = df !== undefined && df >= 1.01
+  if (report.role === 'omnibus' || (several && (statistic?.test === 'F' || statistic?.test === 'chi2')))
+    return 'overall tests'
+  if (report.role === 'baseline') return 'checks of the initial values'
+  if (report.role === 'assumption') return 'checks of assumptions'
+  if (report.role === 'interaction') return 'interactions'
+  return null
+}
+
+/** Reports that can be members of a family, with their statistic and with names brought to one form. */
+export function listItems(reading: Reading): Item[] {
+  const statisticOf = new Map(reading.statistics.map((statistic) => [statistic.id, statistic] as const))
+  const members = reading.reports
+    .map((report) => ({ report, statistic: statisticOf.get(report.statistic ?? '') ?? null }))
+    .filter(({ report, statistic }) => findReasonApart(report, statistic) === null)
+  const canon = canonicalNames(members.flatMap(({ report }) => report.comparison ?? []))
+  return members.map(({ report, statistic }) => ({
+    report,
+    statistic,
+    pair: toPair(report.comparison, canon),
+    outcome: report.outcome === null ? null : normaliseName(report.outcome) || null,
+    block: toBlock(report),
+  }))
+}
+
+function toPair(comparison: [string, string] | null, canon: (name: string) => string) {
+  if (!comparison) return null
+  const [a, b] = [canon(comparison[0]), canon(comparison[1])]
+  if (a === '' || b === '' || a === b) return null
+  const pair: [string, string] = a < b ? [a, b] : [b, a]
+  return pair
+}
+
+function toBlock({ place, table, section, heading }: ReadReport): string {
+  if (place.source === 'pdf-table') return `table ${table}`
+  if (place.source === 'results-table') return `sheet ${place.sheet ?? ''} ${heading}`
+  return section === 'results' || section === 'other' ? `text ${section} ${heading}` : `text ${section}`
+}

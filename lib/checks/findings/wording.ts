@@ -1,0 +1,65 @@
+import type { Interval } from '../families/interval'
+import { nameOf } from '../families/outcome'
+import type { Case, Judged } from '../families/case'
+import type { ReadReport, ReadStatistic } from '../types'
+
+/** A p-value for reading: three significant digits, never rounded to 0. */
+export function showP(p: number): string {
+  if (p >= 0.9995) return '1'
+  if (p <= 0) return '0'
+  if (p < 0.0001) return p.toExponential(1).replace('e-', ' × 10^-')
+  return String(Number(p.toPrecision(p < 0.01 ? 2 : 3)))
+}
+
+/** A range for reading: one number where both ends read alike. */
+export function showRange({ low, high }: Interval): string {
+  const [from, to] = [showP(low), showP(high)]
+  return from === to ? from : `${from} to ${to}`
+}
+
+/** The p-value as it is printed, with its relation. */
+export function showReport({ place, relation, value, decimals }: ReadReport): string {
+  const quote = place.quote.trim()
+  // a quote that already reads as a p-value: "p = .03", "P<0.001", "q = 0.02"
+  if (/^[pq]\b[^|]{0,24}$/i.test(quote)) return quote
+  const number = decimals >= 0 && decimals <= 12 ? value.toFixed(decimals) : String(value)
+  return `p ${relation} ${number}`
+}
+
+export function showStatistic({ test, df, value, decimals }: ReadStatistic): string {
+  const symbol = test === 'chi2' ? 'χ²' : test
+  const degrees = df.length > 0 ? `(${df.join(', ')})` : ''
+  return `${symbol}${degrees} = ${value.toFixed(Math.max(0, Math.min(12, decimals)))}`
+}
+
+/** At most `most` entries, then how many more. */
+export function listSome(entries: readonly string[], most = 6): string {
+  const shown = entries.slice(0, most).join('; ')
+  return entries.length > most ? `${shown}; and ${entries.length - most} more` : shown
+}
+
+/** "Bonferroni with m = 6" */
+export function showYardstick({ procedure, design }: Case): string {
+  return design.due === null || procedure === 'raw'
+    ? nameOf(procedure)
+    : `${nameOf(procedure)} with m = ${design.due}`
+}
+
+/** The report by which a comparison is quoted: in the manuscript before the results file, in the results first. */
+export function leadOf({ items }: Pick<Judged, 'items'>): ReadReport | null {
+  const rank = ({ place, section }: ReadReport) =>
+    place.source === 'results-table' ? 3 : place.source === 'pdf-table' ? 1 : section === 'results' ? 0 : 2
+  const sorted = items.map(({ report }) => report).sort((a, b) => rank(a) - rank(b) || a.offset - b.offset)
+  return sorted[0] ?? null
+}
+
+export function reportsOf(comparisons: readonly Pick<Judged, 'items'>[]): string[] {
+  return [...new Set(comparisons.flatMap(({ items }) => items.map(({ report }) => report.id)))]
+}
+
+/** "A – B (p = .021): 0.124 to 0.125" */
+export function showDecision(judged: Judged): string {
+  const lead = leadOf(judged)
+  const printed = lead ? ` (${showReport(lead)})` : ''
+  return `${judged.label}${printed}: ${showRange(judged.due)}`
+}

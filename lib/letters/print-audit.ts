@@ -1,0 +1,135 @@
+import type { Audit, Claim, Decision, Family, Finding, Place, Report } from '@/lib/checks/types'
+
+const width = 100
+
+/** The audit as a plain-text report of at most 100 columns, for the command line. */
+export function printAudit(audit: Audit): string {
+  return [
+    ...headLines(audit),
+    ...audit.families.flatMap((family) => ['', ...familyLines(family, audit)]),
+    '',
+    ...findingLines(audit.findings),
+    '',
+    ...wrap(
+      'This helps a qualified statistician and decides nothing. Numbers can be missed or misread: check each at its place.',
+      '',
+    ),
+    ...wrap(
+      'The policy of the journal or facility, reporting guidelines and, in clinical work, the protocol come first.',
+      '',
+    ),
+  ].join('\n')
+}
+
+function headLines({ document, table, alpha, reports, statistics, claims, engine }: Audit): string[] {
+  const stated = alpha.quote === null ? 'not stated, default' : `"${alpha.quote}"${onPage(alpha.page)}`
+  return [
+    ...wrap(document.title ?? 'Untitled manuscript', ''),
+    `${document.pages} pages; ${reports.length} p-values, ${statistics.length} test statistics; engine ${engine}`,
+    ...(table ? wrap(`Results table: ${table.file}, ${table.rows} rows`, '') : []),
+    ...wrap(`Level: ${alpha.value} (${stated})`, ''),
+    ...(claims.length === 0 ? ['No statement on a correction was found.'] : []),
+    ...claims.flatMap((claim) => wrap(`Claim: ${describeClaim(claim)}`, '  ')),
+  ]
+}
+
+function describeClaim({ procedure, m, threshold, place }: Claim): string {
+  const facts = [procedure, m === null ? null : `m = ${m}`, threshold === null ? null : `level ${threshold}`]
+  return `${facts.filter(Boolean).join(', ')}: "${place.quote}"${onPage(place.page)}`
+}
+
+function familyLines(family: Family, audit: Audit): string[] {
+  const { label, outcome, why, m, decisions, fits } = family
+  const claim = audit.claims.find(({ id }) => id === family.claim)
+  const due = m.due === null ? 'open' : String(m.due)
+  const reproduced = fits.slice(0, 4).map((fit) => `${fit.procedure} (m = ${fit.m})`)
+  return [
+    ...wrap(`${label}: ${outcome.toUpperCase()}`, ''),
+    ...wrap(why, '  ', '  '),
+    ...wrap(`claim: ${claim ? `${claim.procedure}${onPage(claim.place.page)}` : 'none'}`, '  ', '  '),
+    ...wrap(
+      `m: printed ${m.printed}, claimed ${m.claimed ?? 'not stated'}, due ${due} (${m.why})`,
+      '    ',
+      '  ',
+    ),
+    ...(reproduced.length > 0
+      ? wrap(`printed adjusted values follow: ${reproduced.join(', ')}`, '    ', '  ')
+      : []),
+    ...(decisions.length > 0 ? decisionTable(decisions, audit.reports) : []),
+  ]
+}
+
+function decisionTable(decisions: readonly Decision[], reports: readonly Report[]): string[] {
+  const rows = decisions.map((decision) => {
+    const report = reports.find(({ id }) => id === decision.report)
+    const name = report?.comparison?.join(' – ') ?? report?.place.quote ?? decision.report
+    return [
+      cut(name, 34),
+      cut(report?.place.quote ?? '', 20),
+      rangeOf(decision.adjusted),
+      decision.called === null ? '-' : decision.called ? 'significant' : 'not sign.',
+      decision.significant === null ? 'open' : decision.significant ? 'significant' : 'not sign.',
+      decision.survivesUpTo === null ? '-' : String(decision.survivesUpTo),
+    ]
+  })
+  const table = [['comparison', 'printed', 'adjusted', 'called', 'judged', 'up to m'], ...rows]
+  const widths = (table[0] ?? []).map((_, column) =>
+    Math.max(...table.map((row) => (row[column] ?? '').length)),
+  )
+  return table.map((row) =>
+    `  ${row.map((cell, column) => cell.padEnd(widths[column] ?? 0)).join('  ')}`.trimEnd().slice(0, width),
+  )
+}
+
+function rangeOf([low, high]: Decision['adjusted']): string {
+  const [from, to] = [toThree(low), toThree(high)]
+  return from === to ? from : `${from}–${to}`
+}
+
+function toThree(p: number): string {
+  return p !== 0 && p < 0.0001 ? p.toExponential(1) : String(Number(p.toPrecision(3)))
+}
+
+function findingLines(findings: readonly Finding[]): string[] {
+  if (findings.length === 0) return ['No findings.']
+  const body = findings.flatMap(({ id, severity, rule, place, says, asks }) => [
+    ...wrap(`${id}  ${severity}: ${rule}${whereIs(place)}`, '    '),
+    ...wrap(says, '    ', '    '),
+    ...wrap(`Ask: ${asks}`, '    ', '    '),
+  ])
+  return [`Findings: ${findings.length}`, ...body]
+}
+
+function whereIs(place: Place | null): string {
+  if (!place) return ''
+  const row = place.row === null ? '' : `, row ${place.row}`
+  return place.source === 'results-table' ? ` (results table${row})` : onPage(place.page)
+}
+
+function onPage(page: number | null): string {
+  return page === null ? '' : ` (page ${page})`
+}
+
+function cut(text: string, length: number): string {
+  return text.length <= length ? text : `${text.slice(0, length - 1)}…`
+}
+
+/** Breaks at spaces; a word longer than a line is broken where the line ends. */
+function wrap(text: string, indent: string, first = ''): string[] {
+  const lines: string[] = []
+  let line = first
+  for (const word of text.split(/\s+/).filter(Boolean)) {
+    const room = line.trim() === '' ? line + word : `${line} ${word}`
+    if (room.length <= width) {
+      line = room
+      continue
+    }
+    if (line.trim() !== '') lines.push(line)
+    line = indent + word
+    while (line.length > width) {
+      lines.push(line.slice(0, width))
+      line = indent + line.slice(width)
+    }
+  }
+  return [...lines, line]
+}
