@@ -35,6 +35,8 @@ export type Remarks = {
   oneSided: boolean
   sphericity: boolean
   welch: boolean
+  repeated: boolean
+  exact: boolean
   exploratory: boolean
   coPrimary: boolean
   order: { sentence: string; offset: number } | null

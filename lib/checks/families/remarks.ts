@@ -31,6 +31,10 @@ const oneSided = /\b(?:one|single|1)[-\s]?(?:sided|tailed)\b/i
 const sphericity = /greenhouse|geisser|huynh|feldt|spheric/i
 /** "Welch", "unequal variances", "Satterthwaite", "Kenward–Roger" */
 const welch = /welch|satterthwaite|kenward|unequal variance/i
+/** "repeated-measures ANOVA", "within-subjects factor" */
+const repeated = /\brepeated[-\s]measures?\b|\bwithin[-\s](?:subjects?|participants?)\b/i
+/** "Fisher's exact test", "Yates", "continuity correction", "permutation test" */
+const exact = /\bexact\b|\byates\b|\bcontinuity\b|\bpermutation\b|\bbootstrap/i
 /** "exploratory", "hypothesis-generating", "nominal p", "descriptive only" */
 const exploratory =
   /\bexploratory\b|hypothesis[-\s]generating|\bnominal\b|\bdescriptive(?:ly)?\s+(?:only|p|purposes)/i
@@ -61,6 +65,8 @@ export function readRemarks(laidOut: LaidOut): Remarks {
     oneSided: find(oneSided) !== null,
     sphericity: find(sphericity) !== null,
     welch: find(welch) !== null,
+    repeated: find(repeated) !== null,
+    exact: find(exact) !== null,
     exploratory: find(exploratory) !== null,
     coPrimary: find(coPrimary) !== null,
     order: place(ordered),

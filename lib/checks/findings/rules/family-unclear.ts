@@ -1,0 +1,62 @@
+import type { Bench, Case } from '../../families/case'
+import type { Found, RuleRow } from '../finding'
+import { leadOf, listSome, reportsOf, showDecision } from '../wording'
+
+/** A question where the outcome depends on how the family is drawn; a note where it does not. */
+function find({ cases }: Bench): Found[] {
+  const open = cases.filter(({ design }) => design.due === null)
+  const outside = cases.filter(
+    ({ assigned }) => assigned !== null && !assigned.own && assigned.view.m !== null,
+  )
+  return [...open.map(ofAlternatives), ...outside.flatMap(standsOutside)]
+}
+
+function ofAlternatives({ under, family, assigned, comparisons, design }: Case): Found {
+  const depends = new Set(under.map(({ outcome }) => outcome)).size > 1
+  const open = comparisons.filter(({ called, significant }) => called !== null && significant === null)
+  const each = under.map(
+    ({ m, outcome }) =>
+      `with m = ${m} the family ${outcome === 'holds' ? 'holds' : `is judged "${outcome}"`}`,
+  )
+  const effect =
+    open.length > 0 ? ` Adjusted over the admissible m: ${listSome(open.map(showDecision))}.` : ''
+  const [first] = comparisons
+  return {
+    severity: depends || family.outcome === 'undecidable' ? 'question' : 'note',
+    family: family.id,
+    reports: reportsOf(open.length > 0 ? open : comparisons),
+    place: assigned?.view.lead.place ?? (first && leadOf(first)?.place) ?? null,
+    says: `The text allows more than one family: ${design.why}; ${each.join(', ')}.${effect}`,
+    asks: `Please state which tests were corrected together: ${design.alternatives.join(' or ')}.`,
+    cites: ['sampl', 'bender-lange'],
+  }
+}
+
+/** A correction that is said to hold for everything, with a number of tests that fits another family. */
+function standsOutside({ family, assigned, comparisons, design }: Case): Found[] {
+  const view = assigned?.view
+  if (!view || design.due === null || view.m === design.due) return []
+  const [first] = comparisons
+  const wrong = comparisons.filter(
+    ({ called, significant }) => called !== null && significant !== null && called !== significant,
+  )
+  const effect =
+    wrong.length > 0 ? ` As a family of their own, by Holm: ${listSome(wrong.map(showDecision))}.` : ''
+  return [
+    {
+      severity: wrong.length > 0 ? 'question' : 'note',
+      family: family.id,
+      reports: reportsOf(comparisons),
+      place: (first && leadOf(first)?.place) ?? view.lead.place,
+      says: `The correction counts ${view.m} tests; ${family.label} are ${comparisons.length} further tests that this number does not include.${effect}`,
+      asks: 'Please say whether these tests belong to the corrected family, form one of their own, or are to be read one by one.',
+      cites: ['sampl', 'ich-e9'],
+    },
+  ]
+}
+
+export const familyUnclear: RuleRow = {
+  rule: 'family-unclear',
+  says: 'the text allows more than one family; the outcome under each',
+  find,
+}

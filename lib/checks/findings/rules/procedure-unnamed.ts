@@ -1,0 +1,27 @@
+import type { Bench } from '../../families/case'
+import type { Found, RuleRow } from '../finding'
+import { reportsOf } from '../wording'
+
+/** A question: needed to judge. Silent where another sentence names the procedure. */
+function find({ views, cases }: Bench): Found[] {
+  return views
+    .filter(({ procedure }) => procedure === 'unspecified')
+    .map((view) => {
+      const concerned = cases.find(({ assigned }) => assigned?.view === view)
+      return {
+        severity: 'question',
+        family: concerned?.family.id ?? null,
+        reports: concerned ? reportsOf(concerned.comparisons) : [],
+        place: view.lead.place,
+        says: `A correction is stated without the procedure: "${view.lead.place.quote.slice(0, 200)}".`,
+        asks: 'Please name the procedure and the number of tests to which it was applied.',
+        cites: ['sampl'],
+      }
+    })
+}
+
+export const procedureUnnamed: RuleRow = {
+  rule: 'procedure-unnamed',
+  says: '"corrected", without saying how',
+  find,
+}
