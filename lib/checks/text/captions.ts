@@ -1,12 +1,23 @@
 import type { Row } from './rows'
 import { writeLine } from './write-line'
 
-// "Table 2.", "TABLE II", "Tab. 3:", "Table S4", "Table A.1", "Table 2 Characteristics of …"
-const tableCaption = /^(?:table|tab\.)\s*(s?\d+(?:\.\d+)?[a-z]?|[a-z]\.?\d+|[ivxl]+)\b\s*([.:|–—-]?)\s*(.*)$/i
+// "Table 2.", "TABLE II", "Tab. 3:", "Table-4:", "Table S4", "Table A.1", "Table 2 Characteristics of …"
+const tableCaption =
+  /^(?:table|tab\.)[\s-]*(s?\d+(?:\.\d+)?[a-z]?|[a-z]\.?\d+|[ivxl]+)\b\s*([.:|–—-]?)\s*(.*)$/i
 // "Figure 1:", "Fig. 2.", "FIGURE 3"
 const figureCaption = /^(?:figure|fig\.?)\s*(s?\d+[a-z]?|[a-z]\.?\d+)\b\s*([.:|–—-]?)\s*(.*)$/i
 
+const texts = new WeakMap<Row, string>()
+
 export function textOf(row: Row): string {
+  const known = texts.get(row)
+  if (known !== undefined) return known
+  const text = writeRow(row)
+  texts.set(row, text)
+  return text
+}
+
+function writeRow(row: Row): string {
   return row.segments.map((segment) => writeLine(segment.words).text).join(' ')
 }
 

@@ -41,8 +41,7 @@ function readLane(lane: Lane, bodySize: number): FlowItem[] {
   const used = new Set<Row>()
   for (const table of tables) {
     const all = [...table.caption, ...table.rows, ...table.notes]
-    const top = all.reduce((a, b) => (b.v > a.v ? b : a))
-    first.set(top, table)
+    first.set(table.anchor, table)
     for (const row of all) used.add(row)
   }
   const items: FlowItem[] = []
@@ -146,7 +145,7 @@ function orderBands(
   bodySize: number,
 ): FlowItem[] {
   const wide: { v: number; row: Row | null; table: FoundTable | null }[] = tables.map((table) => ({
-    v: Math.max(...[...table.caption, ...table.rows].map((r) => r.v)),
+    v: table.anchor.v,
     row: null,
     table,
   }))

@@ -69,15 +69,21 @@ export function roughWidth(char: string): number {
   return char >= 'A' && char <= 'Z' ? 0.64 : 0.5
 }
 
+// a run of numbers only: "44.29 6.71", "0.041 <0.001 (2.4)"
+const numbersOnly = /^[\d.,·<>=≤≥±()[\]*\s\u2212–-]+$/
+
 /**
  * Splits a run's text into glyphs between `from` and `to` along the baseline. A space is kept as ' '.
- * `even` for monospaced fonts, where every character has the same advance.
+ * `even` for monospaced fonts, where every character has the same advance. In a run of numbers only the
+ * digits have their own width `digit` (in points) and the spaces take what is left: several cells of a
+ * table may have been drawn as one run.
  */
-export function readGlyphs(text: string, from: number, to: number, even: boolean): Glyph[] {
+export function readGlyphs(text: string, from: number, to: number, even: boolean, digit = 0): Glyph[] {
   const chars = [...text]
   const shares = chars.map((char) =>
     invisible.test(char) ? 0 : even ? 1 : roughWidth(space.test(char) ? ' ' : char),
   )
+  if (!even && digit > 0) widenSpaces(text, chars, shares, to - from, digit)
   const total = shares.reduce((sum, share) => sum + share, 0) || 1
   const glyphs: Glyph[] = []
   let at = from
@@ -92,6 +98,35 @@ export function readGlyphs(text: string, from: number, to: number, even: boolean
     )
   })
   return glyphs
+}
+
+function widenSpaces(text: string, chars: string[], shares: number[], width: number, digit: number): void {
+  if (!numbersOnly.test(text)) return
+  const spaces = chars.filter((char) => space.test(char)).length
+  if (spaces === 0) return
+  const printed = shares.reduce((sum, share, i) => sum + (space.test(chars[i] ?? '') ? 0 : share), 0)
+  const left = width / (digit / 0.5) - printed
+  if (left < 0.2 * spaces || left > 2.5 * spaces) return
+  chars.forEach((char, i) => {
+    if (space.test(char)) shares[i] = left / spaces
+  })
+}
+
+/** Width of a digit by font, as a fraction of the size: from runs of digits and points. */
+export type DigitWidths = ReadonlyMap<string, number>
+
+export function measureDigits(
+  runs: Iterable<{ text: string; width: number; size: number; font: string }>,
+): DigitWidths {
+  const sums = new Map<string, { width: number; digits: number }>()
+  for (const run of runs) {
+    // "9.64"
+    if (!/^\d+(?:\.\d+)?$/.test(run.text) || !(run.size > 0)) continue
+    const digits = run.text.length - (run.text.includes('.') ? 0.45 : 0)
+    const sum = sums.get(run.font) ?? { width: 0, digits: 0 }
+    sums.set(run.font, { width: sum.width + run.width / run.size, digits: sum.digits + digits })
+  }
+  return new Map([...sums].map(([font, sum]) => [font, sum.width / sum.digits]))
 }
 
 function readCharacter(char: string): { chars: string[]; level: -1 | 0 | 1 } {

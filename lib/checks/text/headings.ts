@@ -1,25 +1,31 @@
 import type { SectionKind } from '../types'
 
-/** Headings by their words, most telling first. `starts`: the words a heading begins with. */
+/** Headings by their words. A heading is known whole, so that a title that begins so is none. */
 const words: readonly [SectionKind, RegExp][] = [
-  ['abstract', /^(?:abstract|summary|synopsis|structured abstract)\b/i],
+  ['abstract', /^(?:(?:structured |extended )?abstract|summary|synopsis)$/i],
   [
     'references',
-    /^(?:references?(?: and notes| cited| list)?|bibliography|literature(?: cited)?|works cited)$/i,
+    /^(?:references?(?: and notes| cited| list)?|bibliography|literature(?: cited)?|works cited|cited literature)$/i,
   ],
-  ['introduction', /^(?:introduction|background|background and (?:aims?|objectives?)|rationale)\b/i],
+  [
+    'introduction',
+    /^(?:(?:general )?introduction(?: and .+)?|backgrounds?(?: and (?:aims?|objectives?|purpose|rationale))?|rationale|aims?|objectives?|purpose)$/i,
+  ],
   [
     'methods',
-    /^(?:(?:materials?|patients?|subjects?|participants?|animals?|design|experimental)(?:,? | and |, and )?(?:and |& )?(?:methods?|procedures?|section|design)?|methods?|methodology|method|statistical (?:analys[ei]s|methods?|considerations)|statistics|data analysis|participants?|procedure|study design|sample size)\b/i,
+    /^(?:(?:general |data and |materials?,? (?:and|&) |patients?,? (?:and|&) |subjects?,? (?:and|&) |participants?,? (?:and|&) |animals?,? (?:and|&) |experimental |study |research |statistical |data |design and |sources and |statistical analysis )?(?:methods?|methodology|materials|design|procedures?|section|analys[ei]s|participants?|patients|subjects|setup|considerations|set-up)(?: and (?:materials?|procedures?|design|participants|patients|analys[ei]s|measures?|data|statistics))?|statistics|experimental|sample size(?: .+)?|randomi[sz]ation|data collection|statistical .{1,40}|computational details|outcome measures?|outcomes|procedure|measures)$/i,
   ],
-  ['results', /^(?:results?|findings|results and discussion)\b/i],
+  [
+    'results',
+    /^(?:(?:main |experimental |empirical )?results?(?: (?:and|&) (?:discussion|analysis|interpretation))?|findings)$/i,
+  ],
   [
     'discussion',
-    /^(?:discussion|general discussion|conclusions?|concluding remarks|limitations|interpretation)\b/i,
+    /^(?:(?:general |overall )?discussion(?: and .+)?|(?:summary and )?conclusions?(?: and .+)?|concluding remarks|limitations|strengths and limitations|interpretation)$/i,
   ],
   [
     'other',
-    /^(?:acknowledge?ments?|funding|competing interests?|conflicts? of interests?|declarations?|author contributions?|authors['’] contributions?|data availability|availability of data|supplementary|supporting information|appendix|abbreviations|ethics|keywords?|key words|highlights|computational details)\b/i,
+    /^(?:acknowledge?ments?|funding(?: .+)?|(?:declaration of )?(?:competing|conflicts? of) interests?(?: statement)?|conflicts? of interest|declarations?|(?:authors?['’]?s? )?contributions?|credit .+|(?:data|code) (?:availability|accessibility)(?: statement)?|availability of .+|supplement(?:ary|al) .+|supporting information|appendi(?:x|ces)(?: .+)?|(?:list of )?abbreviations|ethics .+|ethical .+|consent .+|keywords?|key words|index terms|highlights|publisher['’]s note|figure legends?|figures?|tables?|disclosures?)$/i,
   ],
 ]
 
@@ -55,11 +61,12 @@ export function depthOf(text: string): number {
 }
 
 // "Abstract—", "Abstract.", "ABSTRACT:", "Background:", "Methods."
-const runIn = /^(abstract|summary|keywords?|key words|index terms)\s*[.:—–-]+\s*/i
+const runIn =
+  /^(abstract|summary|keywords?|key words|index terms|acknowledge?ments?|funding|data availability)\s*[.:—–-]+\s*(?=\S)/i
 
 /** A heading that runs into its paragraph: its text and the length it takes. */
 export function readRunIn(text: string): { heading: string; length: number; kind: SectionKind } | null {
-  const found = runIn.exec(text)
+  const found = runIn.exec(text.slice(0, 60))
   if (!found) return null
   const heading = found[1] ?? ''
   const kind = /^(?:abstract|summary)/i.test(heading) ? 'abstract' : 'other'

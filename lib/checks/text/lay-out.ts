@@ -1,6 +1,8 @@
 import type { LaidOut, PdfTable, Place, ReadDocument } from '../types'
 import { readFlow, type FlowItem } from './flow'
 import { dropFurniture } from './furniture'
+import { dropHiddenLayers } from './layers'
+import { measureDigits } from './glyphs'
 import { depthOf, kindOfHeading, readRunIn, stripNumber } from './headings'
 import { textOf, isFigureCaption } from './captions'
 import { toParts, type Paragraph, type Part, type Usual } from './paragraphs'
@@ -20,11 +22,12 @@ import type { Origin } from './write-line'
  * ' '. Ligatures are letters. A mid-dot decimal is '.'.
  */
 export function layOut(document: ReadDocument): LaidOut {
-  const pages = document.pages.map((page) => ({ page, frames: readFrames(document, page) }))
+  const digits = measureDigits(document.pages.flatMap((page) => page.runs))
+  const pages = document.pages.map((page) => ({ page, frames: readFrames(document, page, digits) }))
   const unread = pages
     .filter(({ frames }) => frames.length === 0)
     .map(({ page }) => toUnread(page.number, page.width, page.height))
-  const main = dropFurniture(pages.flatMap(({ frames }) => frames.slice(0, 1)))
+  const main = dropFurniture(dropHiddenLayers(pages.flatMap(({ frames }) => frames.slice(0, 1))))
   const usual = findUsual(main)
   const flows = pages.flatMap(({ page, frames }) => {
     const kept = main.find((frame) => frame.page === page)
@@ -115,7 +118,7 @@ function noteHeading(
   text: string,
   at: number,
 ): void {
-  const run = part.kind === 'heading' ? null : readRunIn(text)
+  const run = readRunIn(text)
   if (run) heads.push({ at, text: run.heading, kind: run.kind, depth: 1 })
   else if (part.kind === 'heading') heads.push({ at, text, kind: kindOfHeading(text), depth: depthOf(text) })
   else if (part.kind === 'aside' && isFigureCaption(text) && lastKind(heads) === 'references')

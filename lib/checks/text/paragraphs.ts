@@ -55,7 +55,9 @@ function startsParagraph(open: readonly Line[], last: Line, line: Line, usual: U
   if (drop > 1.32 * pitch || drop < -1) return true
   if (Math.abs(last.row.size - line.row.size) > 0.12 * usual.size) return true
   if (isFigureCaption(line.text)) return true
-  if (looksLikeHeading(line, usual) !== looksLikeHeading(last, usual)) return true
+  const heads = looksLikeHeading(line, usual)
+  if (heads !== looksLikeHeading(last, usual)) return true
+  if (heads && isNewHeading(last, line)) return true
   const unfinished = !/[.!?:;)\]"”’*]$/.test(last.text) || /^[\p{Ll}]/u.test(line.text)
   if (unfinished) return false
   const indent = line.row.u0 - line.lane.left
@@ -64,6 +66,12 @@ function startsParagraph(open: readonly Line[], last: Line, line: Line, usual: U
     return true
   const short = last.row.u1 < last.lane.right - 0.12 * (last.lane.right - last.lane.left)
   return short && /[.!?]["”’)\]]*$/.test(last.text)
+}
+
+/** Two headings one below the other, as against one of two lines. */
+function isNewHeading(last: Line, line: Line): boolean {
+  if (isNumbered(line.text) || kindOfHeading(last.text) !== null) return true
+  return Math.abs(last.row.size - line.row.size) > 0.3 || fontOf(last.row) !== fontOf(line.row)
 }
 
 function usualPitch(open: readonly Line[], last: Line, usual: Usual): number {

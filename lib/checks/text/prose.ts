@@ -13,12 +13,15 @@ const wordPattern = /\p{L}+(?:-\p{L}+)*/gu
 
 export function readVocabulary(lines: Iterable<string>): Vocabulary {
   const vocabulary = new Set<string>()
+  let broken = false
   for (const line of lines) {
     const found = [...line.matchAll(wordPattern)]
     found.forEach((match, index) => {
       const brokenOff = index === found.length - 1 && /[-\u00ad]$/.test(line)
-      if (!brokenOff && match.index > 0) vocabulary.add(match[0].toLowerCase())
+      const cutBefore = index === 0 && broken
+      if (!brokenOff && !cutBefore) vocabulary.add(match[0].toLowerCase())
     })
+    broken = /[-\u00ad]$/.test(line)
   }
   return vocabulary
 }
@@ -46,6 +49,10 @@ export function joinRows(rows: readonly Row[], vocabulary: Vocabulary): Written 
   return normalise({ text, origins })
 }
 
+// second parts of compounds that keep their hyphen: "Bonferroni-corrected", "two-sided", "least-squares"
+const compoundEnd =
+  /^(?:corrected|adjusted|based|wise|sided|tailed|sample|squares?|hoc|values?|tests?|free|controlled|blind(?:ed)?|generated|specific|dependent|independent|induced|treated|related|level|term|group|factor|way|fold|rank|down|up|off|effects?|life|year|old|time|like)\b/i
+
 function howToJoin(before: string, after: string, vocabulary: Vocabulary): 'space' | 'close' | 'drop-hyphen' {
   if (before.endsWith('\u00ad')) return 'drop-hyphen'
   if (/\d[–-]$/.test(before) && /^\d/.test(after)) return 'close'
@@ -65,6 +72,7 @@ function howToJoin(before: string, after: string, vocabulary: Vocabulary): 'spac
   if (vocabulary.has(hyphened)) return 'close'
   if (vocabulary.has(whole) || vocabulary.has((tail + right).toLowerCase())) return 'drop-hyphen'
   if (tail.length === 1) return 'close'
+  if (left.length > 2 && compoundEnd.test(after)) return 'close'
   const both = vocabulary.has(tail.toLowerCase()) && vocabulary.has(right.toLowerCase())
   return both && tail.length > 2 && right.length > 3 ? 'close' : 'drop-hyphen'
 }

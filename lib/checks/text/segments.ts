@@ -17,89 +17,69 @@ export function findSegments(words: readonly Word[], gutters: readonly number[] 
   return attachRaised(clusterByBaseline(words)).flatMap((row) => splitRow(row, gutters))
 }
 
-/** Rows of words by baseline; a row's baseline is that of its widest size. */
-function clusterByBaseline(words: readonly Word[]): Word[][] {
+type Cluster = { words: Word[]; v: number; size: number }
+
+/** Rows of words by baseline, from the top. */
+function clusterByBaseline(words: readonly Word[]): Cluster[] {
   const sorted = [...words].sort((a, b) => b.v - a.v || a.u0 - b.u0)
-  const rows: Word[][] = []
-  let row: Word[] = []
-  let top = 0
+  const rows: Cluster[] = []
+  let row: Cluster | null = null
   for (const word of sorted) {
-    const near = row.length > 0 && top - word.v <= 0.22 * Math.min(word.size, sizeOf(row))
-    if (near) row.push(word)
-    else {
-      if (row.length > 0) rows.push(row)
-      row = [word]
-      top = word.v
+    if (row && row.v - word.v <= 0.22 * Math.min(word.size, row.size)) {
+      row.words.push(word)
+      row.size = Math.max(row.size, word.size)
+    } else {
+      row = { words: [word], v: word.v, size: word.size }
+      rows.push(row)
     }
   }
-  if (row.length > 0) rows.push(row)
   return rows
 }
 
-function sizeOf(row: readonly Word[]): number {
-  let size = 0
-  for (const word of row) size = Math.max(size, word.size)
-  return size
-}
+// marks that stand raised at any size: "37 ◦C", "0.03 ∗"
+const raisedMark = /^[◦°*†‡§¶#′]+$/
 
 /** Moves small words that stand at the shoulder or foot of a larger neighbour into that neighbour's row. */
-function attachRaised(rows: Word[][]): Word[][] {
-  rows.forEach(markShifted)
-  const sized = rows.map((row) => ({ words: row, v: row[0]?.v ?? 0, keep: [] as Word[], size: sizeOf(row) }))
-  for (const [index, row] of sized.entries()) {
-    const pending = [...row.words].sort((a, b) => a.u0 - b.u0)
-    let host: (typeof sized)[number] | null = null
+function attachRaised(rows: Cluster[]): Word[][] {
+  const kept: Word[][] = rows.map(() => [])
+  for (const [index, row] of rows.entries()) {
+    markShifted(row)
+    let host: { at: number; word: Word } | null = null
     let last: Word | null = null
-    for (const word of pending) {
-      const follows: boolean =
-        host !== null && last !== null && word.u0 - last.u1 < 0.45 * word.size && word.size < 0.92 * host.size
-      if (!follows) host = findHost(sized, index, word)
-      if (host) {
-        word.level = word.v > hostBaseline(host.words, word) ? 1 : -1
-        host.keep.push(word)
-      } else row.keep.push(word)
+    for (const word of row.words.sort((a, b) => a.u0 - b.u0)) {
+      const follows =
+        host && last && word.u0 - last.u1 < 0.45 * word.size && word.size < 0.92 * host.word.size
+      if (!follows) host = findHost(rows, index, word)
+      if (host) word.level = word.v > host.word.v ? 1 : -1
+      kept[host?.at ?? index]?.push(word)
       last = word
     }
   }
-  return sized.map((row) => row.keep).filter((row) => row.length > 0)
+  return kept.filter((row) => row.length > 0)
 }
 
-function findHost<R extends { words: Word[]; v: number; size: number }>(
-  rows: R[],
-  index: number,
-  word: Word,
-): R | null {
+function findHost(rows: readonly Cluster[], index: number, word: Word): { at: number; word: Word } | null {
+  const mark = raisedMark.test(word.chars)
   for (const step of [1, -1]) {
     for (let at = index + step; at >= 0 && at < rows.length; at += step) {
       const row = rows[at]
-      if (!row || Math.abs(row.v - word.v) > 0.75 * row.size) {
-        if (row && Math.abs(row.v - word.v) > 30) break
-        continue
-      }
-      for (const other of row.words) {
-        const shift = word.v - other.v
-        const fits = shift > 0 ? shift < 0.7 * other.size : -shift < 0.4 * other.size
-        const smaller = word.size < 0.85 * other.size
-        const beside = word.u0 - other.u1 < 0.3 * other.size && word.u0 - other.u1 > -0.35 * other.size
-        if (fits && smaller && beside) return row
-      }
+      if (!row || Math.abs(row.v - word.v) > 24) break
+      if (Math.abs(row.v - word.v) > 0.75 * row.size || (!mark && word.size >= 0.85 * row.size)) continue
+      const host = row.words.find((other) => isHost(other, word, mark))
+      if (host) return { at, word: host }
     }
   }
   return null
 }
 
-function hostBaseline(words: readonly Word[], near: Word): number {
-  let best = near.v
-  let distance = Infinity
-  for (const word of words) {
-    if (word.size <= near.size) continue
-    const d = Math.abs(near.u0 - word.u1)
-    if (d < distance) {
-      distance = d
-      best = word.v
-    }
-  }
-  return best
+function isHost(other: Word, word: Word, mark: boolean): boolean {
+  const shift = word.v - other.v
+  if (shift > 0 ? shift > 0.7 * other.size : -shift > (mark ? 0 : 0.4 * other.size)) return false
+  if (!mark && word.size >= 0.85 * other.size) return false
+  const after = word.u0 - other.u1
+  const before = other.u0 - word.u1
+  const near = (gap: number) => gap < 0.3 * other.size && gap > -0.35 * other.size
+  return near(after) || (shift > 0 && near(before))
 }
 
 function splitRow(row: Word[], gutters: readonly number[]): Segment[] {
@@ -148,15 +128,15 @@ export function toSegment(words: Word[]): Segment {
 }
 
 /** Small words of a row whose baseline is a little off that of the larger words beside them. */
-function markShifted(row: Word[]): void {
-  const size = sizeOf(row)
-  const base = row.find((word) => word.size === size)?.v ?? 0
-  for (const word of row) {
-    if (word.level !== 0 || word.size > 0.85 * size) continue
+function markShifted(row: Cluster): void {
+  const base = row.words.find((word) => word.size === row.size)?.v ?? 0
+  for (const word of row.words) {
+    if (word.level !== 0 || word.size > 0.85 * row.size) continue
     const shift = word.v - base
-    const beside = row.some(
+    if (Math.abs(shift) <= 0.06 * row.size) continue
+    const beside = row.words.some(
       (other) => other.size > word.size * 1.1 && Math.abs(word.u0 - other.u1) < 0.3 * other.size,
     )
-    if (beside && Math.abs(shift) > 0.06 * size) word.level = shift > 0 ? 1 : -1
+    if (beside) word.level = shift > 0 ? 1 : -1
   }
 }

@@ -1,4 +1,5 @@
 import type { Box, PdfCell } from '../types'
+import { normalise } from './normalise'
 import type { Row } from './rows'
 import type { Column } from './table-columns'
 import { toPageBox, type Word } from './words'
@@ -11,6 +12,11 @@ export function isNumeric(text: string): boolean {
   return numeric.test(text.trim())
 }
 
+// a number with words to it is a head or a label: "18–25 Years", "0 Day"
+function isPlainNumber(text: string): boolean {
+  return isNumeric(text) && !/\p{L}{3,}/u.test(text.replace(/\([^)]*\)/g, ''))
+}
+
 type Line = { cells: Word[][]; row: Row; spans: { from: number; to: number; words: Word[] }[] }
 
 /** Puts every row's words into the columns; rows above the first row of numbers are the header. */
@@ -20,7 +26,7 @@ export function fillCells(
 ): { header: PdfCell[][]; body: PdfCell[][] } {
   const lines = rows.map((row) => toLine(row, columns))
   const first = lines.findIndex((line) => isBody(line))
-  const headEnd = first < 0 ? Math.min(1, lines.length) : first
+  const headEnd = first < 0 ? Math.min(1, lines.length) : backOverLabels(lines, first)
   const header = lines.slice(0, headEnd).map((line) => toCells(line, columns.length, true))
   const merged = mergeWrapped(lines.slice(headEnd))
   return { header, body: merged.map((line) => toCells(line, columns.length, false)) }
@@ -83,13 +89,24 @@ function cut(words: readonly Word[], columns: readonly Column[]): Word[][] {
   return pieces
 }
 
+/** Labels of groups just above the first row of numbers belong to the body. */
+function backOverLabels(lines: readonly Line[], first: number): number {
+  let end = first
+  for (let at = first - 1; at > 0; at--) {
+    const line = lines[at]
+    if (!line || !isLabelOnly(line)) break
+    end = at
+  }
+  return end
+}
+
 function isBody(line: Line): boolean {
   const filled = line.cells
     .map((words, i) => ({ i, text: writeLine(words).text }))
     .filter((c) => c.text !== '')
   const rest = filled.length > 1 ? filled.filter((c) => c.i > 0) : filled
   if (filled.length < 2) return false
-  return rest.filter((c) => isNumeric(c.text)).length >= 0.5 * rest.length
+  return rest.filter((c) => isPlainNumber(c.text)).length >= 0.5 * rest.length
 }
 
 /** Labels that wrap: a line with nothing but a label that runs on into the next line, or from the last one. */
@@ -150,7 +167,7 @@ export function toCell(words: readonly Word[]): PdfCell {
     if (line && head && (word.level !== 0 || Math.abs(head.v - word.v) < 0.5 * head.size)) line.push(word)
     else lines.push([word])
   }
-  const text = lines.map((line) => writeLine(line).text).join(' ')
+  const text = lines.map((line) => normalise(writeLine(line)).text).join(' ')
   return { text, boxes: lines.map(boxOf) }
 }
 

@@ -10,6 +10,16 @@ export type Column = { from: number; to: number }
  * than a word space in common, and wide in at least one row.
  */
 export function findColumns(rows: readonly Row[]): Column[] {
+  let best = measureColumns(rows)
+  // rows of a header may reach over several columns: they do not count where the rows below have more
+  for (let skip = 1; skip <= 3 && rows.length - skip >= 2; skip++) {
+    const below = measureColumns(rows.slice(skip))
+    if (below.length > best.length) best = below
+  }
+  return best
+}
+
+function measureColumns(rows: readonly Row[]): Column[] {
   const most = Math.max(0, ...rows.map((row) => row.segments.length))
   const full = rows.filter((row) => row.segments.length >= Math.max(2, Math.ceil(0.6 * most)))
   if (full.length === 0) return []
@@ -34,7 +44,7 @@ export function findColumns(rows: readonly Row[]): Column[] {
     if (clear && open < 0) open = i
     if (!clear && open >= 0) {
       const gap = { from: left + open * step, to: left + i * step }
-      if (gap.to - gap.from >= 0.35 * size && words.some((row) => isWide(row, gap, size))) gaps.push(gap)
+      if (gap.to - gap.from >= 0.35 * size && isApart(words, gap, size)) gaps.push(gap)
       open = -1
     }
   }
@@ -44,12 +54,34 @@ export function findColumns(rows: readonly Row[]): Column[] {
   return columns
 }
 
-function isWide(row: readonly Word[], gap: Column, size: number): boolean {
+/** Wide in at least one row, or clearly wider than a word space in all of several rows of numbers. */
+function isApart(rows: readonly (readonly Word[])[], gap: Column, size: number): boolean {
+  const widths = rows.map((row) => gapWidth(row, gap)).filter((width) => width > 0)
+  if (widths.some((width) => width > WIDE_GAP * size)) return true
+  return widths.length >= 2 && gap.to - gap.from > 0.42 * size && widths.every((width) => width > 0.45 * size)
+}
+
+function gapWidth(row: readonly Word[], gap: Column): number {
   let before = -Infinity
   let after = Infinity
   for (const word of row) {
     if (word.u1 <= gap.from + 1) before = Math.max(before, word.u1)
     if (word.u0 >= gap.to - 1) after = Math.min(after, word.u0)
   }
-  return after - before > WIDE_GAP * size && Number.isFinite(after - before)
+  return Number.isFinite(after - before) ? after - before : 0
+}
+
+/** How many columns a row fills when every word falls into one of them; null where a word stands in a gap. */
+export function cutAtColumns(row: Row, columns: readonly Column[]): number | null {
+  const filled = new Set<number>()
+  for (const segment of row.segments)
+    for (const word of segment.words) {
+      const over = columns.flatMap((c, i) =>
+        Math.min(word.u1, c.to) - Math.max(word.u0, c.from) > 1 ? [i] : [],
+      )
+      if (over.length > 1) return null
+      const [only] = over
+      if (only !== undefined) filled.add(only)
+    }
+  return filled.size
 }

@@ -1,10 +1,10 @@
 import type { Box, ReadDocument, ReadFont, ReadPage, TextRun } from '../types'
-import { readGlyphs } from './glyphs'
+import { readGlyphs, type DigitWidths } from './glyphs'
 
 /**
  * A word as drawn: characters without white space, with the edges between them along the baseline.
  * Coordinates are those of the reading frame: u along the baseline, v upwards, so that turned text is read
- * as upright text is. `gap`: white space was drawn before it. `level`: raised (1) or lowered (-1) text.
+ * as upright text is. `gap`: white space was drawn before it; `order`: when. `level`: raised (1) or lowered (-1) text.
  */
 export type Word = {
   chars: string
@@ -16,6 +16,7 @@ export type Word = {
   font: string
   level: -1 | 0 | 1
   gap: boolean
+  order: number
   page: number
   turn: Turn
   rise: number
@@ -36,7 +37,7 @@ export type Frame = {
 }
 
 /** Groups a page's runs by direction, the direction with most characters first. Oblique text is left out. */
-export function readFrames(document: ReadDocument, page: ReadPage): Frame[] {
+export function readFrames(document: ReadDocument, page: ReadPage, digits: DigitWidths): Frame[] {
   const byTurn = new Map<Turn, Word[]>()
   const seen = new Set<string>()
   for (const run of page.runs) {
@@ -44,7 +45,16 @@ export function readFrames(document: ReadDocument, page: ReadPage): Frame[] {
     if (turn === null || !(run.size > 0) || isRepeated(run, seen)) continue
     const words = byTurn.get(turn) ?? []
     byTurn.set(turn, words)
-    for (const word of splitRun(run, page.number, turn, document.fonts[run.font])) words.push(word)
+    for (const word of splitRun(
+      run,
+      page.number,
+      turn,
+      document.fonts[run.font],
+      digits.get(run.font) ?? 0.5,
+    )) {
+      word.order = words.length
+      words.push(word)
+    }
   }
   const length = (words: Word[]) => words.reduce((sum, word) => sum + word.chars.length, 0)
   return [...byTurn]
@@ -91,16 +101,16 @@ function turnOf(angle: number): Turn | null {
 /** Text drawn twice at one place (imitated bold, shadows). */
 function isRepeated(run: TextRun, seen: Set<string>): boolean {
   if (run.text.trim() === '') return false
-  const key = `${run.text}|${Math.round(run.x / 1.5)}|${Math.round(run.y / 1.5)}|${Math.round(run.size)}`
+  const key = `${run.font}|${run.text}|${Math.round(run.x / 1.5)}|${Math.round(run.y / 1.5)}|${Math.round(run.size)}`
   if (seen.has(key)) return true
   seen.add(key)
   return false
 }
 
-function splitRun(run: TextRun, page: number, turn: Turn, font: ReadFont | undefined): Word[] {
+function splitRun(run: TextRun, page: number, turn: Turn, font: ReadFont | undefined, digit: number): Word[] {
   const [u, v] = toFramePoint(turn, run.x, run.y)
   const even = font?.family === 'monospace' || isEven(run.text)
-  const glyphs = readGlyphs(run.text, u, u + run.width, even)
+  const glyphs = readGlyphs(run.text, u, u + run.width, even, digit * run.size)
   const rise = Math.min(1, Math.max(0.6, font?.ascent ?? 0.75)) * run.size
   const drop = Math.max(-0.35, Math.min(-0.1, font?.descent ?? -0.25)) * run.size
   const words: Word[] = []
@@ -123,6 +133,7 @@ function splitRun(run: TextRun, page: number, turn: Turn, font: ReadFont | undef
         font: run.font,
         level: glyph.level,
         gap,
+        order: 0,
         page,
         turn,
         rise,

@@ -43,10 +43,12 @@ function isSpaced(last: Word, word: Word): boolean {
 const selfMarking = /^[*†‡§¶#∥‖]+[,]?$/
 // endings of ordinals: 1st 2nd 3rd 4th
 const ordinal = /^(?:st|nd|rd|th)$/
+// signs that stand between operands and are never raised: a font may draw them a little higher
+const operator = /^[±=×<>≤≥~≈·+]+$/
 
 function getMark(word: Word, last: Word | null, before: string): string {
   if (word.level === 0 || last?.level === word.level) return ''
-  if (selfMarking.test(word.chars)) return ''
+  if (selfMarking.test(word.chars) || operator.test(word.chars)) return ''
   if (word.level === 1) {
     if (ordinal.test(word.chars)) return ''
     if (word.chars.startsWith('2') && /[χΧ]$/.test(before)) return ''
