@@ -1,14 +1,15 @@
 /**
  * How much of a moment is told. `date`: 1 December 2026; `due`: Tuesday 1 December 2026; `moment`: 1 December
- * 2026, 14:05; `short`: 1 Dec 2026, for narrow columns.
+ * 2026, 14:05; `short` and `due-short`: 1 Dec 2026 and Tue 1 Dec 2026, for narrow columns.
  */
-export type TimeShow = 'date' | 'due' | 'moment' | 'short'
+export type TimeShow = 'date' | 'due' | 'moment' | 'short' | 'due-short'
 
 const shapes: Record<TimeShow, Intl.DateTimeFormatOptions> = {
   date: { day: 'numeric', month: 'long', year: 'numeric' },
   due: { weekday: 'long', day: 'numeric', month: 'long', year: 'numeric' },
   moment: { day: 'numeric', month: 'long', year: 'numeric', hour: '2-digit', minute: '2-digit' },
   short: { day: 'numeric', month: 'short', year: 'numeric' },
+  'due-short': { weekday: 'short', day: 'numeric', month: 'short', year: 'numeric' },
 }
 
 /** Integer milliseconds UTC as words, in `zone`. Parts are put together here, so that no locale's comma intrudes. */

@@ -7,7 +7,7 @@ export function Mark({ className }: { className?: string }) {
   return (
     <svg viewBox="0 0 32 32" fill="none" aria-hidden="true" className={classes('size-7', className)}>
       <path d={steps} strokeWidth="2" strokeLinecap="square" className="stroke-ink" />
-      <circle cx="16.2" cy="11" r="3.4" className="fill-tide" />
+      <circle cx="15.8" cy="11.2" r="3.3" className="fill-tide" />
     </svg>
   )
 }

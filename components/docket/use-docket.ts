@@ -1,0 +1,17 @@
+'use client'
+
+import { keepPreviousData, useQuery } from '@tanstack/react-query'
+import type { DocketPage } from '@/db/queries/docket'
+import type { DocketFilter } from '@/lib/rules/docket'
+import { fetchJson } from '../shell/fetch-json'
+import { docketKey } from './docket-key'
+import { toDocketQuery } from './docket-params'
+
+export function useDocket(filter: DocketFilter) {
+  return useQuery({
+    queryKey: docketKey(filter),
+    queryFn: ({ signal }) => fetchJson<DocketPage>(`/api/docket?${toDocketQuery(filter)}`, { signal }),
+    placeholderData: keepPreviousData,
+    refetchInterval: 60_000,
+  })
+}
