@@ -111,6 +111,9 @@ export const points = sqliteTable(
     asks: text('asks').notNull(),
     quote: text('quote').notNull().default(''),
     page: integer('page'),
+    /** Where it stands in the results table, 1-based, instead of a page. */
+    row: integer('row'),
+    sheet: text('sheet'),
     cites: json('cites').notNull(),
     position: integer('position').notNull(),
     decidedBy: text('decided_by').references(() => people.id),

@@ -1,6 +1,11 @@
 import { z } from 'zod'
-import type { Db } from '@/db/client'
+import { transact, type Db } from '@/db/client'
+import { composeWithdrawn } from '@/lib/letters/mails'
+import { queueMail } from '@/lib/mail/queue-mail'
+import { recordEvent } from '@/lib/record/record-event'
 import type { Actor } from '@/lib/rules/roles'
+import { closeAssignment, findOpenAssignment, getRecipient, loadManuscript } from './load-manuscript'
+import { moveManuscript } from './move-manuscript'
 
 export const withdrawManuscriptInput = z.object({
   manuscriptId: z.string(),
@@ -9,11 +14,31 @@ export const withdrawManuscriptInput = z.object({
 
 export type WithdrawManuscriptResult = { manuscriptId: string }
 
+/** Takes a manuscript back before a verdict is out; whoever is due for it is told and is no longer due. */
 export function withdrawManuscript(
-  _db: Db,
-  _actor: Actor,
-  _input: z.input<typeof withdrawManuscriptInput>,
-  _now: number,
+  db: Db,
+  actor: Actor,
+  input: z.infer<typeof withdrawManuscriptInput>,
+  now: number,
 ): WithdrawManuscriptResult {
-  throw new Error('not yet')
+  return transact(db, (tx) => {
+    const manuscript = loadManuscript(tx, actor, 'manuscript.withdraw', input.manuscriptId)
+    const from = manuscript.state
+    moveManuscript(tx, actor, manuscript.id, 'withdraw', now)
+    const assignment = findOpenAssignment(tx, manuscript.id)
+    if (assignment) {
+      closeAssignment(tx, assignment, manuscript.id, 'ended', 'withdrawn', now)
+      const to = getRecipient(tx, assignment.reviewerId)
+      queueMail(
+        tx,
+        composeWithdrawn({ to, manuscriptId: manuscript.id, reference: manuscript.reference }),
+        now,
+      )
+    }
+    recordEvent(tx, actor, 'withdrawn', now, {
+      manuscriptId: manuscript.id,
+      detail: { from, reason: input.reason },
+    })
+    return { manuscriptId: manuscript.id }
+  })
 }
