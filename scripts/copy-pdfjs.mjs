@@ -6,7 +6,7 @@ const root = join(dirname(fileURLToPath(import.meta.url)), '..')
 const from = join(root, 'node_modules', 'pdfjs-dist')
 const to = join(root, 'public', 'pdfjs')
 
-/** Places what the browser's PDF reader fetches while it works: its worker, character maps, fonts, decoders. */
+/** Places what the browser's PDF reader fetches while it works: its worker, character maps, fonts, decoders. Returns the exit status. */
 export function copyPdfjs() {
   rmSync(to, { recursive: true, force: true })
   mkdirSync(to, { recursive: true })
@@ -14,6 +14,7 @@ export function copyPdfjs() {
     cpSync(join(from, folder), join(to, folder), { recursive: true })
   }
   cpSync(join(from, 'build', 'pdf.worker.min.mjs'), join(to, 'pdf.worker.min.mjs'))
+  return 0
 }
 
 if (process.argv[1] === fileURLToPath(import.meta.url)) copyPdfjs()

@@ -1,21 +1,25 @@
 import type { Report } from '@/lib/checks/types'
+import { formatComputed } from '../ui/format-value'
 
-/** The value as the manuscript prints it, for cells of a table: '= 0.030' without the sign of equality. */
-export function printedP(report: Pick<Report, 'relation' | 'value' | 'decimals'>): string {
-  const value = report.value.toFixed(report.decimals)
-  return report.relation === '=' ? value : `${signs[report.relation]} ${value}`
+type Printed = Pick<Report, 'relation' | 'value' | 'decimals' | 'place'>
+
+/** The value as the manuscript prints it, taken from its quote: '.008', '0,030', '< 0.001'. */
+export function printedP({ relation, value, decimals, place }: Printed): string {
+  // numbers within 'P = 0.246', 'p < .001', '3,1e-05'
+  const tokens = place.quote.match(/\d*[.,]?\d+(?:[eE][-−+]?\d+)?/g) ?? []
+  const token = tokens.find((one) => Number(one.replace(',', '.').replace('−', '-')) === value)
+  const text = token ?? (decimals > 12 ? value.toExponential() : value.toFixed(decimals))
+  return relation === '=' ? text : `${signs[relation]} ${text}`
 }
 
 const signs = { '<': '<', '<=': '≤', '>': '>', '>=': '≥' } as const
 
 /** A recomputed p-value: one digit more than printed, four where that would show as zero, '< 0.0001' below. */
 export function recomputedP(value: number, printedDecimals: number): string {
-  if (Number.isNaN(value)) return '–'
-  if (value >= 1) return '1'
-  if (value > 0.9999 && printedDecimals < 4) return '1'
-  if (value < 0.0001) return '< 0.0001'
-  const text = value.toFixed(Math.min(6, printedDecimals + 1))
-  return Number(text) === 0 ? value.toFixed(4) : text
+  if (value >= 0 && value < 0.0001) return '< 0.0001'
+  const text = formatComputed(value, printedDecimals + 1)
+  if (text.startsWith('<')) return formatComputed(value, 4)
+  return Number(text) === 1 ? '1' : text
 }
 
 /** A recomputed interval; one value where both ends show the same. */

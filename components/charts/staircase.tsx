@@ -1,6 +1,6 @@
 import { LinePath } from '@visx/shape'
 import type { Claim, Family, Report } from '@/lib/checks/types'
-import { OutcomeRing } from './outcome-shape'
+import { OutcomeRing } from './outcome-ring'
 import { describeDot, nameOfReport } from './describe-dot'
 import { staircaseGeometry, type StaircaseDot, type StaircaseLine } from './staircase-geometry'
 

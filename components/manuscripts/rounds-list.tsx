@@ -1,0 +1,76 @@
+import { FileText, Table2 } from 'lucide-react'
+import type { FileView, RoundView } from '@/db/queries/manuscript'
+import { formatBytes } from '../files/format-bytes'
+import { Time } from '../ui/time'
+
+/** The rounds with their files and what was said with them; the newest first. */
+export function RoundsList({ rounds, readable }: { rounds: readonly RoundView[]; readable: boolean }) {
+  return (
+    <ol className="flex flex-col gap-5">
+      {[...rounds].reverse().map((round) => (
+        <li key={round.id}>
+          <h3 className="font-semibold">
+            Round {round.number}
+            <span className="ml-2 font-sans text-xs font-normal text-ink-soft">
+              {round.handedInAt === null ? (
+                'being prepared'
+              ) : (
+                <>
+                  handed in <Time at={round.handedInAt} />
+                </>
+              )}
+            </span>
+          </h3>
+          {round.files.length > 0 && (
+            <ul className="mt-1 flex flex-col gap-1">
+              {round.files.map((file) => (
+                <FileLine key={file.id} file={file} readable={readable} />
+              ))}
+            </ul>
+          )}
+          <Said round={round} />
+        </li>
+      ))}
+    </ol>
+  )
+}
+
+function FileLine({ file, readable }: { file: FileView; readable: boolean }) {
+  const Icon = file.kind === 'manuscript' ? FileText : Table2
+  return (
+    <li className="flex items-baseline gap-2">
+      <Icon className="size-4 shrink-0 translate-y-0.5 text-ink-soft" aria-hidden="true" />
+      {readable ? (
+        <a href={`/api/files/${file.id}`} className="min-w-0 break-words text-tide hover:underline">
+          {file.name}
+        </a>
+      ) : (
+        <span className="min-w-0 break-words">{file.name}</span>
+      )}
+      <span className="tabular text-xs whitespace-nowrap text-ink-soft">
+        {file.kind === 'manuscript' ? 'manuscript' : 'results table'}, {formatBytes(file.bytes)}
+        {file.replacedAt !== null && ', replaced'}
+      </span>
+    </li>
+  )
+}
+
+function Said({ round }: { round: RoundView }) {
+  const said = [
+    ['Level', round.alpha === null ? '' : `α = ${round.alpha}`],
+    ['Correction, as they say', round.correction],
+    ['Primary outcome', round.primaryOutcome],
+    ['Note', round.note],
+  ].filter(([, words]) => words !== '')
+  if (said.length === 0) return null
+  return (
+    <dl className="mt-2 grid grid-cols-[max-content_minmax(0,1fr)] gap-x-5 gap-y-1">
+      {said.map(([name, words]) => (
+        <div key={name} className="contents">
+          <dt className="text-ink-soft">{name}</dt>
+          <dd className="whitespace-pre-wrap">{words}</dd>
+        </div>
+      ))}
+    </dl>
+  )
+}
