@@ -1,0 +1,187 @@
+import { printedInterval } from '../numbers/printed-interval'
+import type { LaidOut, ReadReport, ReadStatistic } from '../types'
+import { findCall, type WordedCall } from './grammar/call'
+import { findKnown, findPair } from './grammar/comparison'
+import type { PrintedP } from './grammar/p-value'
+import { findRole } from './grammar/role'
+import { findOutcome } from './grammar/outcome'
+import type { Names } from './names'
+import { placeIn } from './places'
+import { boundP, findReports, type SentenceReports } from './reports'
+import type { Sentence } from './sentences'
+
+export type Part = { reports: ReadReport[]; statistics: ReadStatistic[] }
+
+/** Reports and statistics of the running text, with provisional ids. */
+export function readProse(
+  laidOut: LaidOut,
+  sentences: readonly Sentence[],
+  names: Names,
+  alpha: number,
+): Part {
+  const parts = sentences
+    .map(findReports)
+    .filter((found): found is SentenceReports => found !== null)
+    .map((found) => readSentence(laidOut, found, names, alpha))
+  return {
+    reports: parts.flatMap(({ reports }) => reports),
+    statistics: parts.flatMap(({ statistics }) => statistics),
+  }
+}
+
+function readSentence(laidOut: LaidOut, found: SentenceReports, names: Names, alpha: number): Part {
+  const { sentence, reports, statistics } = found
+  const { text, start, section, heading } = sentence
+  const idOf = (kind: 'p' | 's', at: number) => `text-${kind}-${start + at}`
+  const clauses = cutClauses(found)
+  const calls = settleCalls(found, clauses, names, alpha)
+  return {
+    reports: reports.map(({ p, statistic }, i) => {
+      const printed = toValue(p, alpha)
+      const clause = clauses[i] ?? { before: '', after: '' }
+      const own = statistic === null ? null : (statistics[statistic] ?? null)
+      const comparison = findComparison(clause, text, names)
+      const from = own && own.start < p.start && p.start - own.end < 6 ? own.start : p.start
+      return {
+        id: idOf('p', p.start),
+        place: placeIn(laidOut.prose, start + Math.min(from, p.start), start + p.end),
+        ...printed,
+        scale: p.scale === 'unknown' ? scaleBeside(text, p) : p.scale,
+        statistic: own ? idOf('s', own.start) : null,
+        comparison,
+        called: calls[i] ?? null,
+        family: null,
+        offset: start + p.start,
+        section,
+        heading,
+        table: null,
+        cell: null,
+        sentence: text.trim(),
+        outcome: findOutcome(clause.before, text, names),
+        role: findRole(`${clause.before} ${clause.after}`, own, p.of, comparison !== null),
+        oneSided: p.oneSided || /\b(?:one|1)-(?:sided|tailed)\b/i.test(text),
+        markOnly: p.markOnly,
+      }
+    }),
+    statistics: statistics.map((statistic, i) => {
+      const report = reports.find((r) => r.statistic === i)
+      const bounds = boundP(statistic)
+      return {
+        id: idOf('s', statistic.start),
+        place: placeIn(laidOut.prose, start + statistic.start, start + statistic.end),
+        test: statistic.test,
+        df: statistic.df,
+        value: statistic.value,
+        decimals: statistic.decimals,
+        pLow: bounds?.[0] ?? null,
+        pHigh: bounds?.[1] ?? null,
+        report: report ? idOf('p', report.p.start) : null,
+        offset: start + statistic.start,
+        table: null,
+        sentence: text.trim(),
+      }
+    }),
+  }
+}
+
+/** Value and interval; a mark 'n.s.' stands for 'above the level'. */
+function toValue({ relation, value, decimals, markOnly }: PrintedP, alpha: number) {
+  const printed = markOnly
+    ? { relation, value: alpha, decimals: Math.max(2, String(alpha).length - 2) }
+    : { relation, value, decimals }
+  return { ...printed, ...printedInterval(printed.value, printed.decimals, printed.relation) }
+}
+
+type Clause = { before: string; after: string }
+
+/** The words before each value back to the value before it, and after it to the next one or the end of its clause. */
+function cutClauses({ sentence: { text }, reports, statistics }: SentenceReports): Clause[] {
+  return reports.map(({ p, statistic }, i) => {
+    const own = statistic === null ? undefined : statistics[statistic]
+    const startsAt = Math.min(p.start, own?.start ?? p.start)
+    const endsAt = Math.max(p.end, own?.end ?? p.end)
+    const previous = reports[i - 1]
+    const earlier = previous
+      ? Math.max(previous.p.end, previous.statistic === null ? 0 : (statistics[previous.statistic]?.end ?? 0))
+      : 0
+    const next = reports[i + 1]
+    const later = next
+      ? Math.min(
+          next.p.start,
+          next.statistic === null ? Infinity : (statistics[next.statistic]?.start ?? Infinity),
+        )
+      : text.length
+    return {
+      before: text.slice(Math.min(earlier, startsAt), startsAt),
+      after: text.slice(endsAt, Math.max(endsAt, later)),
+    }
+  })
+}
+
+/**
+ * What each value is called. Its own clause counts first; a clause without a verb takes the call of the clause
+ * before it, or of what follows the last value. Words of mere direction ('higher than') and inherited calls count
+ * only where the value itself does not speak against them.
+ */
+function settleCalls(
+  { sentence: { text }, reports }: SentenceReports,
+  clauses: readonly Clause[],
+  names: Names,
+  alpha: number,
+): ReadReport['called'][] {
+  const hidden = [...names.groups, ...names.outcomes].map(({ name }) => name)
+  const own = clauses.map(({ before }) => findCall(before, hidden))
+  const tail = findCall(clauses[clauses.length - 1]?.after ?? '', hidden)
+  let last: WordedCall = null
+  return reports
+    .map(({ p }, i) => {
+      const clause = clauses[i]
+      const worded = own[i] ?? null
+      if (worded) last = worded
+      if (p.markOnly) return 'not significant'
+      // the value heads its clause: 'p = .02 for A', or the verb follows: '(p = .02) differed'
+      const following: WordedCall = worded ? null : findCall(clause?.after.split(/[,;(]/)[0] ?? '', hidden)
+      const inherited = worded ? null : (following ?? last ?? tail)
+      const call = worded ?? inherited
+      if (!call) return null
+      if (worded?.strength === 'strong') return call.call
+      return isAgainst(call.call, p, alpha) ? null : call.call
+    })
+    .map((call, i) => (call === 'significant' && /\b(?:hedge|tend)/i.test('') ? null : call) ?? null)
+}
+
+/** Whether the printed value itself contradicts the call. */
+function isAgainst(call: 'significant' | 'not significant', p: PrintedP, alpha: number): boolean {
+  const { low, high } = toValue(p, alpha)
+  return call === 'significant' ? low >= alpha || high > alpha * 1.5 : high < alpha
+}
+
+/** The pair that a clause compares: names known from tables first, else by its own grammar. */
+function findComparison({ before, after }: Clause, text: string, names: Names): [string, string] | null {
+  const label = /^\s*(?:for|in|between)\s[^,;()]*/i.exec(after)?.[0] ?? ''
+  for (const stretch of [before, label]) {
+    const [a, b, more] = findKnown(stretch, names.groups)
+    if (a && b && !more) return [a, b]
+  }
+  const pair = findPair(before.replace(/\(\s*$/, '')) ?? findPair(label)
+  if (pair) return pair
+  const [a, b, more] = findKnown(text, names.groups)
+  return a && b && !more ? [a, b] : null
+}
+
+/** 'p = .03, Bonferroni-corrected', '(p = .03, uncorrected)', 'after Bonferroni correction (p = .03)'. */
+function scaleBeside(text: string, p: PrintedP): ReadReport['scale'] {
+  const after = text.slice(p.end, p.end + 60)
+  const before = text.slice(Math.max(0, p.start - 90), p.start)
+  if (/^\s*[,(]?\s*\(?(?:unadjusted|uncorrected|nominal|raw|unc\.)/i.test(after)) return 'raw'
+  if (
+    /^\s*[,(]?\s*\(?(?:after\s(?:\w+\s)?)?(?:[A-ZŠ][\w–-]*[\s-])?(?:adjusted|corrected|correction|adjustment|FDR)/.test(
+      after,
+    )
+  )
+    return 'adjusted'
+  if (/\b(?:before|without)\s(?:\w+[\s-]){0,3}(?:correction|adjustment)[^.;()]{0,40}\(?$/i.test(before))
+    return 'raw'
+  if (/\bafter\s(?:\w+[\s–-]){0,4}(?:correction|adjustment)[^.;()]{0,40}\(?$/i.test(before)) return 'adjusted'
+  return 'unknown'
+}
