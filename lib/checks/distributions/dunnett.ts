@@ -39,10 +39,14 @@ export function productNormalUpper(d: number, loadings: readonly number[], sides
 /**
  * Dunnett: P(max |T_i| > |t|) (`sides` 2) or P(max T_i > t) (`sides` 1) over the comparisons with one control,
  * `loadings` λ_i = √(n_i / (n_i + n_0)), `df` of the pooled variance. Equal groups: λ = √½. Relative accuracy about 1e-9.
+ * NaN for t that is NaN. Throws RangeError for no loadings, loadings outside (−1, 1) and df below 1.
  * Source: Dunnett (1955), J Am Stat Assoc 50, 1096–1121.
  */
 export function dunnettUpper(t: number, loadings: readonly number[], df: number, sides: 1 | 2 = 2): number {
-  if (loadings.length === 0) throw new RangeError('Dunnett needs at least one comparison')
+  if (loadings.length === 0) throw new RangeError('Dunnett takes at least one comparison')
+  if (!loadings.every((loading) => Math.abs(loading) < 1))
+    throw new RangeError('loadings lie between −1 and 1')
+  if (Number.isNaN(t)) return NaN
   const d = sides === 2 ? Math.abs(t) : t
   if (sides === 2 && d === 0) return 1
   const count = Math.log(sides * loadings.length)

@@ -5,7 +5,8 @@ const MAX_STEPS = 200_000
 
 /**
  * Logarithms of the regularised incomplete gamma functions P(a, x) (`lower`) and Q(a, x) (`upper`), a > 0, x >= 0.
- * Relative accuracy of exp(result) about 1e-13, 1e-11 for a >= 1e5.
+ * Relative accuracy of exp(result) about 1e-12, 1e-11 for
+ * a >= 1e4. NaN where a is too large for them to settle (above 1e9 near the mean).
  * Source: series and continued fraction, Abramowitz and Stegun (1964), 6.5.29 and 6.5.31, the latter by Lentz's
  * method; the factor before them by Loader's deviance.
  */
@@ -24,11 +25,12 @@ export function logGammaTails(a: number, x: number): LogTails {
 function gammaSeries(a: number, x: number): number {
   let term = 1
   let sum = 1
-  for (let j = 1; j <= MAX_STEPS && term > sum * 1e-17; j++) {
+  for (let j = 1; j <= MAX_STEPS; j++) {
     term *= x / (a + j)
     sum += term
+    if (term < sum * 1e-17) return sum
   }
-  return sum
+  return NaN
 }
 
 function gammaFraction(a: number, x: number): number {
@@ -42,7 +44,7 @@ function gammaFraction(a: number, x: number): number {
     d = 1 / (numerator * d + b)
     c = b + numerator / c
     value *= c * d
-    if (Math.abs(c * d - 1) < 1e-16) return value
+    if (Math.abs(c * d - 1) < 1e-15) return value
   }
-  return value
+  return NaN
 }

@@ -4,11 +4,11 @@ import { HALF_LOG_TWO_PI, stirlingError } from './special'
 const REACH = 42
 
 /**
- * E f(S) for S = √(χ²_df / df), df > 0 (Infinity: S = 1): what turns a probability at known variance into one with
+ * E f(S) for S = √(χ²_df / df), df >= 1 (Infinity: S = 1): what turns a probability at known variance into one with
  * the variance estimated on `df` degrees of freedom. `f` is a smooth function of s > 0 in [0, 1]. `logBound(s)` is a
  * concave upper bound of log f(s) in log s, by which the stretch is found where density times f is not negligible,
  * so that the relative accuracy holds far into the tail (about 1e-11). `slope`: about the largest slope of f in
- * log s, where it exceeds 1.
+ * log s, where it exceeds 1. Throws RangeError for df below 1.
  * Source: trapezoidal rule in log s, which converges geometrically for an analytic integrand that dies away at both
  * ends; Trefethen and Weideman (2014), SIAM Review 56, 385–458.
  */
@@ -18,6 +18,7 @@ export function averageOverScale(
   logBound: (s: number) => number = () => 0,
   slope: number = 1,
 ): number {
+  if (!(df >= 1)) throw new RangeError(`the variance takes at least 1 degree of freedom, not ${df}`)
   if (df === Infinity) return f(1)
   const a = 0.5 * df
   const constant = Math.LN2 + 0.5 * Math.log(a) - HALF_LOG_TWO_PI - stirlingError(a)

@@ -45,10 +45,16 @@ export function rangeUpper(w: number, groups: number): number {
 }
 
 /**
- * P(Q > q) for the studentized range of `groups` >= 2 means on `df` > 0 degrees of freedom (Infinity: known
- * variance). Relative accuracy about 1e-10 down to 1e-100.
+ * P(Q > q) for the studentized range of `groups` >= 2 means on `df` >= 1 degrees of freedom (Infinity: known
+ * variance). Relative accuracy about 1e-11 down to 1e-100. NaN for q that is NaN. Throws RangeError for `groups` that
+ * is no integer or below 2, and for df below 1.
  */
 export function studentizedRangeUpper(q: number, groups: number, df: number): number {
+  if (!(Number.isSafeInteger(groups) && groups >= 2)) {
+    throw new RangeError(`the studentized range takes an integer number of groups, at least 2, not ${groups}`)
+  }
+  if (!(df >= 1)) throw new RangeError(`the studentized range takes at least 1 degree of freedom, not ${df}`)
+  if (Number.isNaN(q)) return NaN
   if (q <= 0) return 1
   if (q === Infinity) return 0
   const pairs = Math.log(groups * (groups - 1))

@@ -14,9 +14,10 @@ export type AdjustOptions = { m?: number; alpha?: number }
  * Sources: see the files of the procedures.
  */
 export function adjust(procedure: Procedure, p: readonly number[], options: AdjustOptions = {}): number[] {
-  const sorted = Float64Array.from(getKnown(p)).sort()
+  const sorted = getKnown(p).sort()
   const adjusted = getFunction(procedure)(sorted, getFamilySize(sorted.length, options), getLevel(options))
-  return p.map((value) => (Number.isNaN(value) ? NaN : (adjusted[findFirst(sorted, value)] ?? NaN)))
+  const find = createFinder(sorted)
+  return p.map((value) => (Number.isNaN(value) ? NaN : (adjusted[find(value)] ?? NaN)))
 }
 
 /** The function of the p-values; RangeError where the table has none. */
@@ -29,11 +30,14 @@ export function getFunction(procedure: Procedure): AdjustSorted {
   return row.adjust
 }
 
-function getKnown(p: readonly number[]): number[] {
+function getKnown(p: readonly number[]): Float64Array {
+  const known = new Float64Array(p.length)
+  let size = 0
   for (const value of p) {
     if (value < 0 || value > 1) throw new RangeError(`a p-value lies in [0, 1], not at ${value}`)
+    if (!Number.isNaN(value)) known[size++] = value
   }
-  return p.filter((value) => !Number.isNaN(value))
+  return known.subarray(0, size)
 }
 
 function getFamilySize(known: number, { m = known }: AdjustOptions): number {
@@ -48,14 +52,26 @@ function getLevel({ alpha = 0.05 }: AdjustOptions): number {
   return alpha
 }
 
-/** Index of the first element of ascending `sorted` that is at least `value`. */
-function findFirst(sorted: Float64Array, value: number): number {
-  let low = 0
-  let high = sorted.length
-  while (low < high) {
-    const middle = (low + high) >> 1
-    if ((sorted[middle] ?? 1) < value) low = middle + 1
-    else high = middle
+/**
+ * Finds the index of the first element of ascending `sorted`, all in [0, 1], that is at least a given value: by
+ * bisection within the stretch that a table of equal steps leads to. Equal p-values have equal adjusted values, so
+ * that looking them up is as good as carrying their places through the sorting, and faster.
+ */
+function createFinder(sorted: Float64Array): (value: number) => number {
+  const steps = Math.max(1, sorted.length)
+  const first = new Uint32Array(steps + 2).fill(sorted.length)
+  for (let i = sorted.length - 1; i >= 0; i--) first[Math.floor((sorted[i] ?? 1) * steps)] = i
+  for (let step = steps; step >= 0; step--) first[step] = Math.min(first[step] ?? 0, first[step + 1] ?? 0)
+
+  return (value) => {
+    const step = Math.floor(value * steps)
+    let low = first[step] ?? 0
+    let high = first[step + 1] ?? sorted.length
+    while (low < high) {
+      const middle = (low + high) >> 1
+      if ((sorted[middle] ?? 1) < value) low = middle + 1
+      else high = middle
+    }
+    return low
   }
-  return low
 }
