@@ -1,5 +1,6 @@
 'use server'
 
+import { z } from 'zod'
 import { answerAssignment, answerAssignmentInput } from '@/lib/desk/answer-assignment'
 import { closeManuscript, closeManuscriptInput } from '@/lib/desk/close-manuscript'
 import { composeLetterBody, composeLetterBodyInput } from '@/lib/desk/compose-letter-body'
@@ -15,6 +16,7 @@ import { runAuditAgain, runAuditAgainInput } from '@/lib/desk/run-audit-again'
 import { sendVerdictBack, sendVerdictBackInput } from '@/lib/desk/send-verdict-back'
 import { withdrawManuscript, withdrawManuscriptInput } from '@/lib/desk/withdraw-manuscript'
 import { writeAnswer, writeAnswerInput } from '@/lib/desk/write-answer'
+import { renderLetter } from '@/lib/letters/render-letter'
 import { action } from '@/lib/web/action'
 
 export const offerAction = action(offerAssignmentInput, offerAssignment)
@@ -27,6 +29,12 @@ export const closeAction = action(closeManuscriptInput, closeManuscript)
 export const runAuditAgainAction = action(runAuditAgainInput, runAuditAgain)
 export const handInAgainAction = action(handInAgainInput, handInAgain)
 
+export const previewLetterAction = action(
+  z.object({ body: z.string().max(200_000) }),
+  (_db, _actor, { body }) => ({
+    html: renderLetter(body).html,
+  }),
+)
 export const composeLetterAction = action(composeLetterBodyInput, composeLetterBody)
 export const draftVerdictAction = action(draftVerdictInput, draftVerdict)
 export const sendVerdictBackAction = action(sendVerdictBackInput, sendVerdictBack)
