@@ -37,3 +37,11 @@ function readCaption(pattern: RegExp, text: string): string | null {
   const closed = mark !== '' || rest === '' || /^[\p{Lu}(\d]/u.test(rest)
   return closed ? number : null
 }
+
+// the prompt of a statistics program before a command: "R> summary(fit)", "> t.test(x)", ". regress y x"
+const prompt = /^(?:R>|>{1,3}|In \[\d+\]:) ?[A-Za-z.(]/
+
+/** A command typed into a statistics program: what stands around it is output. */
+export function isCommand(text: string): boolean {
+  return prompt.test(text) && /[(=~]|<-/.test(text)
+}

@@ -3,7 +3,7 @@ import { findGutters, type Gutter } from './gutters'
 import { toRow, toRows, type Lane, type Row } from './rows'
 import { findSegments, type Segment } from './segments'
 import { findTables, type FoundTable } from './tables'
-import type { Frame, Word } from './words'
+import type { Frame } from './words'
 
 /** What follows what on a page: lines of text with the lane they stand in, and tables. */
 export type FlowItem = { kind: 'line'; row: Row; lane: Lane } | { kind: 'table'; table: FoundTable }
@@ -156,6 +156,7 @@ function orderBands(
     if (lane === null) crossing.push(segment)
     else inLane[lane]?.push(segment)
   }
+  takeLastLines(crossing, inLane, right - left)
   const crossingRows = toRows(crossing)
   for (const row of crossingRows) wide.push({ v: row.v, row, table: null })
   wide.sort((a, b) => b.v - a.v)
@@ -200,6 +201,27 @@ function orderBands(
   return items
 }
 
-export function wordsOf(row: Row): Word[] {
-  return row.segments.flatMap((segment) => segment.words)
+/** The last, short line of a full-width paragraph crosses no gutter and yet belongs to it. */
+function takeLastLines(crossing: Segment[], lanes: Segment[][], width: number): void {
+  lanes.forEach((lane, index) => {
+    for (const segment of lane) {
+      const above = crossing.some((c) => {
+        const drop = c.v - segment.v
+        const beneath = drop > 0.8 * segment.size && drop < 1.5 * segment.size
+        return (
+          beneath &&
+          Math.abs(c.size - segment.size) < 0.3 &&
+          Math.abs(c.u0 - segment.u0) < 2 &&
+          c.u1 - c.u0 > 0.55 * width
+        )
+      })
+      const alone = lanes.every(
+        (other, i) => i === index || !other.some((o) => Math.abs(o.v - segment.v) < 0.8 * segment.size),
+      )
+      if (above && alone) {
+        crossing.push(segment)
+        lanes[index] = (lanes[index] ?? []).filter((s) => s !== segment)
+      }
+    }
+  })
 }

@@ -1,4 +1,5 @@
 import { captionNumber, textOf } from './captions'
+import { findLineNumbers } from './line-numbers'
 import { toRow, type Row } from './rows'
 import { findSegments } from './segments'
 import type { Frame, Word } from './words'
@@ -63,68 +64,4 @@ function groupRows(words: readonly Word[]): Row[] {
     else rows.push(toRow([segment]))
   }
   return rows
-}
-
-// line numbers: "7", "214"
-const lineNumber = /^\d{1,5}$/
-
-/**
- * Line numbers: numbers at one abscissa outside the text, rising by a constant step down the page, on most
- * pages of the document and beside most of their lines.
- */
-function findLineNumbers(frames: readonly Frame[]): Set<Word> {
-  const found = frames.map(findNumberColumn)
-  const pages = found.filter((column) => column.length > 0).length
-  const full = frames.filter((frame) => frame.words.length > 80).length
-  if (pages === 0 || pages < 0.6 * full) return new Set()
-  return new Set(found.flat())
-}
-
-function findNumberColumn(frame: Frame): Word[] {
-  const candidates = frame.words.filter((word) => lineNumber.test(word.chars) && word.level === 0)
-  const groups = new Map<number, Word[]>()
-  for (const word of candidates)
-    for (const edge of [Math.round(word.u1 / 3), Math.round(word.u0 / 3) + 100_000]) {
-      const group = groups.get(edge) ?? []
-      groups.set(edge, group)
-      group.push(word)
-    }
-  let best: Word[] = []
-  const lines = new Set(frame.words.map((word) => Math.round(word.v))).size
-  for (const group of groups.values()) {
-    if (group.length < 4 || group.length <= best.length) continue
-    const sorted = [...group].sort((a, b) => b.v - a.v)
-    const steps = sorted.slice(1).map((word, i) => Number(word.chars) - Number(sorted[i]?.chars))
-    const step = steps[0] ?? 0
-    const regular = steps.filter((s) => s === step || s === 1).length
-    if (step < 1 || regular < 0.85 * steps.length) continue
-    if (!isOutside(frame, sorted) || sorted.length * step < 0.4 * lines) continue
-    best = sorted
-  }
-  return best.length > 0 ? extend(frame, best) : best
-}
-
-function isOutside(frame: Frame, column: readonly Word[]): boolean {
-  const left = Math.min(...column.map((w) => w.u0))
-  const right = Math.max(...column.map((w) => w.u1))
-  let before = 0
-  let after = 0
-  for (const word of frame.words) {
-    if (word.u1 < left - 1) before++
-    if (word.u0 > right + 1) after++
-  }
-  return before < 0.02 * frame.words.length || after < 0.02 * frame.words.length
-}
-
-/** Numbers of another width in the same column (9, 10, 100). */
-function extend(frame: Frame, column: readonly Word[]): Word[] {
-  const left = Math.min(...column.map((w) => w.u0))
-  const right = Math.max(...column.map((w) => w.u1))
-  const size = column[0]?.size ?? 0
-  return frame.words.filter(
-    (w) =>
-      lineNumber.test(w.chars) &&
-      Math.abs(w.size - size) < 0.6 &&
-      (Math.abs(w.u1 - right) < 3 || Math.abs(w.u0 - left) < 3),
-  )
 }

@@ -11,7 +11,31 @@ const raisedPlain = '0123456789+-=()n'
 const lowered = '₀₁₂₃₄₅₆₇₈₉₊₋₌₍₎'
 const loweredPlain = '0123456789+-=()'
 
+// the standard encoding of symbol fonts, kept in the private use area
+const symbols: Readonly<Record<string, string>> = {
+  '\uf02b': '+',
+  '\uf02d': '-',
+  '\uf03c': '<',
+  '\uf03d': '=',
+  '\uf03e': '>',
+  '\uf0a3': '≤',
+  '\uf0b1': '±',
+  '\uf0b3': '≥',
+  '\uf0b4': '×',
+  '\uf0bb': '≈',
+  '\uf02a': '*',
+  '\uf061': 'α',
+  '\uf062': 'β',
+  '\uf063': 'χ',
+  '\uf068': 'η',
+  '\uf06d': 'μ',
+  '\uf072': 'ρ',
+  '\uf073': 'σ',
+  '\uf074': 'τ',
+}
+
 const plain: Readonly<Record<string, string>> = {
+  ...symbols,
   '\u2217': '*',
   '\u204e': '*',
   '\uff0a': '*',

@@ -1,12 +1,13 @@
 import type { LaidOut, PdfTable, Place, ReadDocument } from '../types'
+import { repairGlyphs } from './damage'
 import { readFlow, type FlowItem } from './flow'
 import { dropFurniture } from './furniture'
 import { dropHiddenLayers } from './layers'
 import { measureDigits } from './glyphs'
-import { depthOf, kindOfHeading, readRunIn, stripNumber } from './headings'
-import { textOf, isFigureCaption } from './captions'
-import { toParts, type Paragraph, type Part, type Usual } from './paragraphs'
-import { joinRows, readVocabulary, toProse, type Section, type Vocabulary } from './prose'
+import { textOf } from './captions'
+import { toParts, type Part, type Usual } from './paragraphs'
+import { joinRows, readVocabulary, toProse, type Vocabulary } from './prose'
+import { findSections, toMark, type Mark } from './sections'
 import type { FoundTable } from './tables'
 import { readFrames, type Frame } from './words'
 import type { Origin } from './write-line'
@@ -27,16 +28,11 @@ export function layOut(document: ReadDocument): LaidOut {
   const unread = pages
     .filter(({ frames }) => frames.length === 0)
     .map(({ page }) => toUnread(page.number, page.width, page.height))
-  const main = dropFurniture(dropHiddenLayers(pages.flatMap(({ frames }) => frames.slice(0, 1))))
-  const usual = findUsual(main)
-  const flows = pages.flatMap(({ page, frames }) => {
-    const kept = main.find((frame) => frame.page === page)
-    const others = frames.slice(1).filter((frame) => frame.words.length > 25)
-    return [...(kept && kept.words.length > 0 ? [kept] : []), ...others].map((frame) => ({
-      page: page.number,
-      items: readFlow(frame, usual.size),
-    }))
-  })
+  const told = pages.flatMap(({ frames }) => frames.filter((frame, i) => i === 0 || frame.words.length > 25))
+  repairGlyphs(told)
+  const frames = dropFurniture(dropHiddenLayers(told)).filter((frame) => frame.words.length > 0)
+  const usual = findUsual(frames)
+  const flows = frames.map((frame) => ({ page: frame.page.number, items: readFlow(frame, usual.size) }))
   return write(toParts(flows, usual), flows, unread)
 }
 
@@ -85,7 +81,7 @@ function write(parts: readonly Part[], flows: readonly { items: FlowItem[] }[], 
   const chunks: string[] = []
   const origins: Origin[] = []
   const tables: PdfTable[] = []
-  const heads: { at: number; text: string; kind: Section['kind'] | null; depth: number }[] = []
+  const marks: Mark[] = []
   let length = 0
   for (const part of parts) {
     if (part.kind === 'table') {
@@ -99,63 +95,16 @@ function write(parts: readonly Part[], flows: readonly { items: FlowItem[] }[], 
       origins.push(null, null)
       length += 2
     }
-    noteHeading(heads, part, written.text, length)
+    marks.push(toMark(part, written.text, length))
     chunks.push(written.text)
     for (const origin of written.origins) origins.push(origin)
     length += written.text.length
   }
-  const text = chunks.join('')
-  return { prose: toProse(text, origins, toSections(heads, length)), tables, unread }
+  return { prose: toProse(chunks.join(''), origins, findSections(marks, length)), tables, unread }
 }
 
 function* linesOf(flows: readonly { items: FlowItem[] }[]): Generator<string> {
   for (const { items } of flows) for (const item of items) if (item.kind === 'line') yield textOf(item.row)
-}
-
-function noteHeading(
-  heads: { at: number; text: string; kind: Section['kind'] | null; depth: number }[],
-  part: Paragraph,
-  text: string,
-  at: number,
-): void {
-  const run = readRunIn(text)
-  if (run) heads.push({ at, text: run.heading, kind: run.kind, depth: 1 })
-  else if (part.kind === 'heading') heads.push({ at, text, kind: kindOfHeading(text), depth: depthOf(text) })
-  else if (part.kind === 'aside' && isFigureCaption(text) && lastKind(heads) === 'references')
-    heads.push({ at, text: '', kind: 'other', depth: 1 })
-}
-
-function lastKind(heads: readonly { kind: Section['kind'] | null }[]): Section['kind'] | null {
-  for (let i = heads.length - 1; i >= 0; i--) {
-    const kind = heads[i]?.kind
-    if (kind) return kind
-  }
-  return null
-}
-
-function toSections(
-  heads: readonly { at: number; text: string; kind: Section['kind'] | null; depth: number }[],
-  length: number,
-): Section[] {
-  if (length === 0) return []
-  const sections: Section[] = []
-  let current: Section['kind'] = 'title'
-  let start = 0
-  let heading = ''
-  for (const head of heads) {
-    if (head.kind === null && current === 'title') continue
-    if (head.at > start) sections.push({ kind: current, heading, start, end: head.at })
-    current = head.kind ?? current
-    heading = stripNumber(head.text)
-    start = head.at
-  }
-  sections.push({
-    kind: sections.length === 0 && start === 0 && current === 'title' ? 'other' : current,
-    heading,
-    start,
-    end: length,
-  })
-  return sections
 }
 
 function toTable(found: FoundTable, page: number, offset: number, vocabulary: Vocabulary): PdfTable {

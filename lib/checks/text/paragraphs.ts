@@ -94,6 +94,14 @@ function fontOf(row: Row): string {
   return best
 }
 
+/** What a heading looks like: headings of one rank look alike. */
+export function styleOf(paragraph: Paragraph): string {
+  const row = paragraph.rows[0]
+  if (!row) return ''
+  const letters = textOf(row).replace(/[^\p{L}]/gu, '')
+  return `${fontOf(row)}|${row.size.toFixed(1)}|${letters === letters.toUpperCase() ? 'capitals' : ''}`
+}
+
 function looksLikeHeading(line: Line, usual: Usual): boolean {
   const { text, row } = line
   if (text.length > 140 || row.segments.length > 3) return false

@@ -1,5 +1,4 @@
-import type { Box, Prose, SectionKind } from '../types'
-import { boxOf } from './table-cells'
+import type { Box, Prose } from '../types'
 import { normalise } from './normalise'
 import type { Row } from './rows'
 import { toPageBox } from './words'
@@ -34,7 +33,7 @@ export function joinRows(rows: readonly Row[], vocabulary: Vocabulary): Written 
     const line = writeLine(row.segments.flatMap((segment) => segment.words))
     if (line.text === '') continue
     if (text !== '') {
-      const join = howToJoin(text, line.text, vocabulary)
+      const join = howToJoin(text.slice(-60), line.text.slice(0, 60), vocabulary)
       if (join === 'drop-hyphen') {
         text = text.slice(0, -1)
         origins.pop()
@@ -77,10 +76,8 @@ function howToJoin(before: string, after: string, vocabulary: Vocabulary): 'spac
   return both && tail.length > 2 && right.length > 3 ? 'close' : 'drop-hyphen'
 }
 
-export type Section = { kind: SectionKind; heading: string; start: number; end: number }
-
 /** Prose with the way back from every character to its page and box. */
-export function toProse(text: string, origins: readonly Origin[], sections: Section[]): Prose {
+export function toProse(text: string, origins: readonly Origin[], sections: Prose['sections']): Prose {
   const nearest = (offset: number): Origin => {
     for (let step = 0; step < origins.length; step++) {
       const before = origins[offset - step] ?? null
@@ -143,5 +140,3 @@ function findBoxes(origins: readonly Origin[], start: number, end: number): Box[
   }
   return stretches.map((s) => toPageBox(s.origin.word.turn, s.u0, s.v0, s.u1, s.v1))
 }
-
-export { boxOf }

@@ -36,7 +36,7 @@ function toLine(row: Row, columns: readonly Column[]): Line {
   const cells: Word[][] = columns.map(() => [])
   const spans: Line['spans'] = []
   for (const segment of row.segments) {
-    for (const piece of cut(segment.words, columns)) {
+    for (const piece of cut(segment.words, columns).flatMap((p) => cutByEdges(p, columns))) {
       const u0 = Math.min(...piece.map((w) => w.u0))
       const u1 = Math.max(...piece.map((w) => w.u1))
       const hit = columns.map((c, i) => ({ i, overlap: Math.min(u1, c.to) - Math.max(u0, c.from) }))
@@ -98,6 +98,30 @@ function backOverLabels(lines: readonly Line[], first: number): number {
     end = at
   }
   return end
+}
+
+/**
+ * A head over several columns whose words end (or begin) where the columns do: "Alzheimer Other dementias"
+ * above two columns of numbers set flush right.
+ */
+function cutByEdges(words: Word[], columns: readonly Column[]): Word[][] {
+  const u0 = words[0]?.u0 ?? 0
+  const u1 = words.at(-1)?.u1 ?? 0
+  const spanned = columns.filter((c) => Math.min(u1, c.to) - Math.max(u0, c.from) > 1)
+  if (spanned.length < 2 || words.length < spanned.length) return [words]
+  const ends = spanned.map((c) => words.findIndex((word) => Math.abs(word.u1 - c.to) < 0.3 * word.size))
+  const begins = spanned.map((c) => words.findIndex((word) => Math.abs(word.u0 - c.from) < 0.3 * word.size))
+  const cuts = isRising(ends)
+    ? ends.slice(0, -1).map((at) => at + 1)
+    : isRising(begins)
+      ? begins.slice(1)
+      : []
+  if (cuts.length === 0) return [words]
+  return [0, ...cuts].map((from, i) => words.slice(from, cuts[i] ?? words.length))
+}
+
+function isRising(indices: readonly number[]): boolean {
+  return indices.every((at, i) => at >= 0 && (i === 0 || at > (indices[i - 1] ?? -1)))
 }
 
 function isBody(line: Line): boolean {

@@ -1,5 +1,5 @@
 import type { PdfCell } from '../types'
-import { captionNumber, isFigureCaption, textOf } from './captions'
+import { captionNumber, isCommand, isFigureCaption, textOf } from './captions'
 import { cutFinely, isProseLine, median, type Lane, type Row } from './rows'
 import { fillCells, isNumeric } from './table-cells'
 import { cutAtColumns, findColumns, type Column } from './table-columns'
@@ -62,7 +62,7 @@ export function findTables(lane: Lane, bodySize: number): FoundTable[] {
 
 /** Two or more pieces apart from each other, none of which is a line of prose. */
 function isTabular(row: Row, lane: Lane): boolean {
-  if (row.segments.length < 2 || isProseLine(row)) return false
+  if (row.segments.length < 2 || isProseLine(row) || isCommand(textOf(row))) return false
   const width = lane.right - lane.left
   return row.segments.every((s) => s.words.length <= 9 || s.u1 - s.u0 < 0.45 * width)
 }
@@ -77,7 +77,7 @@ function growDown({ lane, rows, tabular, pitch }: Reading, from: number): number
     if (!row || !before) break
     if (before.v - row.v > Math.max(3.2 * row.size, 2.2 * pitch)) break
     const text = textOf(row)
-    if (captionNumber(text) !== null || isFigureCaption(text)) break
+    if (captionNumber(text) !== null || isFigureCaption(text) || isCommand(text)) break
     if (tabular[at]) {
       end = at + 1
       bridged = 0
@@ -182,7 +182,7 @@ function absorb(
     if (row.u0 < (columns[0]?.from ?? 0) - 0.1 * (lane.right - lane.left)) break
     const pieces = cutAtColumns(row, columns)
     if (pieces === null || pieces < Math.max(2, 0.6 * (columns.length - 1))) break
-    if (captionNumber(textOf(row)) !== null) break
+    if (captionNumber(textOf(row)) !== null || isCommand(textOf(row))) break
     at = next
   }
   return at
