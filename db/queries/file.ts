@@ -1,6 +1,10 @@
+import { eq } from 'drizzle-orm'
 import type { Reader } from '@/db/client'
+import { files, rounds } from '@/db/schema'
 import type { Actor } from '@/lib/rules/roles'
+import { seesSubmitter } from '@/lib/rules/sight'
 import type { FileKind } from '@/lib/rules/words'
+import { findViewing, hideFileName } from './viewing'
 
 export type StoredFile = {
   id: string
@@ -13,6 +17,27 @@ export type StoredFile = {
   bytes: number
 }
 
-export function getFile(_db: Reader, _actor: Actor, _fileId: string): StoredFile | null {
-  throw new Error('not yet')
+/** A file of a round that is not handed in is its submitter's alone. */
+export function getFile(db: Reader, actor: Actor, fileId: string): StoredFile | null {
+  const row = db
+    .select({
+      id: files.id,
+      manuscriptId: rounds.manuscriptId,
+      kind: files.kind,
+      name: files.name,
+      mediaType: files.mediaType,
+      sha256: files.sha256,
+      bytes: files.bytes,
+      handedInAt: rounds.handedInAt,
+    })
+    .from(files)
+    .innerJoin(rounds, eq(rounds.id, files.roundId))
+    .where(eq(files.id, fileId))
+    .get()
+  if (!row) return null
+  const { handedInAt, ...file } = row
+  const viewing = findViewing(db, actor, file.manuscriptId, 'file.read')
+  if (!viewing || (handedInAt === null && viewing.sight !== 'submitter')) return null
+  const named = seesSubmitter(viewing.sight, viewing.blinding)
+  return named ? file : { ...file, name: hideFileName(file.kind, file.name) }
 }

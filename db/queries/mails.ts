@@ -1,4 +1,7 @@
+import { count, desc, eq } from 'drizzle-orm'
 import type { Reader } from '@/db/client'
+import { mails } from '@/db/schema'
+import { may } from '@/lib/rules/permissions'
 import type { Actor } from '@/lib/rules/roles'
 import type { MailStatus } from '@/lib/rules/words'
 
@@ -19,9 +22,31 @@ export type MailPage = { rows: MailRow[]; total: number; page: number; pageSize:
 
 /** The outbox, newest first. For administrators. */
 export function listMails(
-  _db: Reader,
-  _actor: Actor,
-  _filter: { status?: MailStatus; page?: number; pageSize?: number } = {},
+  db: Reader,
+  actor: Actor,
+  filter: { status?: MailStatus; page?: number; pageSize?: number } = {},
 ): MailPage {
-  throw new Error('not yet')
+  const { status, page = 1, pageSize = 50 } = filter
+  if (!may(actor, 'outbox.read')) return { rows: [], total: 0, page, pageSize }
+  const where = status && eq(mails.status, status)
+  const rows = db
+    .select({
+      id: mails.id,
+      template: mails.template,
+      recipient: mails.recipient,
+      subject: mails.subject,
+      status: mails.status,
+      attempts: mails.attempts,
+      trouble: mails.trouble,
+      createdAt: mails.createdAt,
+      sentAt: mails.sentAt,
+    })
+    .from(mails)
+    .where(where)
+    .orderBy(desc(mails.createdAt), desc(mails.id))
+    .limit(pageSize)
+    .offset((page - 1) * pageSize)
+    .all()
+  const counted = db.select({ n: count() }).from(mails).where(where).get()
+  return { rows, total: counted?.n ?? 0, page, pageSize }
 }

@@ -1,4 +1,4 @@
-import type { Severity } from '@/lib/checks/vocabulary'
+import { SEVERITIES, type Severity } from '@/lib/checks/vocabulary'
 import type { Verdict } from '@/lib/rules/words'
 import { escapeMarkdown } from './escape-markdown'
 
@@ -56,13 +56,6 @@ const sections: Record<Severity, { heading: string; lead: string }> = {
   note: { heading: 'Notes', lead: 'For your information; nothing has to be done.' },
 }
 
-const order: readonly Severity[] = ['major', 'minor', 'question', 'note']
-
-/** The letters' points in their order: by severity, within it as the reviewer has them. */
-export function orderPoints<T extends { severity: Severity }>(points: readonly T[]): T[] {
-  return order.flatMap((severity) => points.filter((point) => point.severity === severity))
-}
-
 /**
  * The letter to the authors as Markdown, for the reviewer to edit. It names nobody: who the authors and the
  * reviewer are is for the house rules to say.
@@ -90,7 +83,7 @@ function aboutLine({ reference, title, round }: Letter): string {
 function pointSections({ points, cite }: Letter): string[] {
   if (points.length === 0) return ['There is no point that we ask you to deal with.']
   let number = 0
-  return order.flatMap((severity) => {
+  return SEVERITIES.flatMap((severity) => {
     const chosen = points.filter((point) => point.severity === severity)
     if (chosen.length === 0) return []
     const { heading, lead } = sections[severity]

@@ -62,9 +62,9 @@ export function listActions(actor: Actor, standing: Standing, at: Situation): Ac
   const atWork = at.reviewing && at.state === 'in review'
   const allowed: Record<Action, boolean> = {
     changeDraft: begun && can('draft.change'),
-    discardDraft: at.state === 'draft' && can('draft.change'),
+    discardDraft: begun && can('draft.change'),
     addFile: (begun && can('draft.change')) || (at.state === 'stuck' && can('manuscript.replace-file')),
-    removeFile: begun && can('draft.change'),
+    removeFile: (begun && can('draft.change')) || (at.state === 'stuck' && can('manuscript.replace-file')),
     handIn:
       (at.state === 'draft' && can('manuscript.hand-in')) ||
       (at.state === 'returned' && at.roundBegun && can('manuscript.open-round')),
