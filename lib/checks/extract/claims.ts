@@ -83,7 +83,14 @@ export function findClaims(laidOut: LaidOut, sentences: readonly Sentence[]): Re
         })),
       )
     }
-  return claims.map((claim, i) => ({ ...claim, id: `c${i + 1}` }))
+  // Dunn's test with a named adjustment anywhere: his name is that of the statistic everywhere
+  const adjusted = claims.some(
+    ({ procedure, sentence }) =>
+      ADJUSTMENTS.has(procedure) && /\bDunn(?!et|\S*\s?[-–]\s?(?:Š|S[iı]d|Bonf))/.test(sentence),
+  )
+  return claims
+    .filter(({ procedure }) => procedure !== 'dunn' || !adjusted)
+    .map((claim, i) => ({ ...claim, id: `c${i + 1}` }))
 }
 
 type Bare = Omit<ReadClaim, 'id' | 'offset' | 'section' | 'place'>
@@ -129,7 +136,7 @@ function findClaimed(text: string, section: SectionKind): ClaimedProcedure[] {
     /\b(?:level|alpha|α|threshold|significan|signific|correct|adjust|p)\b|[pP]\s?[<≤]/i.test(text)
   )
     return ['bonferroni']
-  if (findMultiplication(text)) return ['bonferroni']
+  if (/\b[pP][\s-]?values?\b|\b[pP]s\b/.test(text) && findMultiplication(text)) return ['bonferroni']
   if (!saysCorrected(text) && !saysPCorrected(text)) return []
   return [isQuotient(text) ? 'bonferroni' : 'unspecified']
 }

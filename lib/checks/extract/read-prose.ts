@@ -18,18 +18,22 @@ export function readProse(
   sentences: readonly Sentence[],
   names: Names,
   alpha: number,
+  controls: readonly string[] = [],
 ): Part {
+  const known = { ...names, control: findControl(names, controls) }
   const parts = sentences
     .map(findReports)
     .filter((found): found is SentenceReports => found !== null)
-    .map((found) => readSentence(laidOut, found, names, alpha))
+    .map((found) => readSentence(laidOut, found, known, alpha))
   return {
     reports: parts.flatMap(({ reports }) => reports),
     statistics: parts.flatMap(({ statistics }) => statistics),
   }
 }
 
-function readSentence(laidOut: LaidOut, found: SentenceReports, names: Names, alpha: number): Part {
+type Known = Names & { control: string | null }
+
+function readSentence(laidOut: LaidOut, found: SentenceReports, names: Known, alpha: number): Part {
   const { sentence, reports, statistics } = found
   const { text, start, section, heading } = sentence
   const idOf = (kind: 'p' | 's', at: number) => `text-${kind}-${start + at}`
@@ -157,7 +161,7 @@ function isAgainst(call: 'significant' | 'not significant', p: PrintedP, alpha: 
 }
 
 /** The pair that a clause compares: names known from tables first, else by its own grammar. */
-function findComparison({ before, after }: Clause, text: string, names: Names): [string, string] | null {
+function findComparison({ before, after }: Clause, text: string, names: Known): [string, string] | null {
   const label = /^\s*(?:for|in|between)\s[^,;()]*/i.exec(after)?.[0] ?? ''
   for (const stretch of [before, label]) {
     const [a, b, more] = findKnown(stretch, names.groups)
@@ -166,7 +170,19 @@ function findComparison({ before, after }: Clause, text: string, names: Names): 
   const pair = findPair(before.replace(/\(\s*$/, '')) ?? findPair(label)
   if (pair) return pair
   const [a, b, more] = findKnown(text, names.groups)
-  return a && b && !more ? [a, b] : null
+  if (a && b && !more) return [a, b]
+  // one treatment alone, where all are compared with one control
+  const [only, other] = findKnown(before, names.groups)
+  return only && !other && names.control && only.toLowerCase() !== names.control.toLowerCase()
+    ? [only, names.control]
+    : null
+}
+
+/** The one group with which all others are compared: in every pair of the tables, and named as such or in three pairs. */
+function findControl(names: Names, stated: readonly string[]): string | null {
+  const [first] = names.shared
+  if (names.shared.length === 1 && first) return first
+  return names.groups.length === 0 ? null : (stated[0] ?? null)
 }
 
 /** 'p = .03, Bonferroni-corrected', '(p = .03, uncorrected)', 'after Bonferroni correction (p = .03)'. */

@@ -16,10 +16,19 @@ export function read(laidOut: LaidOut, table: ReadTable | null, rules: HouseRule
   const sentences = splitSentences(laidOut.prose)
   const alpha = findGeneralAlpha(laidOut, sentences, rules.alpha)
   const claims = findClaims(laidOut, sentences)
-  const inTables = readPdfTables(laidOut, alpha.value)
+  const controls = claims.flatMap(({ scope, sentence }) =>
+    scope.control === null ? [] : [{ name: scope.control, sentence }],
+  )
+  const inTables = readPdfTables(laidOut, alpha.value, controls)
   const inResults = table ? readResultsTable(table, alpha.value) : { reports: [], statistics: [] }
   const names = collectNames([...inTables.reports, ...inResults.reports])
-  const inText = readProse(laidOut, sentences, names, alpha.value)
+  const inText = readProse(
+    laidOut,
+    sentences,
+    names,
+    alpha.value,
+    controls.map(({ name }) => name),
+  )
   const parts = [inText, inTables, inResults]
   return number({
     alpha,

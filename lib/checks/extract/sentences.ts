@@ -86,6 +86,6 @@ function endsSentence(body: string, from: number, stop: number, width: number): 
   const next = body.slice(stop + width - 1, stop + width + 1)
   // a lower-case beginning ends a sentence only after a closing bracket or a word, as in '… (p = .03). p-values'
   if (/^[a-z]/.test(next) && !/^p[\s-]/i.test(next)) return false
-  if (/^\d/.test(next)) return /[a-z)\]]\.$/.test(body.slice(0, stop))
+  if (/^-?\d/.test(next)) return /[a-z)\]]\.$/.test(body.slice(0, stop))
   return true
 }

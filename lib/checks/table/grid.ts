@@ -4,7 +4,9 @@ import type { Box, ReadReport, ReadStatistic, SectionKind } from '../types'
 import type { Call, Relation, Source, Test } from '../vocabulary'
 import { splitPair } from '../extract/grammar/comparison'
 import { fold } from '../extract/grammar/fold'
+import { findProcedures } from '../extract/grammar/procedure'
 import { isMark, isNotSignificantMark, readCall, readLegend, readNumber, readP, type Legend } from './cell'
+import type { Control } from './pdf-table'
 import { findRoles, type ColumnRole } from './roles'
 
 /** A table ready to be read, from a page or from a results file: one header text a column, body cells as texts. */
@@ -40,7 +42,7 @@ type Reader = {
 }
 
 /** Reports and statistics of one table, a row for each comparison or outcome. Ids are provisional. */
-export function readGrid(grid: Grid): Part {
+export function readGrid(grid: Grid, controls: readonly Control[] = []): Part {
   const columns = grid.headers.map((header, c) => ({
     header,
     cells: grid.rows.map(({ cells }) => cells[c] ?? ''),
@@ -52,7 +54,9 @@ export function readGrid(grid: Grid): Part {
     roles: roles.map((role, c) => statedScale(role, around, grid.headers[c] ?? '')),
     legend: readLegend(around),
     df: findDf(around),
-    control: findControl(`${grid.caption}. ${grid.headers.join('. ')}. ${grid.notes}`),
+    control:
+      findControl(`${grid.caption}. ${grid.headers.join('. ')}. ${grid.notes}`) ??
+      controlOf(grid, roles, controls),
     starred: columns.map(({ cells }) =>
       cells.some((cell) => /[*†‡]/.test(readP(cell)?.mark ?? readNumber(cell)?.mark ?? '')),
     ),
@@ -222,6 +226,20 @@ function nameRow({ grid, roles, control }: Reader, { cells }: GridRow, heading: 
   return { comparison: null, outcome: textOf('outcome') ?? label ?? group ?? comparison ?? heading }
 }
 
+/**
+ * The control that the text names, where this table's first column is what the text compares with it: its head
+ * stands in that sentence ('each of the five depths was compared with the surface' over a column 'Depth').
+ */
+function controlOf(grid: Grid, roles: readonly ColumnRole[], controls: readonly Control[]): string | null {
+  const c = roles.findIndex(({ kind }) => kind === 'group' || kind === 'label' || kind === 'outcome')
+  const head = fold(grid.headers[c] ?? '')
+    .toLowerCase()
+    .replace(/[^a-z]+.*$/, '')
+    .replace(/s$/, '')
+  if (c < 0 || head.length < 3) return null
+  return controls.find(({ sentence }) => new RegExp(`\\b${head}s?\\b`, 'i').test(sentence))?.name ?? null
+}
+
 /** Rows are treatments held against one control only where the table says so. */
 const isAgainstControl = (grid: Grid): boolean => !/correlat/i.test(grid.caption)
 
@@ -312,7 +330,8 @@ function dfOfRow({ grid, roles, df }: Reader, row: GridRow, column: number, test
   if (test === 'z' || test === 'other') return []
   const at = (c: number, from = row) => readNumber(from.cells[c] ?? '')?.value ?? null
   const columns = roles.flatMap((role, c) => (role.kind === 'df' ? [{ c, index: role.index }] : []))
-  const before = columns.filter(({ c }) => c < column)
+  const since = roles.slice(0, column).findLastIndex(({ kind }) => kind === 'statistic')
+  const before = columns.filter(({ c }) => c < column && c > since)
   const near = before.length > 0 ? before : columns
   const first = near.filter(({ index }) => index === 0).pop() ?? near[near.length - 1]
   const own = first === undefined ? null : at(first.c)
@@ -366,6 +385,13 @@ function findDf(text: string): number[] {
 function statedScale(role: ColumnRole, around: string, header: string): ColumnRole {
   if (role.kind !== 'p' || role.scale !== 'unknown') return role
   const text = fold(around)
+  const byMark = markedNote(header, text)
+  if (byMark !== null) {
+    const [mention] = findProcedures(byMark)
+    if (/unadjusted|uncorrected|not (?:adjusted|corrected)/i.test(byMark)) return { ...role, scale: 'raw' }
+    if (mention || /adjust|correct/i.test(byMark))
+      return { kind: 'p', scale: 'adjusted', procedure: mention?.procedure ?? null }
+  }
   if (
     /\b(?:unadjusted|uncorrected|raw|nominal)\s[pP]\b|[pP](?:[\s-]?values?)?\s(?:\w+\s){0,4}(?:unadjusted|uncorrected|not (?:adjusted|corrected)|nominal)/i.test(
       text,
@@ -380,6 +406,16 @@ function statedScale(role: ColumnRole, around: string, header: string): ColumnRo
   )
     return { ...role, scale: 'adjusted' }
   return role
+}
+
+/** The note of the mark on a head, 'p†' with '†, false discovery rate correction …'; null where there is none. */
+function markedNote(header: string, notes: string): string | null {
+  const mark = /([*†‡§#¶]+)\s*$|\^\{?([a-z])\}?\s*$/.exec(fold(header).trim())
+  const sign = mark?.[1] ?? mark?.[2]
+  if (!sign) return null
+  const at = notes.search(new RegExp(`(?:^|[\\s.;^])${sign.replace(/[*^]/g, '\\$&')}\\s?[,:=)]?\\s`))
+  if (at < 0) return null
+  return notes.slice(at + 1).split(/[.;](?:\s|$)/)[0] ?? null
 }
 
 function roleOfRow(

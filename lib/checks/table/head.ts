@@ -1,4 +1,5 @@
 import { fold } from '../extract/grammar/fold'
+import { isMark, readNumber, readP } from './cell'
 
 /** Words by which a line is told to be one of heads: 'p', 't', 'df', 'SE', 'Comparison', 'Group A', 'n', 'mean', 'P adj'. */
 const HEAD =
@@ -6,3 +7,14 @@ const HEAD =
 
 /** Whether a cell of a line looks like the head of a column. */
 export const roleIsKnown = (cell: string): boolean => HEAD.test(fold(cell).trim())
+
+/** Heads that no body cell would hold: 'Pr(>|z|)', 'p', 'p-value', 't value', 'z value', 'F value', 'Std. Error', 'df', 'SE'. */
+const PLAIN_HEAD =
+  /^(?:p|P|q|t|F|z|r|df|d\.f\.|SE|SD|CI|95\s?% CI|χ2|pr\s?\(>.*|p[\s.-]?val(?:ue)?s?|p\s?adj.*|adj.*p.*|[tzF][\s-]?(?:value|ratio|statistic|stat)|std\.?\s?err(?:or)?\.?|estimate|sig\.?|diff\w*\.?|sum sq|mean sq|chisq|mean)$/i
+
+/** Whether a line in the body of a table is one of heads: two or more plain heads and no number. */
+export function isHeadLine(cells: readonly string[]): boolean {
+  const filled = cells.map((cell) => fold(cell).trim()).filter((cell) => cell !== '')
+  if (filled.some((cell) => readNumber(cell) !== null || readP(cell) !== null || isMark(cell))) return false
+  return filled.filter((cell) => PLAIN_HEAD.test(cell)).length >= 2
+}

@@ -1,15 +1,15 @@
 import type { LaidOut, PdfTable, SectionKind } from '../types'
-import { readGrid, type Grid, type GridRow, type Part } from './grid'
-import { readInCells } from './in-cells'
 import { readCorrelations } from './correlations'
+import { readGrid, type Grid, type GridRow, type Part } from './grid'
+import { isHeadLine } from './head'
+import { readInCells } from './in-cells'
 
-/** Reports and statistics of every table found on the pages. */
-export function readPdfTables(laidOut: LaidOut, alpha: number): Part {
-  const parts = laidOut.tables.map((table, i) => {
-    const grid = toGrid(laidOut, table, i, alpha)
+/** Reports and statistics of every table found on the pages. `controls`: groups that the text compares all others with. */
+export function readPdfTables(laidOut: LaidOut, alpha: number, controls: readonly Control[] = []): Part {
+  const parts = toGrids(laidOut, alpha).map((grid) => {
     const matrix = readCorrelations(grid)
     if (matrix) return matrix
-    const read = readGrid(grid)
+    const read = readGrid(grid, controls)
     const inCells = readInCells(grid, read)
     return {
       reports: [...read.reports, ...inCells.reports],
@@ -22,32 +22,65 @@ export function readPdfTables(laidOut: LaidOut, alpha: number): Part {
   }
 }
 
-function toGrid(laidOut: LaidOut, table: PdfTable, index: number, alpha: number): Grid {
-  const rows: GridRow[] = table.rows.map((cells, r) => ({
-    cells: cells.map(({ text }) => text),
-    boxes: cells.map(({ boxes }) => boxes),
-    number: null,
-    index: r,
-  }))
-  return {
-    key: `table${index}`,
-    source: 'pdf-table',
-    page: table.page,
-    sheet: null,
-    table: index,
-    caption: table.caption,
-    notes: table.notes,
-    headers: Array.from({ length: table.columns }, (_, c) =>
-      table.header
-        .map((row) => row[c]?.text.trim() ?? '')
-        .filter((text) => text !== '')
-        .join(' | '),
-    ),
-    rows,
-    offset: table.offset,
-    section: sectionAt(laidOut, table.offset),
-    alpha,
-  }
+/** A control named in the text, with the sentence that names it. */
+export type Control = { name: string; sentence: string }
+
+/**
+ * The grids of all tables. A line of heads within a table begins a grid of its own; a table without caption that
+ * has the heads or the width of the one before it, on the same or the next page, goes on with that one.
+ */
+function toGrids(laidOut: LaidOut, alpha: number): Grid[] {
+  const grids: Grid[] = []
+  laidOut.tables.forEach((table, i) => {
+    const previous = grids[grids.length - 1]
+    for (const [k, { headers, rows }] of cutAtHeads(table).entries()) {
+      const last = k === 0 ? previous : undefined
+      const goesOn =
+        last !== undefined &&
+        table.caption.trim() === '' &&
+        last.page !== null &&
+        table.page - last.page <= 1 &&
+        headers.length === last.headers.length &&
+        (headers.every((head) => head === '') || headers.join('|') === last.headers.join('|'))
+      grids.push({
+        key: `table${i}-${k}`,
+        source: 'pdf-table',
+        page: table.page,
+        sheet: null,
+        table: i,
+        caption: goesOn ? last.caption : table.caption,
+        notes: goesOn ? `${last.notes} ${table.notes}`.trim() : table.notes,
+        headers: goesOn ? last.headers : headers,
+        rows,
+        offset: table.offset,
+        section: sectionAt(laidOut, table.offset),
+        alpha,
+      })
+    }
+  })
+  return grids
+}
+
+function cutAtHeads(table: PdfTable): { headers: string[]; rows: GridRow[] }[] {
+  const joined = Array.from({ length: table.columns }, (_, c) =>
+    table.header
+      .map((row) => row[c]?.text.trim() ?? '')
+      .filter((text) => text !== '')
+      .join(' | '),
+  )
+  const parts: { headers: string[]; rows: GridRow[] }[] = [{ headers: joined, rows: [] }]
+  table.rows.forEach((cells, r) => {
+    const texts = cells.map(({ text }) => text)
+    if (isHeadLine(texts)) parts.push({ headers: texts, rows: [] })
+    else
+      parts[parts.length - 1]?.rows.push({
+        cells: texts,
+        boxes: cells.map(({ boxes }) => boxes),
+        number: null,
+        index: r,
+      })
+  })
+  return parts.filter(({ rows }) => rows.length > 0)
 }
 
 /** The section in which the table stands; a table that stands nowhere belongs to the results. */

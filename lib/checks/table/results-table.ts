@@ -73,8 +73,12 @@ export function splitTables(rows: readonly ReadCell[][]): Block[] {
 
 function isHead(cells: readonly string[]): boolean {
   const filled = cells.filter((cell) => cell !== '')
-  return filled.length >= 2 && !filled.some(holdsData) && filled.some(roleIsKnown)
+  return filled.length >= 2 && !filled.some(holdsNumber) && filled.some(roleIsKnown)
 }
+
+/** A head may say 'significant' or 'Sig.', but holds no number and no mark. */
+const holdsNumber = (cell: string): boolean =>
+  readNumber(cell) !== null || readP(cell) !== null || isMark(cell)
 
 /** Numbers, p-values, marks and calls are data. */
 function holdsData(cell: string): boolean {

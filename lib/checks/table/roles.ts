@@ -159,6 +159,14 @@ function plainKind(
 
 /** Two columns of names beside each other are the two groups of a comparison. */
 function pairGroups(columns: readonly Column[], roles: ColumnRole[]): void {
+  const compared = roles.flatMap((role, i) =>
+    role.kind === 'comparison' && !isPairs(columns[i]?.cells ?? []) ? [i] : [],
+  )
+  const [one, two] = compared
+  if (compared.length === 2 && one !== undefined && two === one + 1) {
+    roles[one] = { kind: 'group' }
+    roles[two] = { kind: 'group2' }
+  }
   const groups = roles.flatMap((role, i) => (role.kind === 'group' ? [i] : []))
   const [a, b] = groups
   if (a !== undefined && b === a + 1 && !roles.some(({ kind }) => kind === 'group2' || kind === 'comparison'))
@@ -171,7 +179,8 @@ function pairGroups(columns: readonly Column[], roles: ColumnRole[]): void {
   roles.forEach((role, i) => {
     if (role.kind !== 'df') return
     const head = columns[i]?.header ?? ''
-    const earlier = roles.slice(0, i).some(({ kind }) => kind === 'df')
+    const since = roles.slice(0, i).findLastIndex(({ kind }) => kind === 'statistic')
+    const earlier = roles.slice(since + 1, i).some(({ kind }) => kind === 'df')
     roles[i] = {
       kind: 'df',
       index: /den|2|error|resid/i.test(head) || (earlier && /^df$/i.test(head.trim())) ? 1 : 0,

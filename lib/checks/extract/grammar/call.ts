@@ -13,7 +13,7 @@ const DENIED = new RegExp(
 
 /** 'nonsignificant', 'not significant', 'n.s.', 'were similar', 'indistinguishable', 'no longer significant', 'unaffected'. */
 const DENIED_PLAINLY =
-  /\b(?:non|in|un)-?significan|\bn\.s\.|[(,;]\s?ns\b|\b(?:similar|comparable|indistinguishable|unchanged|unaffected|alike|equivalent|the same|equal)\b|\bfar from significan/i
+  /\b(?:non|in|un)-?significan|\bn\.s\.|[(,;]\s?ns\b|\b(?:similar|comparable|indistinguishable|unchanged|unaffected|alike|equivalent|the same(?!\s(?:direction|pattern|trend|order|sign|way|was true|held))|equal)\b|\bfar from significan|\b(?:unrelated|uncorrelated|unassociated|independent of|no different)\b/i
 
 /** The verb is left out: 'but not in lactic acid', ', whereas B was not', 'B did not (', 'not in C', 'nor in D'. */
 const ELLIPTIC =
@@ -28,7 +28,7 @@ const STRONG = /\bsignifican\w*|\bdiffer(?:ed|s)\b|\bdiffer\b|\bdistinct\b|\bdif
 
 /** Direction or relation in plain words: 'higher than', 'exceeded', 'raised', 'was correlated with', 'an effect of'. */
 const WEAK =
-  /\b(?:higher|lower|greater|smaller|larger|longer|shorter|faster|slower|heavier|lighter|better|worse|more|less|fewer|stronger|weaker|thicker|earlier|later|richer|poorer|warmer|exceed\w*|out-?(?:yield|perform|grew|weigh|number|score|last|stripp)\w*|increas\w*|decreas\w*|reduc\w*|rais\w*|improv\w*|lower(?:ed|s)|enhanc\w*|impair\w*|affect(?:ed|s)|influenc(?:ed|es)|associated|correlat\w*|predict(?:ed|s)|effects?|superior|inferior|interact(?:ed|ion)\w*|relationship|varied|dropped|rose|fell|gain(?:ed)?|deviat\w*|depart\w*|differences?|benefit(?:ed)?|surpass\w*|delay\w*|shorten\w*|prolong\w*|promot\w*|inhibit\w*|suppress\w*|stimulat\w*)\b/i
+  /\b(?:higher|lower|greater|smaller|larger|longer|shorter|faster|slower|heavier|lighter|better|worse|more|less|fewer|stronger|weaker|thicker|earlier|later|richer|poorer|warmer|exceed\w*|out-?(?:yield|perform|grew|weigh|number|score|last|stripp)\w*|increas\w*|decreas\w*|reduc\w*|rais\w*|improv\w*|lower(?:ed|s)|enhanc\w*|impair\w*|affect(?:ed|s)|influenc(?:ed|es)|associated|correlat\w*|predict(?:ed|s)|effects?|superior|inferior|interact(?:ed|ion)\w*|relationship|varied|dropped|rose|fell|gain(?:ed)?|deviat\w*|depart\w*|differences?|benefit(?:ed)?|surpass\w*|same (?:direction|pattern)|\w{2,}er\b[^,;()]{0,30}\bthan|further|delay\w*|shorten\w*|prolong\w*|promot\w*|inhibit\w*|suppress\w*|stimulat\w*)\b/i
 
 /** Names of groups that begin with 'no', 'and no warm-up', 'with no cue': not a negation. */
 const NAMED_NO =

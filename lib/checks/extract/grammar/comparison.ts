@@ -98,7 +98,7 @@ function toPattern(name: string): RegExp {
   const body = name.replace(/[.*+?^${}()|[\]\\/]/g, '\\$&').replace(/[\s_-]+|−|–/g, '[\\s_–-]*')
   // single letters and numbers count only as printed, words in either case
   return new RegExp(
-    String.raw`(?<![A-Za-z0-9.])${body}(?:'s|s)?(?![A-Za-z0-9]|\.\d)`,
+    String.raw`(?<![A-Za-z0-9.]|(?<![A-Za-z0-9)]\s?)-)${body}(?:'s|s)?(?![A-Za-z0-9]|\.\d)`,
     name.length <= 2 ? 'g' : 'gi',
   )
 }
