@@ -1,6 +1,6 @@
 import { z } from 'zod'
 import { transact, type Db } from '@/db/client'
-import { composeEnded } from '@/lib/letters/mails'
+import { composeEnded } from '@/lib/mail/desk-mails'
 import { queueMail } from '@/lib/mail/queue-mail'
 import { recordEvent } from '@/lib/record/record-event'
 import type { Actor } from '@/lib/rules/roles'

@@ -1,20 +1,12 @@
+import { escapeMarkdown } from '@/lib/letters/escape-markdown'
+import { renderLetter } from '@/lib/letters/render-letter'
 import { getSettings } from '@/lib/settings'
-import { escapeMarkdown } from './escape-markdown'
-import { renderLetter } from './render-letter'
+import type { Mail } from './queue-mail'
 
 /*
  * Mails about a manuscript: neutral words and a link. None holds anything of a manuscript, its title included,
  * nor who wrote or reviews it, but for the editors and but for the letter that was released.
  */
-
-export type DeskMail = {
-  template: string
-  recipient: string
-  manuscriptId: string
-  subject: string
-  text: string
-  html: string
-}
 
 type About = {
   to: { name: string; email: string }
@@ -22,7 +14,7 @@ type About = {
   reference: string | null
 }
 
-export function composeHandedIn(about: About & { round: number }): DeskMail {
+export function composeHandedIn(about: About & { round: number }): Mail {
   const what = about.round > 1 ? 'the revision of your manuscript' : 'your manuscript'
   return compose(about, 'handed-in', `${nameOf(about)} has arrived`, [
     `Thank you: ${what} has arrived and is kept as ${nameOf(about)}.`,
@@ -30,35 +22,35 @@ export function composeHandedIn(about: About & { round: number }): DeskMail {
   ])
 }
 
-export function composeStuck(about: About): DeskMail {
+export function composeStuck(about: About): Mail {
   return compose(about, 'stuck', `${nameOf(about)}: a file could not be read`, [
     `A file of ${nameOf(about)} could not be read. Nothing is lost; it waits until you have looked at it.`,
     'Here it says what is wrong and what you can do:',
   ])
 }
 
-export function composeAssigned(about: About & { dueAt: number }): DeskMail {
+export function composeAssigned(about: About & { dueAt: number }): Mail {
   return compose(about, 'assigned', `A review is offered to you: ${nameOf(about)}`, [
     `The review of ${nameOf(about)} is offered to you. It would be due on ${sayDate(about.dueAt)}.`,
     'Please accept or decline it here; if you have a conflict of interest, please say so there:',
   ])
 }
 
-export function composeDeclined(about: About & { reviewer: string }): DeskMail {
+export function composeDeclined(about: About & { reviewer: string }): Mail {
   return compose(about, 'declined', `${nameOf(about)}: the review was declined`, [
     `${about.reviewer} has declined the review of ${nameOf(about)}. It waits to be assigned again.`,
     'Here is the manuscript:',
   ])
 }
 
-export function composeSteppedAside(about: About & { reviewer: string }): DeskMail {
+export function composeSteppedAside(about: About & { reviewer: string }): Mail {
   return compose(about, 'stepped-aside', `${nameOf(about)}: the reviewer stepped aside`, [
     `${about.reviewer} has a conflict of interest on ${nameOf(about)} and sees it no more. It waits to be assigned again.`,
     'Here is the manuscript:',
   ])
 }
 
-export function composeEnded(about: About): DeskMail {
+export function composeEnded(about: About): Mail {
   return compose(
     about,
     'ended',
@@ -68,7 +60,7 @@ export function composeEnded(about: About): DeskMail {
   )
 }
 
-export function composeWithdrawn(about: About): DeskMail {
+export function composeWithdrawn(about: About): Mail {
   return compose(
     about,
     'withdrawn',
@@ -78,7 +70,7 @@ export function composeWithdrawn(about: About): DeskMail {
   )
 }
 
-export function composeVerdictDrafted(about: About): DeskMail {
+export function composeVerdictDrafted(about: About): Mail {
   return compose(
     about,
     'verdict-drafted',
@@ -88,7 +80,7 @@ export function composeVerdictDrafted(about: About): DeskMail {
   )
 }
 
-export function composeSentBack(about: About): DeskMail {
+export function composeSentBack(about: About): Mail {
   return compose(
     about,
     'sent-back',
@@ -105,7 +97,7 @@ export function composeVerdict(given: {
   subject: string
   html: string
   text: string
-}): DeskMail {
+}): Mail {
   const { recipient, manuscriptId, subject } = given
   const link = `${getSettings().url}/manuscripts/${manuscriptId}/answer`
   const end = renderLetter(`You can answer point by point here: <${link}>`)
@@ -125,7 +117,7 @@ function compose(
   subject: string,
   paragraphs: string[],
   path = `/manuscripts/${manuscriptId}`,
-): DeskMail {
+): Mail {
   // A name is shown as it is: no mark-up of its own.
   const name = escapeMarkdown(to.name)
   const { url, house } = getSettings()
