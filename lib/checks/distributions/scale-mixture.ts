@@ -22,10 +22,10 @@ export function averageOverScale(
   if (df === Infinity) return f(1)
   const a = 0.5 * df
   const constant = Math.LN2 + 0.5 * Math.log(a) - HALF_LOG_TWO_PI - stirlingError(a)
-  const logDensity = (u: number) => constant - a * (Math.expm1(2 * u) - 2 * u)
+  const logDensity = (u: number) => constant - a * expExcess(2 * u)
   const bound = (u: number) => logDensity(u) + logBound(Math.exp(u))
 
-  const peak = findPeak(bound, -40, 3)
+  const peak = findPeak(bound, -700, 3, Math.min(0.01, 0.05 / Math.sqrt(df)))
   const floor = bound(peak) - REACH
   const step = Math.min(0.1, 0.42 / Math.sqrt(df), 0.74 / slope)
   let sum = 0
@@ -34,12 +34,17 @@ export function averageOverScale(
   return sum * step
 }
 
-/** Where a concave function on [low, high] is largest, to a thousandth of its width or so: the rule needs no more. */
-function findPeak(f: (u: number) => number, low: number, high: number): number {
+/** exp(x) − 1 − x, to full accuracy near 0 too. */
+function expExcess(x: number): number {
+  return Math.abs(x) < 1e-4 ? x * x * (0.5 + x * (1 / 6 + x / 24)) : Math.expm1(x) - x
+}
+
+/** Where a concave function on [low, high] is largest, to within `width`. */
+function findPeak(f: (u: number) => number, low: number, high: number, width: number): number {
   const golden = (Math.sqrt(5) - 1) / 2
   let a = low
   let b = high
-  while (b - a > 1e-4) {
+  while (b - a > width) {
     const left = b - golden * (b - a)
     const right = a + golden * (b - a)
     if (f(left) < f(right)) a = left
