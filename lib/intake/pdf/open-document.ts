@@ -18,7 +18,10 @@ type PositionedItem = {
   hasEOL: boolean
 }
 
-/** Reads every page's positioned text. Throws pdfjs's own errors (PasswordException, InvalidPDFException, …). */
+/**
+ * Reads every page's positioned text. Throws pdfjs's own errors (PasswordException, InvalidPDFException, …), a
+ * RangeError for more than `maxPages` pages and a NoTextException where no page holds a letter or a digit.
+ */
 export async function readPages(
   bytes: Uint8Array,
   maxPages: number,
@@ -48,10 +51,15 @@ export async function readPages(
       page.cleanup()
       onPage(number, pdf.numPages)
     }
+    if (!pages.some((page) => page.runs.some((run) => /[\p{L}\p{N}]/u.test(run.text)))) throw noText()
     return { sha256, title: await getTitle(pdf), pages, fonts }
   } finally {
     await loading.destroy()
   }
+}
+
+function noText(): Error {
+  return Object.assign(new Error('no text on any page'), { name: 'NoTextException' })
 }
 
 async function readPage(page: PDFPageProxy, fonts: Record<string, ReadFont>): Promise<ReadPage> {

@@ -1,0 +1,22 @@
+import type { Audit, HouseRules, ReadDocument } from '@/lib/checks/types'
+import type { RefusalKind } from '@/lib/rules/refusal'
+
+export type ReadTask = { kind: 'read'; path: string; maxPages: number }
+export type AuditTask = {
+  kind: 'audit'
+  path: string
+  maxPages: number
+  table: { path: string; name: string } | null
+  rules: HouseRules
+}
+export type ThreadTask = ReadTask | AuditTask
+
+/** `opening` and `reading` are the reader's stages; the engine tells the others. */
+export type ThreadMessage =
+  | { kind: 'page'; page: number; of: number }
+  | { kind: 'stage'; stage: string }
+  | { kind: 'read'; document: ReadDocument }
+  | { kind: 'audited'; audit: Audit }
+  | { kind: 'refused'; refusal: RefusalKind; message: string }
+  /** Where it broke: in the file, or in judging it, which is a fault of ours. */
+  | { kind: 'trouble'; phase: 'reading' | 'judging'; name: string; message: string; stack: string }

@@ -1,0 +1,33 @@
+import { readFile } from 'node:fs/promises'
+import { parentPort, workerData } from 'node:worker_threads'
+import { isRefusal } from '@/lib/rules/refusal'
+import { readPages } from '../pdf/open-document'
+import { readTableFile } from '../table/read-table'
+import type { AuditTask, ThreadMessage, ThreadTask } from './messages'
+
+// Runs in a worker thread of its own: a file that eats memory or time ends this thread and nothing else.
+const task = workerData as ThreadTask
+const send = (message: ThreadMessage) => parentPort?.postMessage(message)
+let phase: 'reading' | 'judging' = 'reading'
+
+try {
+  const bytes = new Uint8Array(await readFile(task.path))
+  const document = await readPages(bytes, task.maxPages, (page, of) => send({ kind: 'page', page, of }))
+  if (task.kind === 'read') send({ kind: 'read', document })
+  else send({ kind: 'audited', audit: await judge(task, document) })
+} catch (error) {
+  send(describe(error))
+}
+
+async function judge({ table, rules }: AuditTask, document: Awaited<ReturnType<typeof readPages>>) {
+  const rows = table ? await readTableFile(table.path, table.name) : null
+  phase = 'judging'
+  const { audit } = await import('@/lib/checks/audit')
+  return audit(document, rows, rules, (stage) => send({ kind: 'stage', stage }))
+}
+
+function describe(error: unknown): ThreadMessage {
+  if (isRefusal(error)) return { kind: 'refused', refusal: error.refusal, message: error.message }
+  const { name, message, stack = '' } = error instanceof Error ? error : new Error(String(error))
+  return { kind: 'trouble', phase, name, message, stack }
+}
