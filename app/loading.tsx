@@ -1,5 +1,0 @@
-import { LoadingSteps } from '@/components/ui/mark'
-
-export default function Loading() {
-  return <LoadingSteps />
-}
