@@ -1,18 +1,18 @@
 const MAX_STEPS = 200
 
 /**
- * A root of the decreasing continuous function `f`, starting near `guess`: the bracket is widened until the sign
- * changes, then narrowed by regula falsi with halved ends and bisection to a width of 1e-14 (relative to the root
- * above 1). NaN where no sign change is found within 1e4 of the guess.
+ * A root of the decreasing continuous function `f`, starting near `guess`: the bracket is widened by `reach`, then
+ * twice that and so on, until the sign changes, and narrowed by regula falsi with halved ends and bisection to a width
+ * of 1e-14 (relative to the root above 1), or until |f| is `enough`. NaN where no sign change is found within 1e4 of the guess.
  * Source: the Illinois rule, Dowell and Jarratt (1971), BIT 11, 168–174.
  */
-export function solveDecreasing(f: (y: number) => number, guess: number): number {
+export function solveDecreasing(f: (y: number) => number, guess: number, reach = 1, enough = 0): number {
   let low = guess
   let high = guess
   let atLow = f(low)
   let atHigh = atLow
-  for (let reach = 1; atLow < 0 && reach < 1e4; reach *= 2) atLow = f((low -= reach))
-  for (let reach = 1; atHigh > 0 && reach < 1e4; reach *= 2) atHigh = f((high += reach))
+  for (let step = reach; atLow < 0 && step < 1e4; step *= 2) atLow = f((low -= step))
+  for (let step = reach; atHigh > 0 && step < 1e4; step *= 2) atHigh = f((high += step))
   if (!(atLow >= 0 && atHigh <= 0)) return NaN
   if (atLow === 0) return low
   if (atHigh === 0) return high
@@ -23,7 +23,7 @@ export function solveDecreasing(f: (y: number) => number, guess: number): number
     const usable = Number.isFinite(chord) && chord > low && chord < high && step % 4 !== 0
     const middle = usable ? chord : 0.5 * (low + high)
     const value = f(middle)
-    if (value === 0) return middle
+    if (Math.abs(value) <= enough) return middle
     if (value > 0) {
       low = middle
       atLow = value

@@ -2,7 +2,7 @@ import { normalDensity, normalLogUpper, normalUpper } from './normal'
 import { averageOverScale } from './scale-mixture'
 
 /** Grid of the trapezoidal rule for the largest of `groups` normals: its values do not depend on the range. */
-type Grid = { start: number; step: number; log: Float64Array; weight: Float64Array }
+type Grid = { start: number; step: number; weight: Float64Array; inverse: Float64Array }
 
 const FIRST = -9
 const LAST = 39
@@ -14,14 +14,15 @@ function getGrid(groups: number): Grid {
   if (known !== undefined) return known
   const step = Math.min(0.3, 0.74 / Math.sqrt(groups))
   const size = Math.ceil((LAST - FIRST) / step)
-  const log = new Float64Array(size)
+  const inverse = new Float64Array(size)
   const weight = new Float64Array(size)
   for (let j = 0; j < size; j++) {
     const z = FIRST + j * step
-    log[j] = normalLogUpper(-z)
-    weight[j] = step * groups * normalDensity(z) * Math.exp((groups - 1) * (log[j] ?? 0))
+    const log = normalLogUpper(-z)
+    inverse[j] = Math.exp(-log)
+    weight[j] = step * groups * normalDensity(z) * Math.exp((groups - 1) * log)
   }
-  const grid = { start: FIRST, step, log, weight }
+  const grid = { start: FIRST, step, weight, inverse }
   grids.set(groups, grid)
   return grid
 }
@@ -33,12 +34,12 @@ function getGrid(groups: number): Grid {
  */
 export function rangeUpper(w: number, groups: number): number {
   if (w > 60) return 0
-  const { start, step, log, weight } = getGrid(groups)
+  const { start, step, weight, inverse } = getGrid(groups)
   const from = Math.max(0, Math.floor((w / 2 - 7.5 - start) / step))
   const to = Math.min(weight.length - 1, Math.ceil((Math.max(9, w / 2 + 7.5) - start) / step))
   let sum = 0
   for (let j = from; j <= to; j++) {
-    const share = Math.min(1, normalUpper(w - (start + j * step)) * Math.exp(-(log[j] ?? 0)))
+    const share = Math.min(1, normalUpper(w - (start + j * step)) * (inverse[j] ?? 1))
     sum += (weight[j] ?? 0) * (share === 1 ? 1 : -Math.expm1((groups - 1) * Math.log1p(-share)))
   }
   return Math.min(1, sum)

@@ -26,7 +26,8 @@ export function upperQuantile(
 
 /** Critical value of the studentized range: `groups`, `df` as in `studentizedRangeUpper`, p in (0, 1). */
 export function studentizedRangeQuantile(p: number, groups: number, df: number): number {
-  return solveInLog((q) => Math.log(studentizedRangeUpper(q, groups, df)), p)
+  const bound = Math.SQRT2 * boundByBonferroni(p, (groups * (groups - 1)) / 2, df)
+  return solveInLog((q) => Math.log(studentizedRangeUpper(q, groups, df)), p, bound)
 }
 
 /** Critical value of Dunnett's test: `loadings`, `df`, `sides` as in `dunnettUpper`, p in (0, 1), below 1/2 for one side. */
@@ -36,10 +37,20 @@ export function dunnettQuantile(
   df: number,
   sides: 1 | 2 = 2,
 ): number {
-  return solveInLog((t) => Math.log(dunnettUpper(t, loadings, df, sides)), p)
+  const bound = boundByBonferroni(p, sides === 2 ? loadings.length : loadings.length / 2, df)
+  return solveInLog((t) => Math.log(dunnettUpper(t, loadings, df, sides)), p, bound)
 }
 
-function solveInLog(logUpper: (x: number) => number, p: number): number {
+/** The two-sided critical value of t at p / count: a little above the exact one of `count` joint comparisons. */
+function boundByBonferroni(p: number, count: number, df: number): number {
+  return upperQuantile('t', Math.min(0.9, p / count), [df])
+}
+
+/** Starts from `near`, where one is known. */
+function solveInLog(logUpper: (x: number) => number, p: number, near?: number): number {
   const target = Math.log(p)
-  return Math.exp(solveDecreasing((y) => Math.max(logUpper(Math.exp(y)), -1e6) - target, 0))
+  const f = (y: number) => Math.max(logUpper(Math.exp(y)), -1e6) - target
+  return Math.exp(
+    near === undefined ? solveDecreasing(f, 0) : solveDecreasing(f, Math.log(near), 0.02, 1e-13),
+  )
 }
