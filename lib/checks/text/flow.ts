@@ -1,7 +1,6 @@
 import { captionNumber, isFigureCaption, textOf } from './captions'
-import { findGutters, type Gutter } from './gutters'
 import { toRow, toRows, type Lane, type Row } from './rows'
-import { findSegments, type Segment } from './segments'
+import { findSegments, type Gutter, type Segment } from './segments'
 import { findTables, type FoundTable } from './tables'
 import type { Frame } from './words'
 
@@ -9,16 +8,13 @@ import type { Frame } from './words'
 export type FlowItem = { kind: 'line'; row: Row; lane: Lane } | { kind: 'table'; table: FoundTable }
 
 /** The reading order of a frame: bands between full-width rows from the top, lanes of a band from the left. */
-export function readFlow(frame: Frame, bodySize: number): FlowItem[] {
-  const rough = findSegments(frame.words)
-  const gutters = findGutters(frame, rough)
-  const segments =
-    gutters.length > 0
-      ? findSegments(
-          frame.words,
-          gutters.map((g) => (g.from + g.to) / 2),
-        )
-      : rough
+export function readFlow(
+  frame: Frame,
+  rough: readonly Segment[],
+  gutters: readonly Gutter[],
+  bodySize: number,
+): FlowItem[] {
+  const segments = gutters.length > 0 ? findSegments(frame.words, gutters) : rough
   const left = Math.min(...segments.map((s) => s.u0))
   const right = Math.max(...segments.map((s) => s.u1))
   if (gutters.length === 0) return readLane({ left, right, rows: toRows(segments) }, bodySize)

@@ -4,10 +4,12 @@ import { readFlow, type FlowItem } from './flow'
 import { dropFurniture } from './furniture'
 import { dropHiddenLayers } from './layers'
 import { measureDigits } from './glyphs'
+import { findAllGutters } from './gutters'
 import { textOf } from './captions'
 import { toParts, type Part, type Usual } from './paragraphs'
 import { joinRows, readVocabulary, toProse, type Vocabulary } from './prose'
 import { findSections, toMark, type Mark } from './sections'
+import { findSegments } from './segments'
 import type { FoundTable } from './tables'
 import { readFrames, type Frame } from './words'
 import type { Origin } from './write-line'
@@ -32,7 +34,12 @@ export function layOut(document: ReadDocument): LaidOut {
   repairGlyphs(told)
   const frames = dropFurniture(dropHiddenLayers(told)).filter((frame) => frame.words.length > 0)
   const usual = findUsual(frames)
-  const flows = frames.map((frame) => ({ page: frame.page.number, items: readFlow(frame, usual.size) }))
+  const segments = frames.map((frame) => findSegments(frame.words))
+  const gutters = findAllGutters(frames, segments)
+  const flows = frames.map((frame, i) => ({
+    page: frame.page.number,
+    items: readFlow(frame, segments[i] ?? [], gutters[i] ?? [], usual.size),
+  }))
   return write(toParts(flows, usual), flows, unread)
 }
 

@@ -11,6 +11,7 @@ export type Mark = {
   head: Head | null
   figure: boolean
   sentences: number
+  references: boolean
 }
 
 type Head = { text: string; kind: SectionKind | null; depth: number; style: string; runIn: boolean }
@@ -23,6 +24,7 @@ export function toMark(part: Paragraph, text: string, at: number): Mark {
     paragraph: part.kind,
     figure: isFigureCaption(text),
     sentences: text.split(/[.!?] (?=\p{Lu})/u).length,
+    references: opensReferences(text),
   }
   if (run) return { ...common, head: { text: run.heading, kind: run.kind, depth: 1, style: '', runIn: true } }
   if (part.kind !== 'heading') return { ...common, head: null }
@@ -67,6 +69,7 @@ function turnAt(
   if (mark.at === opening) return { kind: 'abstract', heading: '' }
   if (head && (head.kind !== null || current !== 'title'))
     return { kind: nextKind(head, current, ranks), heading: stripNumber(head.text) }
+  if (mark.references && current !== 'references') return { kind: 'references', heading: '' }
   return current === 'references' && mark.figure ? { kind: 'other', heading: '' } : null
 }
 
@@ -89,4 +92,14 @@ function findOpening(marks: readonly Mark[]): number | null {
       return mark.at
   }
   return null
+}
+
+// the first entry of a numbered list of references: "1. Name A, Name B. Title. Journal 2004; 3(2): 1–9"
+const firstEntry = /^\[?1[\].]{1,2} ?\p{Lu}[\p{L}’'-]+,? (?:\p{Lu}|and )/u
+
+/** A list of references without a heading. */
+function opensReferences(text: string): boolean {
+  if (!firstEntry.test(text)) return false
+  const years = /\b(?:19|20)\d\d\b/.test(text)
+  return years && /\bdoi\b|\d\(\d|\d ?[:;] ?\d|pp?\. ?\d/i.test(text)
 }

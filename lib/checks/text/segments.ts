@@ -1,5 +1,8 @@
 import type { Word } from './words'
 
+/** A gutter between columns: where the column at its left ends, and where the one at its right begins. */
+export type Gutter = { from: number; to: number }
+
 /**
  * A stretch of one line without a wide gap: words in reading order on a common baseline. `v` is the
  * baseline and `size` the size of its unraised text.
@@ -11,9 +14,10 @@ export const WIDE_GAP = 0.85
 
 /**
  * Segments of a frame, from the top. Words are clustered by baseline first; small raised or lowered words
- * that touch a word of a larger line are moved into it. `gutters`: abscissas no segment may cross by a gap.
+ * that touch a word of a larger line are moved into it. A gap that fills most of a
+ * gutter parts segments however narrow it is.
  */
-export function findSegments(words: readonly Word[], gutters: readonly number[] = []): Segment[] {
+export function findSegments(words: readonly Word[], gutters: readonly Gutter[] = []): Segment[] {
   return attachRaised(clusterByBaseline(words)).flatMap((row) => splitRow(row, gutters))
 }
 
@@ -82,15 +86,15 @@ function isHost(other: Word, word: Word, mark: boolean): boolean {
   return near(after) || (shift > 0 && near(before))
 }
 
-function splitRow(row: Word[], gutters: readonly number[]): Segment[] {
+function splitRow(row: Word[], gutters: readonly Gutter[]): Segment[] {
   const sorted = [...row].sort((a, b) => a.u0 - b.u0 || a.u1 - b.u1)
   const segments: Segment[] = []
   let words: Word[] = []
   let end = -Infinity
   for (const word of sorted) {
     const size = Math.max(word.size, words.at(-1)?.size ?? 0)
-    const start = Math.max(end, -1e9)
-    const crosses = gutters.some((g) => start <= g + 0.5 && word.u0 >= g - 0.5) && word.u0 - end > 0.3 * size
+    const gap = word.u0 - end
+    const crosses = gap > 0.3 * size && gutters.some((gutter) => isParted(end, word.u0, gutter))
     if (words.length > 0 && (word.u0 - end > WIDE_GAP * size || crosses)) {
       segments.push(toSegment(words))
       words = []
@@ -101,6 +105,11 @@ function splitRow(row: Word[], gutters: readonly number[]): Segment[] {
   }
   if (words.length > 0) segments.push(toSegment(words))
   return segments
+}
+
+function isParted(end: number, start: number, { from, to }: Gutter): boolean {
+  const middle = (from + to) / 2
+  return end <= middle + 0.5 && start >= middle - 0.5 && start - end > 0.6 * (to - from)
 }
 
 export function toSegment(words: Word[]): Segment {
