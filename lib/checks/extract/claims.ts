@@ -15,6 +15,7 @@ import {
   findMultiplication,
   findPlainTestCount,
   findTestCount,
+  saysDivided,
 } from './grammar/counts'
 import { findAlpha, findThreshold } from './grammar/level'
 import { findProcedures } from './grammar/procedure'
@@ -132,8 +133,8 @@ function findClaimed(text: string, section: SectionKind): ClaimedProcedure[] {
   if (!isOwnUse(text, 0, 0, section)) return []
   // the arithmetic names the procedure where no name does: .05/6, values times six
   if (
-    findDivision(text) &&
-    /\b(?:level|alpha|α|threshold|significan|signific|correct|adjust|p)\b|[pP]\s?[<≤]/i.test(text)
+    (findDivision(text) || saysDivided(text)) &&
+    /\b(?:level|alpha|threshold|significan|correct|adjust)|α|\b[pP]\b/i.test(text)
   )
     return ['bonferroni']
   if (/\b[pP][\s-]?values?\b|\b[pP]s\b/.test(text) && findMultiplication(text)) return ['bonferroni']

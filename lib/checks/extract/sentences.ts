@@ -69,9 +69,7 @@ function cutSentences(body: string): [number, number][] {
   const cuts: [number, number][] = []
   let from = 0
   // a full stop (and closing brackets), white space, then what can begin a sentence
-  for (const match of body.matchAll(
-    /[.!?]['")\]]*\s+(?=['"(\[]?[A-ZÀ-ÝΑ-Ω]|\d+\s+[a-z]|[a-z]+\s|[*†‡#§])/g,
-  )) {
+  for (const match of body.matchAll(/[.!?]['")\]]*\s+(?=['"(\[]?[A-ZÀ-ÝΑ-Ω]|-?\d|[a-z]+[\s-]|[*†‡#§])/g)) {
     const stop = match.index + 1
     if (!endsSentence(body, from, stop, match[0].length)) continue
     cuts.push([from, match.index + match[0].trimEnd().length])

@@ -3,31 +3,33 @@ import { fold } from '../extract/grammar/fold'
 import { parseNumber, RELATION_SIGN, SIGNED, UNSIGNED, type PrintedNumber } from '../extract/grammar/number'
 import { toRelation } from '../extract/grammar/p-value'
 
-/** A p-value in a cell, with the marks beside it ('*', '**', …, 'n.s.', ''). */
-export type PCell = PrintedNumber & { relation: Relation; mark: string }
+/** A p-value in a cell, with the marks beside it ('*', '**', …, 'n.s.', '') and a label in brackets behind it. */
+export type PCell = PrintedNumber & { relation: Relation; mark: string; label: string | null }
 
 const MARK = String.raw`(?:\^?\{?\*{1,4}\}?|[†‡§#¶]{1,4}|n\.?\s?s\.?|NS)`
 
-/** '0.032', '.032*', '<0.001', 'p < .001', '0,0246', '2.72E-04', '8.4 × 10-7', '>0.999', '0.032 a', '0.04 (ns)'. */
+/** '0.032', '.032*', '<0.001', 'p < .001', '0,0246', '2.72E-04', '8.4 × 10-7', '>0.999', '0.032 a', '0.04 (ns)', '0.331 (A vs B)'. */
 const P_CELL = new RegExp(
-  String.raw`^\(?\s*(?:[pPqQ]\s?(?=[=<>≤≥]))?(?<relation>${RELATION_SIGN})?\s*(?<number>${UNSIGNED})\s?(?<percent>%)?\s*\(?(?<mark>(?:${MARK}\s?)*)\)?(?:\s?\^?\(?[a-f](?:\s?,\s?[a-f])*\)?)?\s*\)?$`,
+  String.raw`^\(?\s*(?:[pPqQ]\s?(?=[=<>≤≥]))?(?<relation>${RELATION_SIGN})?\s*(?<number>${UNSIGNED})\s?(?<percent>%)?\s*\(?(?<mark>(?:${MARK}\s?)*)\)?(?:\s?\^?\(?[a-f](?:\s?,\s?[a-f])*\)?)?\s*\)?(?:\s?\((?<label>[A-Za-z][^()=<>]{1,40})\))?$`,
 )
 
 /** The p-value that a cell holds: up to 1, or a product above it; null where it holds something else. */
 export function readP(cell: string): PCell | null {
   const groups = P_CELL.exec(fold(cell).trim())?.groups
   const parsed = groups?.number === undefined ? null : parseNumber(groups.number, true)
-  if (!groups || !parsed || parsed.value >= 100) return null
+  if (!groups || !parsed || parsed.value >= 100 || (parsed.value > 1 && parsed.decimals < 1)) return null
   const relation = groups.relation === undefined ? '=' : toRelation(groups.relation)
   const mark = (groups.mark ?? '').replace(/[\s^{}]/g, '')
+  const label = groups.label?.trim() ?? null
   if (groups.percent)
     return {
       relation,
       mark,
       value: Number((parsed.value / 100).toPrecision(12)),
       decimals: parsed.decimals + 2,
+      label,
     }
-  return { relation, mark, ...parsed }
+  return { relation, mark, label, ...parsed }
 }
 
 /** A signed number with marks: '-2.46', '−2,46', '3.06**', '0.57 ***', '|2.1|'. */

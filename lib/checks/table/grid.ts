@@ -1,11 +1,20 @@
 import { pBounds } from '../numbers/p-bounds'
 import { printedInterval, roundingInterval } from '../numbers/printed-interval'
 import type { Box, ReadReport, ReadStatistic, SectionKind } from '../types'
-import type { Call, Relation, Source, Test } from '../vocabulary'
+import type { Call, Source, Test } from '../vocabulary'
 import { splitPair } from '../extract/grammar/comparison'
 import { fold } from '../extract/grammar/fold'
 import { findProcedures } from '../extract/grammar/procedure'
-import { isMark, isNotSignificantMark, readCall, readLegend, readNumber, readP, type Legend } from './cell'
+import {
+  isMark,
+  isNotSignificantMark,
+  readCall,
+  readLegend,
+  readNumber,
+  readP,
+  type Legend,
+  type PCell,
+} from './cell'
 import type { Control } from './pdf-table'
 import { findRoles, type ColumnRole } from './roles'
 
@@ -107,7 +116,8 @@ function readRow(reader: Reader, row: GridRow, heading: string | null): Part {
     if (role.kind !== 'p') return
     const value = toValue(reader, cell)
     if (!value) return
-    const { mark, markOnly, ...printed } = value
+    const { mark, markOnly, label, ...printed } = value
+    const comparison = names.comparison ?? (label === null ? null : pairOfLabel(label))
     const statistic = latest === null ? undefined : statistics[(latest as { index: number }).index]
     const outcome = names.outcome ?? spanOf(reader, c)
     reports.push({
@@ -117,7 +127,7 @@ function readRow(reader: Reader, row: GridRow, heading: string | null): Part {
       ...printedInterval(printed.value, printed.decimals, printed.relation),
       scale: role.scale,
       statistic: statistic?.id ?? null,
-      comparison: names.comparison,
+      comparison,
       called: callOfMark(reader, c, mark, markOnly) ?? rowCall,
       family: null,
       offset: grid.offset,
@@ -127,7 +137,7 @@ function readRow(reader: Reader, row: GridRow, heading: string | null): Part {
       cell: { row: row.index, column: c },
       sentence,
       outcome,
-      role: roleOfRow(grid, sentence, statistic, names.comparison !== null),
+      role: roleOfRow(grid, sentence, statistic, comparison !== null),
       oneSided: /\b(?:one|1)-(?:sided|tailed)\b/i.test(
         `${grid.headers[c] ?? ''} ${grid.caption} ${grid.notes}`,
       ),
@@ -136,6 +146,12 @@ function readRow(reader: Reader, row: GridRow, heading: string | null): Part {
     // the unadjusted value, else the first, is the statistic's own
     if (statistic && (statistic.report === null || role.scale === 'raw')) statistic.report = `${id}-p`
   })
+  // a statistic that stands right of its value
+  const [single, second] = statistics
+  if (single && !second && single.report === null && reports.length === 1 && reports[0]) {
+    reports[0].statistic = single.id
+    single.report = reports[0].id
+  }
   if (reports.length === 0) reports.push(...markReports(reader, row, names, statistics, sentence))
   return { reports, statistics }
 }
@@ -252,6 +268,17 @@ function findControl(text: string): string | null {
   return match?.groups?.name?.trim() ?? null
 }
 
+/** 'A vs B', 'group1-2', 'I–II' behind a value as the two groups. */
+function pairOfLabel(label: string): [string, string] | null {
+  // one word before two short names: 'group1-2', 'groups 1 vs 3'
+  const short = /^(groups?|arms?)\s?(\w{1,2})\s?(?:[-–/]|vs\.?|and)\s?(\w{1,2})$/i.exec(fold(label))
+  if (short?.[1] && short[2] && short[3]) {
+    const noun = short[1].replace(/s$/i, '')
+    return [`${noun} ${short[2]}`, `${noun} ${short[3]}`]
+  }
+  return splitPair(fold(label))
+}
+
 /** The upper line of a head in several lines, where it names what a block of columns is about: 'BAI | p'. */
 function spanOf({ grid, roles }: Reader, column: number): string | null {
   if (roles.filter(({ kind }) => kind === 'p').length < 2) return null
@@ -259,10 +286,7 @@ function spanOf({ grid, roles }: Reader, column: number): string | null {
   return parts.length > 1 ? (parts[0] ?? null) : null
 }
 
-function toValue(
-  { legend, grid }: Reader,
-  cell: string,
-): { relation: Relation; value: number; decimals: number; mark: string; markOnly: boolean } | null {
+function toValue({ legend, grid }: Reader, cell: string): (PCell & { markOnly: boolean }) | null {
   const p = readP(cell)
   if (p) return { ...p, markOnly: false }
   if (!isMark(cell)) return null
@@ -270,9 +294,10 @@ function toValue(
     .trim()
     .replace(/[\s^{}]/g, '')
   const decimals = Math.max(2, String(grid.alpha).length - 2)
-  if (isNotSignificantMark(mark)) return { relation: '>', value: grid.alpha, decimals, mark, markOnly: true }
+  if (isNotSignificantMark(mark))
+    return { relation: '>', value: grid.alpha, decimals, mark, label: null, markOnly: true }
   const bound = legend.get(mark) ?? { relation: '<' as const, value: grid.alpha, decimals }
-  return { ...bound, mark, markOnly: true }
+  return { ...bound, mark, label: null, markOnly: true }
 }
 
 /** A mark on the value; where others of the column carry asterisks, the lack of one says 'not significant'. */

@@ -95,7 +95,10 @@ export function prepareNames(names: Iterable<string>): KnownName[] {
 }
 
 function toPattern(name: string): RegExp {
-  const body = name.replace(/[.*+?^${}()|[\]\\/]/g, '\\$&').replace(/[\s_-]+|−|–/g, '[\\s_–-]*')
+  const body = name
+    .replace(/[.*+?^${}()|[\]\\/]/g, '\\$&')
+    .replace(/(?<=[A-Za-z0-9)°])[\s_–−-]+/g, '[\\s_–-]*')
+    .replace(/^−/, '-')
   // single letters and numbers count only as printed, words in either case
   return new RegExp(
     String.raw`(?<![A-Za-z0-9.]|(?<![A-Za-z0-9)]\s?)-)${body}(?:'s|s)?(?![A-Za-z0-9]|\.\d)`,

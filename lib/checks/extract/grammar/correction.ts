@@ -1,5 +1,6 @@
 import type { ReadClaim, SectionKind } from '../../types'
 import type { Scale } from '../../vocabulary'
+import { COUNT } from './number'
 
 /** 'No Bonferroni …', 'without Holm', 'instead of Tukey', 'rather than Bonferroni', 'not using', 'did not apply the Bonferroni'. */
 const DENIED_BEFORE =
@@ -44,7 +45,7 @@ const MULTIPLE = String.raw`(?:multipl(?:e|icity)[\s-]*(?:\w+[\s-]){0,2}?(?:comp
 
 /** 'corrected for multiple comparisons', 'adjustment for multiplicity', 'to account for multiple testing', 'multiplicity-adjusted'. */
 const CORRECTED = new RegExp(
-  String.raw`\b(?:correct(?:ed|ion|ions|ing)?|adjust(?:ed|ment|ments|ing)?|account(?:ed|ing)?|allow(?:ed|ance|ing)?|control(?:led|ling)?|compensat\w+)\b(?:\s(?:\w+\s){0,3}?)(?:for|of)\s(?:the\s)?${MULTIPLE}|multiplicity[\s-](?:adjusted|corrected)|multiple[\s-](?:comparison|testing)s?[\s-](?:correct|adjust)\w*`,
+  String.raw`\b(?:correct(?:ed|ion|ions|ing)?|adjust(?:ed|ment|ments|ing)?|account(?:ed|ing)?|allow(?:ed|ance|ing)?|control(?:led|ling)?|compensat\w+)\b(?:\s(?:\w+\s){0,3}?)(?:for|of)\s(?:the\s)?(?:${MULTIPLE}|${COUNT}\s(?:\w+\s){0,2}?(?:comparisons|tests|contrasts|outcomes|hypotheses))|multiplicity[\s-](?:adjusted|corrected)|multiple[\s-](?:comparison|testing)s?[\s-](?:correct|adjust)\w*`,
   'i',
 )
 /** 'all p-values are adjusted', 'P values in this report are corrected in this manner', 'adjusted p-values are given', 'adjusted P'. */
@@ -83,7 +84,7 @@ export function findErrorRate(text: string): ReadClaim['errorRate'] {
 
 /** A control by its word: 'the untreated control', 'vehicle', 'placebo', 'the surface'. */
 const CONTROL =
-  /\b(?:compared|comparisons?|tested|contrasted|compare)\b[^.;]{0,60}?\b(?:with|to|versus|vs\.?|against)\s(?:that of\s)?(?:the\s)?(?<name>(?:[\w°.+-]+\s){0,2}?(?:control|placebo|vehicle|sham|reference|baseline|standard|surface|check|blank|untreated|wild[\s-]?type)(?:\s(?:group|condition|treatment|diet))?)\b/i
+  /\b(?:compared|comparisons?|tested|contrasted|compare)\b[^.;]{0,60}?\b(?:with|to|versus|vs\.?|against)\s(?:that of\s)?(?:the\s)?(?<name>(?:[\w°.+-]+\s){0,2}?(?:control|placebo|vehicle|sham|reference|baseline|standard|surface|check|blank|untreated(?!\s(?:control|check|group|reference))|wild[\s-]?type)(?:\s(?:group|condition|treatment|diet))?)\b/i
 const AGAINST_ONE =
   /\beach (?:of the )?(?:[\w-]+\s){1,4}(?:was|were|is|are)?\s?(?:compared )?(?:with|to|versus|vs\.?|against)\s(?:the\s)?(?<name>[\w°.+-]+(?:\s[\w°.+-]+)?)/i
 

@@ -56,6 +56,10 @@ export function findDivision(
   return { alpha, m, start: match.index, end: match.index + match[0].length }
 }
 
+/** Whether a level is said to have been divided by a number of tests. */
+export const saysDivided = (text: string): boolean =>
+  DIVIDED.test(text) && /\b(?:level|alpha|threshold|significance|error)\b|α/i.test(text)
+
 /** Whether p-values are said to have been multiplied, and by what; `m` null where no number is given. */
 export function findMultiplication(text: string): { m: number | null } | null {
   const m = parseCount(MULTIPLIED.exec(text)?.groups?.n ?? '')

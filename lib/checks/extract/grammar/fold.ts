@@ -53,7 +53,7 @@ export function fold(text: string): string {
       .replace(/[−‐‑﹣－—‒⩽≦⩾≧＝＜＞‘’´ʼ`Χϰµ⋅∙•∗✕⨯]/g, (c) => STANDS_FOR[c] ?? c)
       .replace(/[\u00a0\u2000-\u200b\u202f\u205f\u3000\u00ad\ufeff\t]/g, ' ')
       // the middle dot as a decimal point, 0·03 and ·03, but not as a sign of multiplication, 5·10-8
-      .replace(/(?<![\d)]\s?)·(?=\d)|(?<=\d)·(?=\d)(?!·10\s?[\^-])/g, '.')
+      .replace(/(?<![\d)]\s?)·(?=\d)|(?<=\d)·(?=\d)(?!·?10\s?[\^-])/g, '.')
       .replace(/·(?=\s?10\s?[\^-])/g, '×')
       // the equals sign of older typesetting, p ¼ .03
       .replace(/(?<=[A-Za-z)\]\d]\s?)¼(?=\s?[-.\d])/g, '=')

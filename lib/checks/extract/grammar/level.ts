@@ -30,7 +30,7 @@ const GENERAL: readonly RegExp[] = [
   ),
   // 'Differences with P below 0.05 are called significant', 'compared with 0.05', 'significant if below 0.05', 'values below 0.05'
   new RegExp(
-    String.raw`\b(?:below|compared with|compared to|held against|less than|smaller than|under)\s(?:the level of\s)?${LEVEL}(?![\d/]|\s?[A-Za-z])`,
+    String.raw`\b(?:below|compared with|compared to|held against|less than|smaller than|under)\s(?:the level of\s)?${LEVEL}(?![\d/]|\s?(?:[kcmμn]?[mgLsNWVJ]|[kM]?Pa|°\s?C|h|min)\b)`,
     'i',
   ),
   // 'error rate at 5%', 'overall error at 5%', 'false discovery rate … controlled at 0.05', 'q < 0.05'

@@ -107,7 +107,7 @@ const EFFECT_SIZE = /(?:[ηωε]|eta|omega|epsilon)[\s²2^_{}-]*$/i
 
 const ADJUSTED =
   /adj|corr(?!el)|FDR|FWE|bonf|holm|hochberg|hommel|tukey|dunnett|scheff|[sš]id[aá]k|^[_\s(-]*(?:BH|BY|B|H|HSD|c)\b|HSD|q-?val|multiplicity/i
-const RAW = /\b(?:raw|nominal|unc|crude|unadj\w*|uncorr?\w*|un-?adjusted|un-?corrected)/i
+const RAW = /(?<![A-Za-z])(?:raw|nominal|unc|crude|unadj\w*|uncorr?\w*|un-?adjusted|un-?corrected)/i
 
 /** Words before the letter: 'adjusted P', 'Bonferroni-corrected p', 'uncorrected p', 'one-sided P', 'all ps', 'both'. */
 const BEFORE =

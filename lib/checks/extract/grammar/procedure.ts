@@ -149,7 +149,7 @@ export const WORDINGS: readonly Wording[] = [
   ),
   ...w(
     'single-step',
-    String.raw`single-?\s?step\s(?:max-?\s?T|method|procedure|adjust\w*|multivariate|multiple|p-?\s?values?|tests?)|single-?\s?step(?=[^.;]{0,40}(?:adjust|multiple|p-?\s?value))`,
+    String.raw`single-?\s?step\s(?:max-?\s?T|method|procedure|adjust\w*|multivariate|multiple|p-?\s?values?|tests?)|single-?\s?step(?=[^.;]{0,40}(?:adjust|multiple\b|p-?\s?value))`,
     String.raw`\bmax-?\s?T\b(?=[^.;]{0,40}\b(?:approach|adjust|correct|method|procedure))`,
     String.raw`multivariate[\s-]t[\s-](?:adjust|method|correct|distribution)\w*`,
     String.raw`\bmvt\b[\s-](?:adjust|method|correct)\w*`,

@@ -110,10 +110,7 @@ export function parseDf(inside: string, test: Test): number[] | null {
     .replace(/\b(?:df|d\.f\.|ν)\d?\s?[=:]?/gi, '')
     .replace(/[{}_]/g, '')
     .trim()
-  const parts =
-    test === 'F'
-      ? plain.split(/\s*(?:;|,\s+|\/|\band\b)\s*|,(?!\d{3}(?!\d))|,(?=\d{3}$)(?=[^,]*$)/)
-      : plain.split(/\s*(?:;|,\s+)\s*/)
+  const parts = test === 'F' ? splitTwo(plain) : plain.split(/\s*(?:;|,\s+)\s*/)
   const numbers = parts.filter((part) => part !== '').map(toDf)
   if (numbers.some((value) => value === null)) return null
   const df = numbers.filter((value): value is number => value !== null)
@@ -121,6 +118,14 @@ export function parseDf(inside: string, test: Test): number[] | null {
     return test === 'r' && n?.[1] ? [Number(n[1].replace(/\D/g, '')) - 2] : inside.trim() === '' ? [] : null
   if (test === 'F') return df.length === 2 ? df : null
   return test === 'z' ? [] : df.slice(0, 1)
+}
+
+/** The two of an F: '2, 38', '2;38', '2/38', '2,38', '1,1,024', '1 and 57'. */
+function splitTwo(plain: string): string[] {
+  const parts = plain.split(/\s*(?:;|,\s+|\/|\band\b)\s*/)
+  if (parts.length > 1) return parts
+  const at = plain.indexOf(',')
+  return at < 0 ? parts : [plain.slice(0, at), plain.slice(at + 1)]
 }
 
 /** '28', '1,024', '1 024', '27.4', '27,4'. */

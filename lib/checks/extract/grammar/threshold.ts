@@ -40,7 +40,7 @@ const MARK_BEFORE =
   /(?:^|[\s,;(:.\])–])(?:[*†‡#§¶$&@+^]{1,5}|\^?\{?[*†‡#§]{1,4}\}?)\s?[,:=]?\s?(?:(?:adjusted|corrected)\s)?$/
 /** Letters and words as marks: 'a = p', 'b: p', 'x indicates p', 'a , significant differences (p', 'ns, p', 'ns = not significant (p', 'significant at'. */
 const LETTER_BEFORE =
-  /(?:^|[\s,;(.)])(?:\^?[a-eA-Ex-z]|ns|NS|n\.s\.|asterisks?|stars?|symbols?|crosses|letters?)(?:\s?[=:]\s?|\s?(?:indicat|denot|represent|mean|signif)\w*\s(?:[a-z]+\s){0,4}\(?(?:at\s)?|\s?,\s(?:significant|different|not significant)[^.;(]{0,40}\()$/
+  /(?:^|[\s,;(.)])(?:(?:\^?\{?[a-eA-Ex-z]\}?|ns|NS|n\.s\.)(?:\s?[=:]\s?|\s(?:indicates?|denotes?|represents?|means?)\s(?:[a-z]+\s){0,4}\(?(?:at\s)?|\s?,\s(?:significant|different|not significant)[^.;(]{0,40}\()|(?:asterisks?|stars?|symbols?|crosses|letters?)(?:\s?[=:]\s?|\s?(?:indicat|denot|represent|mean|signif)\w*\s(?:[a-z]+\s){0,4}\(?(?:at\s)?))$/
 /** 'Means with different letters differ significantly at P', 'different superscripts in the same row … at P'. */
 const LETTERS =
   /\b(?:(?:different|same|common|unlike|dissimilar|distinct|various|lower-?case|small|capital)\s(?:\w+\s)?(?:letters?|superscripts?)|letters?\b|superscripts?\b|asterisks?\b|in (?:a|the same|each) (?:row|column)|within (?:a|the same|each|rows?|columns?))[^.]{0,120}(?:differ|significan|at|\()[^.]{0,40}$/i
@@ -73,7 +73,7 @@ export function isThreshold(p: PrintedP, { text, section, caption, linked }: Set
   return (
     isDivided(p) &&
     /\bat\s(?:the\s)?(?:\w+\s)?$/.test(before) &&
-    /correct|adjust|bonferroni|significan/i.test(text)
+    /correct|adjust|bonferroni|significan|tested|contrast|comparison|judged/i.test(text)
   )
 }
 
