@@ -5,6 +5,8 @@ const SLACK = 1 + 1e-12
 function largestMultiple(p: number, bound: number): number {
   if (p === 0) return Infinity
   let m = Math.floor(bound / p)
+  // From here on neighbouring integers are one and the same number.
+  if (m >= Number.MAX_SAFE_INTEGER) return m
   while ((m + 1) * p <= bound * SLACK) m++
   while (m > 0 && m * p > bound * SLACK) m--
   return m
