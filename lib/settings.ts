@@ -21,6 +21,10 @@ const schema = z.object({
   ASSIZE_REFERENCE_PREFIX: z.string().min(1).max(10).default('THC'),
   ASSIZE_AUDIT_SECONDS: z.coerce.number().positive().default(120),
   ASSIZE_AUDIT_MEGABYTES: z.coerce.number().positive().default(1024),
+  /** How long a worker that gives no sign of life keeps its job. */
+  ASSIZE_LEASE_SECONDS: z.coerce.number().positive().default(60),
+  /** Port of the local SMTP fake. */
+  ASSIZE_MAILBOX_PORT: z.coerce.number().int().min(1).max(65_535).default(2525),
 })
 
 export type Settings = {
@@ -36,6 +40,8 @@ export type Settings = {
   referencePrefix: string
   auditMilliseconds: number
   auditMegabytes: number
+  leaseMilliseconds: number
+  mailboxPort: number
 }
 
 /** Reads the environment; throws with the name of what is wrong. The README lists every variable. */
@@ -57,5 +63,7 @@ export function getSettings(env: Record<string, string | undefined> = process.en
     referencePrefix: e.ASSIZE_REFERENCE_PREFIX,
     auditMilliseconds: e.ASSIZE_AUDIT_SECONDS * 1000,
     auditMegabytes: e.ASSIZE_AUDIT_MEGABYTES,
+    leaseMilliseconds: e.ASSIZE_LEASE_SECONDS * 1000,
+    mailboxPort: e.ASSIZE_MAILBOX_PORT,
   }
 }

@@ -1,6 +1,6 @@
 import { createHash } from 'node:crypto'
 import { and, asc, eq, gt, inArray, lte } from 'drizzle-orm'
-import type { Tx } from '@/db/client'
+import type { Reader, Tx } from '@/db/client'
 import { signInTries } from '@/db/schema'
 import { refuse } from '@/lib/rules/refusal'
 
@@ -31,6 +31,13 @@ export function takeTry(tx: Tx, kind: keyof typeof limits, of: string, now: numb
 
 export function forgiveTries(tx: Tx, ids: number[]): void {
   tx.delete(signInTries).where(inArray(signInTries.id, ids)).run()
+}
+
+/** Forgets the tries of addresses that are not tried any more. */
+export function forgetOldTries(db: Reader, now: number): void {
+  db.delete(signInTries)
+    .where(lte(signInTries.at, now - tryWindow))
+    .run()
 }
 
 function waitMessage(milliseconds: number): string {
