@@ -21,14 +21,30 @@ export function readProse(
   controls: readonly string[] = [],
 ): Part {
   const known = { ...names, control: findControl(names, controls) }
+  let before: ReadReport | undefined
   const parts = sentences
     .map(findReports)
     .filter((found): found is SentenceReports => found !== null)
-    .map((found) => readSentence(laidOut, found, known, alpha))
+    .map((found) => {
+      const part = readSentence(laidOut, found, known, alpha)
+      const reports = part.reports.map((report) => likeBefore(report, before, alpha))
+      before = reports[reports.length - 1] ?? before
+      return { ...part, reports }
+    })
   return {
     reports: parts.flatMap(({ reports }) => reports),
     statistics: parts.flatMap(({ statistics }) => statistics),
   }
+}
+
+/** 'The same was true of …', 'So did …', 'Likewise': called as the result before it, unless the value speaks against it. */
+function likeBefore(report: ReadReport, before: ReadReport | undefined, alpha: number): ReadReport {
+  const alike =
+    /^(?:the same (?:was|held|is|applie[sd])|likewise|similarly|so (?:was|were|did)|this was also|and so)\b/i
+  if (report.called !== null || !before?.called || before.heading !== report.heading) return report
+  if (!alike.test(report.sentence)) return report
+  const against = before.called === 'significant' ? report.high >= alpha * 1.5 : report.high < alpha
+  return against ? report : { ...report, called: before.called }
 }
 
 type Known = Names & { control: string | null }
@@ -63,7 +79,7 @@ function readSentence(laidOut: LaidOut, found: SentenceReports, names: Known, al
         sentence: text.trim(),
         outcome: findOutcome(clause.before, text, names),
         role: findRole(`${clause.before} ${clause.after}`, own, p.of, comparison !== null),
-        oneSided: p.oneSided || /\b(?:one|1)-(?:sided|tailed)\b/i.test(text),
+        oneSided: p.oneSided || isOneSided(text, p),
         markOnly: p.markOnly,
       }
     }),
@@ -94,6 +110,14 @@ function toValue({ relation, value, decimals, markOnly }: PrintedP, alpha: numbe
     ? { relation, value: alpha, decimals: Math.max(2, String(alpha).length - 2) }
     : { relation, value, decimals }
   return { ...printed, ...printedInterval(printed.value, printed.decimals, printed.relation) }
+}
+
+/** 'one-tailed' beside the value, and no 'two-tailed' there. */
+function isOneSided(text: string, p: PrintedP): boolean {
+  const beside = text.slice(Math.max(0, p.start - 60), p.end + 30)
+  return (
+    /\b(?:one|1)[- ](?:sided|tailed)\b/i.test(beside) && !/\b(?:two|2)[- ](?:sided|tailed)\b/i.test(beside)
+  )
 }
 
 type Clause = { before: string; after: string }

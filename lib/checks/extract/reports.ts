@@ -2,7 +2,7 @@ import { roundingInterval } from '../numbers/printed-interval'
 import { pBounds } from '../numbers/p-bounds'
 import { isCitedWork } from './grammar/cited-work'
 import { findPValues, type PrintedP } from './grammar/p-value'
-import { findStatistics, type PrintedStatistic } from './grammar/statistic'
+import { dfAfter, findStatistics, type PrintedStatistic } from './grammar/statistic'
 import { isLegend, isThreshold } from './grammar/threshold'
 import type { Sentence } from './sentences'
 
@@ -11,6 +11,12 @@ export type SentenceReports = {
   sentence: Sentence
   reports: { p: PrintedP; statistic: number | null }[]
   statistics: PrintedStatistic[]
+}
+
+/** Degrees of freedom or n that stand after the p: 'r = −.45, p = .002, n = 45'. */
+function completeDf(text: string, p: PrintedP | undefined, statistic: PrintedStatistic | undefined): void {
+  if (p && statistic && statistic.df.length === 0 && p.end > statistic.end)
+    statistic.df = dfAfter(text.slice(p.end), statistic.test).df
 }
 
 /** How far apart a statistic and its p may stand: '…, 95 % CI −7.3 to −0.2, d = 0.4, p = .03'. */
@@ -25,6 +31,7 @@ export function findReports(sentence: Sentence): SentenceReports | null {
   if (isCitedWork(text, section)) return null
   const withMarks = [...printed, ...findMarks(text, plausible)].sort((a, b) => a.start - b.start)
   const links = link(text, withMarks, plausible)
+  for (const [i, s] of links) completeDf(text, withMarks[i], plausible[s])
   const statistics = plausible.filter((statistic, i) => statistic.certain || [...links.values()].includes(i))
   const reports = withMarks
     .map((p, i) => ({ p, linked: links.get(i) ?? null }))

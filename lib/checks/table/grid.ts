@@ -76,7 +76,13 @@ export function readGrid(grid: Grid, controls: readonly Control[] = []): Part {
     const filled = row.cells.filter((cell) => cell.trim() !== '')
     const [only] = filled
     // a line that holds one text stands above the rows of one outcome
-    if (filled.length === 1 && only !== undefined && readNumber(only) === null && !isMark(only)) {
+    if (
+      filled.length === 1 &&
+      only !== undefined &&
+      readP(only) === null &&
+      readNumber(only) === null &&
+      !isMark(only)
+    ) {
       heading = only.trim()
       continue
     }

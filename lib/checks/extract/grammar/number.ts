@@ -9,8 +9,8 @@ const POWER = String.raw`\s?[×x*]\s?10\s?\^?\{?\s?[-–]?\s?\d{1,3}\}?`
 /** '1.2e-5', '<2.2e-16', '5E−8'. */
 const EXPONENT = String.raw`[eE]\s?[-–+]?\s?\d{1,3}`
 
-/** An unsigned decimal or whole number: '.03', '0.03', '0,03', '0. 03', '12', '1.2e-5', '3.2 × 10-5'. */
-export const UNSIGNED = String.raw`(?:0\.\s\d{2,5}|\d*\.\d+|\d+,\d+(?!,?\d)|\d+)(?:${EXPONENT}|${POWER})?`
+/** An unsigned decimal or whole number: '.03', '0.03', '0,03', '0. 03', '.0 31', '12', '1.2e-5', '3.2 × 10-5'. */
+export const UNSIGNED = String.raw`(?:0\.\s\d{2,5}|0?\.0\s\d{2}(?![\d.,])|\d*\.\d+|\d+,\d+(?!,?\d)|\d+)(?:${EXPONENT}|${POWER})?`
 
 /** The same with a sign: '-2.46', '– 0.5', '+1.2'. */
 export const SIGNED = String.raw`[-–+]?\s?${UNSIGNED}`

@@ -75,8 +75,8 @@ const NAME = String.raw`(?:[pP](?<plural>s|'s)?(?:[-\s]?(?<word>[vV]alues?|[lL]e
 /** 'for trend', 'for the interaction', '(two-sided)', '(adjusted)', "(Bonferroni-corrected)" between name and relation. */
 const BETWEEN = String.raw`(?:\s+for\s+(?<of>(?:the\s+|group\s+|linear\s+)?[a-z]+(?:\s×\s[a-z]+)?)|\s?\((?<aside>[A-Za-z][A-Za-z\s'-]{2,40})\))?`
 
-/** 'of', 'was', 'equal to or less than', 'is below', 'of less than', ':' … and the signs. */
-const RELATION_WORDS = String.raw`(?:(?:of|was|were|is|are|being|equals?|equal\sto)\s+)?(?:(?:less|lower|smaller)\s+than(?:\s+or\s+equal\s+to)?|equal\s+to\s+or\s+less\s+than|below|under|(?:greater|larger|higher)\s+than|above|exceeding|at\s+least|at\s+most)|of|was|were|is|are|equals`
+/** 'of', 'was', 'equal to or less than', 'is below', 'of less than', 'ranged from', ':' … and the signs. */
+const RELATION_WORDS = String.raw`(?:(?:of|was|were|is|are|being|equals?|equal\sto)\s+)?(?:(?:less|lower|smaller)\s+than(?:\s+or\s+equal\s+to)?|equal\s+to\s+or\s+less\s+than|below|under|(?:greater|larger|higher)\s+than|above|exceeding|at\s+least|at\s+most)|(?:rang(?:ed|ing|e)|varied|var(?:y|ying))\s(?:from|between)|between|of|was|were|is|are|equals`
 
 const RELATION = String.raw`(?<relation>(?:(?:of|was|were|is|are)\s+)?${RELATION_SIGN}|${RELATION_WORDS}|[:,])`
 
@@ -177,8 +177,8 @@ function toPrinted(sentence: string, match: RegExpExecArray): PrintedP[] {
     decimals: parsed.decimals,
     markOnly: false,
   }
-  return [first, ...listOn(sentence, first)].map((p, i, all) =>
-    all.length > 1 ? { ...p, item: i, items: all.length } : p,
+  return [first, ...listOn(sentence, first, /^(?:rang|var|between)/i.test(relation ?? ''))].map(
+    (p, i, all) => (all.length > 1 ? { ...p, item: i, items: all.length } : p),
   )
 }
 
@@ -190,7 +190,7 @@ function isPlausible(sentence: string, end: number, value: number, printed: stri
 }
 
 /** The values that follow in a list or a range. */
-function listOn(sentence: string, first: PrintedP): PrintedP[] {
+function listOn(sentence: string, first: PrintedP, spread: boolean): PrintedP[] {
   const items: PrintedP[] = []
   let end = first.end
   // 'respectively' after the list, or before it
@@ -202,7 +202,7 @@ function listOn(sentence: string, first: PrintedP): PrintedP[] {
     const number = next?.groups?.number
     const parsed = number === undefined ? null : parseNumber(number, true)
     if (!next || number === undefined || !parsed || parsed.value > 1 || !/[.,]\d|e-|10/.test(number)) break
-    const range = /^\s*(?:[-–]|to)\s*$/.test(next.groups?.join ?? '')
+    const range = /^\s*(?:[-–]|to)\s*$/.test(next.groups?.join ?? '') || (spread && items.length === 0)
     if (!range && !first.plural && !respectively) break
     if (range && parsed.value === first.value) break
     const start = end + next[0].length - number.length

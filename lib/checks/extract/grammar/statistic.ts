@@ -18,7 +18,7 @@ export type PrintedStatistic = {
 /** Letters and names of the statistics, longest first within a test. */
 const SYMBOLS: Record<Test, string> = {
   // 't', '|t|', 't-value', "Student's t", 't statistic'
-  t: String.raw`\|t\||[tT](?:[- ](?:values?|statistics?|test|ratio)|(?=\s?[(\[_{\d=<>]))|t`,
+  t: String.raw`\|t\||T(?=\s?[(\[_])|t(?:[- ](?:values?|statistics?|test|ratio))?`,
   // 'F', 'F-value', 'F statistic'
   F: String.raw`F(?:[- ](?:values?|statistics?|test|ratio))?`,
   // 'χ2', 'χ^2', 'chi-square', 'X2', 'X-squared', 'v2' from lost Greek
@@ -89,6 +89,8 @@ function toStatistic(sentence: string, match: RegExpExecArray): PrintedStatistic
   }
   const spelt = /value|statistic|score|square|ratio/i.test(symbol)
   if (test === 'r' && Math.abs(parsed.value) > 1) return null
+  // q without its bracket is a false discovery rate
+  if (symbol === 'q' && groups.bracket === undefined) return null
   if (/of|was|:/.test(groups.relation ?? '') && !spelt) return null
   return {
     start,
@@ -135,7 +137,8 @@ function toDf(part: string): number | null {
   return /^\d+(?:[.,]\d+)?$/.test(text) ? Number(text.replace(',', '.')) : null
 }
 
-function dfAfter(rest: string, test: Test): { df: number[]; width: number } {
+/** Degrees of freedom that follow a statistic, or the p printed with it: 'χ2 = 4.2, P = 0.04, df = 1'. */
+export function dfAfter(rest: string, test: Test): { df: number[]; width: number } {
   if (test === 'z' || test === 'other') return { df: [], width: 0 }
   const match = DF_AFTER.exec(rest)
   const first = match?.groups?.first ?? match?.groups?.with

@@ -45,6 +45,10 @@ const LETTER_BEFORE =
 const LETTERS =
   /\b(?:(?:different|same|common|unlike|dissimilar|distinct|various|lower-?case|small|capital)\s(?:\w+\s)?(?:letters?|superscripts?)|letters?\b|superscripts?\b|asterisks?\b|in (?:a|the same|each) (?:row|column)|within (?:a|the same|each|rows?|columns?))[^.]{0,120}(?:differ|significan|at|\()[^.]{0,40}$/i
 
+/** 'Significant correlations (p < 0.05) are shown in bold', 'p < .01 are listed', 'are marked by asterisks'. */
+const SHOWN_AFTER =
+  /^\)?[^.;()]{0,40}?\s(?:are|were|is)\s(?:shown|printed|marked|highlighted|listed|displayed|set|given|denoted|indicated|represented|coloured|colored)\b/i
+
 /** Whether the printed value is a level that results are held against, and no result. */
 export function isThreshold(p: PrintedP, { text, section, caption, linked }: Setting): boolean {
   if (linked || p.markOnly) return false
@@ -63,6 +67,8 @@ export function isThreshold(p: PrintedP, { text, section, caption, linked }: Set
   if (/^\)?\s(?:was|were)\s(?:considered|regarded|required|accepted|taken|set|used)\b/.test(after))
     return true
   const planned = section === 'methods' || caption
+  // 'variables with P < 0.10 were entered', 'the hypothesis was rejected at p < .05'
+  if (section === 'methods' && !alone && CONVENTIONAL.has(p.value) && !p.plural) return true
   if (
     planned &&
     CONVENTIONAL.has(p.value) &&
@@ -82,6 +88,7 @@ export function isLegend(p: PrintedP, { text, caption, linked }: Setting): boole
   if (linked || p.markOnly || p.relation === '=') return false
   const before = text.slice(0, p.start)
   if (MARK_BEFORE.test(before) || LETTER_BEFORE.test(before)) return true
+  if (SHOWN_AFTER.test(text.slice(p.end))) return true
   const bound = p.relation === '<' || p.relation === '<='
   if (bound && CONVENTIONAL.has(p.value) && LETTERS.test(before)) return true
   // in captions, a bare bound that is no parenthesis after a statement: 'p < 0.05 vs control'
