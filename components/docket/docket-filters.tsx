@@ -41,7 +41,7 @@ export function DocketFilters({ params, parts, facets, onChange }: DocketFilters
         {parts.length > 1 ? (
           <Select
             aria-label="In which part"
-            className="max-w-44"
+            className="sm:max-w-44"
             value={params.as ?? ''}
             empty="All my parts"
             options={parts.map((value) => ({ value, label: partWords[value] }))}
@@ -53,7 +53,7 @@ export function DocketFilters({ params, parts, facets, onChange }: DocketFilters
         {parts.includes('editor') || parts.includes('reviewer') ? (
           <Select
             aria-label="Worst outcome"
-            className="max-w-48"
+            className="max-sm:basis-[calc(50%-0.25rem)] max-sm:shrink sm:max-w-44"
             value={params.outcome ?? ''}
             empty="Any outcome"
             options={OUTCOMES.map((value) => ({
@@ -67,7 +67,7 @@ export function DocketFilters({ params, parts, facets, onChange }: DocketFilters
         ) : null}
         <Select
           aria-label="Due"
-          className="max-w-48"
+          className="max-sm:basis-[calc(50%-0.25rem)] max-sm:shrink sm:max-w-44"
           value={params.due ?? ''}
           empty="Any due date"
           options={[
@@ -147,7 +147,7 @@ function SearchBox({ value, onChange }: { value: string; onChange: (value: strin
       aria-label="Search title, reference or author"
       aria-keyshortcuts="/"
       placeholder="Search title, reference or author"
-      className="max-w-72"
+      className="sm:max-w-72"
       maxLength={200}
       value={text}
       onChange={(event) => setText(event.target.value)}

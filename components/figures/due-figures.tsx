@@ -2,7 +2,7 @@ import type { Figures } from '@/db/queries/figures'
 import { RowTh, Table, Tbody, Td, Th, Thead, Tr } from '../ui/table'
 import { Bar } from './bar'
 
-const weeks = ['in 7 days', 'in 8 to 14 days', 'in 15 to 21 days', 'in 22 to 28 days'] as const
+const weeks = ['within 7 days', 'in 8 to 14 days', 'in 15 to 21 days', 'in 22 to 28 days'] as const
 
 export function DueFigures({ overdue, dueByWeek }: Pick<Figures, 'overdue' | 'dueByWeek'>) {
   const max = Math.max(overdue, ...dueByWeek)

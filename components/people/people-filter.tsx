@@ -15,18 +15,18 @@ export function PeopleFilter() {
     { shallow: false, throttleMs: 300 },
   )
   return (
-    <search className="mb-4 flex flex-wrap gap-2">
+    <search className="flex grow flex-wrap gap-2">
       <Input
         type="search"
         aria-label="Search name, address or affiliation"
         placeholder="Search"
-        className="max-w-64"
+        className="max-w-64 sm:w-64"
         value={given.search}
         onChange={(event) => void setGiven({ search: event.target.value })}
       />
       <Select
         aria-label="Role"
-        className="max-w-44"
+        className="max-w-40"
         value={given.role}
         empty="Any role"
         options={ROLES.map((role) => ({ value: role, label: role }))}
@@ -34,7 +34,7 @@ export function PeopleFilter() {
       />
       <Select
         aria-label="Account"
-        className="max-w-44"
+        className="max-w-40"
         value={given.status}
         empty="Any account"
         options={PERSON_STATUSES.map((status) => ({ value: status, label: status }))}

@@ -1,7 +1,7 @@
 'use client'
 
 import { useRouter } from 'next/navigation'
-import { useState } from 'react'
+import { useState, type ReactNode } from 'react'
 import type { PersonRow } from '@/db/queries/people'
 import { useAction, type Answer } from '../shell/use-action'
 import { Button } from '../ui/button'
@@ -14,6 +14,8 @@ type Change = { personId: string } & Partial<Omit<PersonForm, 'email'>> & { stat
 
 type PeopleScreenProps = {
   people: readonly PersonRow[]
+  /** What narrows the list. */
+  children: ReactNode
   ownId: string
   mayInvite: boolean
   mayChange: boolean
@@ -21,7 +23,15 @@ type PeopleScreenProps = {
   change: (input: Change) => Promise<Answer<unknown>>
 }
 
-export function PeopleScreen({ people, ownId, mayInvite, mayChange, invite, change }: PeopleScreenProps) {
+export function PeopleScreen({
+  people,
+  children,
+  ownId,
+  mayInvite,
+  mayChange,
+  invite,
+  change,
+}: PeopleScreenProps) {
   const router = useRouter()
   const [inviting, setInviting] = useState(false)
   const [changing, setChanging] = useState<PersonRow | null>(null)
@@ -44,13 +54,14 @@ export function PeopleScreen({ people, ownId, mayInvite, mayChange, invite, chan
 
   return (
     <>
-      {mayInvite ? (
-        <div className="mb-4">
+      <div className="mb-4 flex flex-wrap items-start justify-between gap-3">
+        {children}
+        {mayInvite ? (
           <Button variant="primary" onClick={() => setInviting(true)}>
             Invite someone
           </Button>
-        </div>
-      ) : null}
+        ) : null}
+      </div>
       {quick.message ? (
         <Notice tone="trouble" className="mb-4">
           {quick.message}

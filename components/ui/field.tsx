@@ -85,16 +85,25 @@ type SelectProps = Omit<ComponentProps<'select'>, 'children'> & {
   empty?: string
 }
 
-/** The platform's own list: keyboard, touch and screen reader come with it. */
+/** The platform's own list: keyboard, touch and screen reader come with it. `className` sizes the whole control. */
 export function Select({ options, empty, className, ...rest }: SelectProps) {
   return (
-    <select className={classes(look, 'h-9 pr-7', className)} {...useFieldProps()} {...rest}>
-      {empty === undefined ? null : <option value="">{empty}</option>}
-      {options.map((option) => (
-        <option key={option.value} value={option.value} disabled={option.disabled}>
-          {option.label}
-        </option>
-      ))}
-    </select>
+    <span className={classes('relative block w-full', className)}>
+      <select className={classes(look, 'h-9 appearance-none pr-8')} {...useFieldProps()} {...rest}>
+        {empty === undefined ? null : <option value="">{empty}</option>}
+        {options.map((option) => (
+          <option key={option.value} value={option.value} disabled={option.disabled}>
+            {option.label}
+          </option>
+        ))}
+      </select>
+      <svg
+        viewBox="0 0 12 12"
+        aria-hidden="true"
+        className="pointer-events-none absolute top-1/2 right-2.5 size-3 -translate-y-1/2 fill-none stroke-ink-soft"
+      >
+        <path d="M2 4.5 6 8.5l4-4" strokeWidth="1.4" />
+      </svg>
+    </span>
   )
 }

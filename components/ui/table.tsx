@@ -132,7 +132,7 @@ export function RowTh({ className, ...rest }: ComponentProps<'th'>) {
     <th
       role="rowheader"
       scope="row"
-      className={classes('px-2 py-1.5 text-left align-middle font-normal', className)}
+      className={classes('px-2 py-1.5 text-left align-middle', className ?? 'font-normal')}
       {...rest}
     />
   )

@@ -32,7 +32,6 @@ export default async function PeoplePage({ searchParams }: PageProps<'/people'>)
   return (
     <Page>
       <PageHead title="People" lead="Who has an account here, and in which part." />
-      <PeopleFilter />
       <PeopleScreen
         people={people}
         ownId={actor.id}
@@ -40,7 +39,9 @@ export default async function PeoplePage({ searchParams }: PageProps<'/people'>)
         mayChange={may(actor, 'people.change')}
         invite={invitePersonAction}
         change={changePersonAction}
-      />
+      >
+        <PeopleFilter />
+      </PeopleScreen>
       {people.length === 0 ? <EmptyState>Nobody fits what you asked for.</EmptyState> : null}
     </Page>
   )
