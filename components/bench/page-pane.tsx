@@ -60,6 +60,7 @@ function Pages(props: PagePaneProps & { pdf: PDFDocumentProxy; first: { width: n
   const [zoom, setZoom] = useState<number | null>(null)
   const fit = Math.max(0.3, (paneWidth - 2 * GAP) / first.width)
   const scale = zoom ?? fit
+  // eslint-disable-next-line react-hooks/incompatible-library -- the virtualizer is used in this component alone
   const rows = useVirtualizer({
     count: pdf.numPages,
     getScrollElement: () => scroller.current,

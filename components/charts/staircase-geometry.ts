@@ -68,8 +68,10 @@ export function staircaseGeometry(
   }
   const drafts = adjustedOnly ? [alphaLine(alpha)] : draftLines(claim, family, m, alpha)
   const floor = floorOf(shown, drafts, lastRank)
-  const yScale = scaleLog({ domain: [floor, 1], range: [plot.bottom, plot.top], clamp: true })
-  const xScale = scaleLinear({ domain: [0.5, lastRank + 0.5], range: [plot.left, plot.right] })
+  const onY = scaleLog({ domain: [floor, 1], range: [plot.bottom, plot.top], clamp: true })
+  const onX = scaleLinear({ domain: [0.5, lastRank + 0.5], range: [plot.left, plot.right] })
+  const yScale = (value: number) => toHundredths(onY(value))
+  const xScale = (rank: number) => toHundredths(onX(rank))
   const lines = drafts.map((draft) => {
     const points = stepPoints(draft.at, lastRank, xScale, yScale)
     return { ...draft, points, end: points[points.length - 1] ?? { x: plot.right, y: plot.top } }
@@ -209,6 +211,11 @@ function decades(floor: number): number[] {
 function tickLabel(value: number): string {
   const exponent = Math.round(Math.log10(value))
   return exponent >= -4 ? value.toFixed(Math.max(0, -exponent)) : `1e${exponent}`.replace('-', '−')
+}
+
+/** The server and the browser differ in the last digits of a logarithm; in a drawing they must agree. */
+function toHundredths(pixels: number): number {
+  return Math.round(pixels * 100) / 100
 }
 
 /** Ranks that are named below the picture: at most `most`, evenly, with the first. */

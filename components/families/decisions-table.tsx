@@ -2,18 +2,26 @@
 
 import { useState } from 'react'
 import type { Decision, Family, Report } from '@/lib/checks/types'
+import type { Outcome } from '@/lib/checks/vocabulary'
 import { nameOfReport } from '../charts/describe-dot'
 import { outcomeOfDecision } from '../charts/outcome-of-decision'
 import { printedP, recomputedInterval } from '../charts/printed-p'
 import { isSame } from '../bench/audit-index'
 import { useBench } from '../bench/bench-state'
 import { PlaceLink } from '../bench/place-link'
-import { OutcomeMark, OutcomeShape } from '../shell/outcome-mark'
+import { OutcomeShape, outcomeWords } from '../shell/outcome-mark'
 import { Button } from '../ui/button'
 import { RowTh, Table, Tbody, Td, Th, Thead, Tr } from '../ui/table'
 import { StatisticText } from './statistic-text'
 
 const FIRST_ROWS = 30
+
+const outcomeTones: Record<Outcome, string> = {
+  holds: 'text-holds',
+  fails: 'font-semibold text-fails',
+  undecidable: 'text-undecidable',
+  uncorrected: 'text-uncorrected',
+}
 
 /** Every call of a family beside its recomputation. */
 export function DecisionsTable({ family }: { family: Family }) {
@@ -76,7 +84,7 @@ function DecisionRow({ decision, report, family }: { decision: Decision; report:
       <Td className="whitespace-nowrap">{statistic ? <StatisticText statistic={statistic} /> : '–'}</Td>
       <Td number>{recomputedInterval(decision.adjusted, report.decimals)}</Td>
       <Td className="whitespace-nowrap">{report.called ?? 'not stated'}</Td>
-      <Td className="whitespace-nowrap">{outcome ? <OutcomeMark outcome={outcome} /> : '–'}</Td>
+      <Td className={outcome ? outcomeTones[outcome] : undefined}>{outcome ? outcomeWords[outcome] : '–'}</Td>
       <Td number>{decision.survivesUpTo ?? '–'}</Td>
     </Tr>
   )

@@ -38,7 +38,7 @@ export function FamilySheet({ family, number }: { family: Family; number: number
         )}
       >
         <header>
-          <div className="flex flex-wrap items-baseline justify-between gap-x-4 gap-y-1">
+          <div className="flex items-baseline justify-between gap-x-4">
             <h3 id={`family-${family.id}-title`} className="text-lg font-semibold">
               <span className="sr-only">Family {number}: </span>
               {family.label}

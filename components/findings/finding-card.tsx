@@ -2,6 +2,7 @@
 
 import { useState } from 'react'
 import type { PointRow } from '@/db/queries/points'
+import { bibliography } from '@/lib/checks/bibliography'
 import type { Finding } from '@/lib/checks/types'
 import { isSame, outcomeOfReport, placeOf } from '../bench/audit-index'
 import { useBench } from '../bench/bench-state'
@@ -87,12 +88,14 @@ export function FindingCard({ finding, point }: { finding: Finding; point: Point
             }
           />
         ) : (
-          <blockquote className="reading mt-2 border-l-2 border-rule pl-3 text-ink">
+          <blockquote className="mt-2 max-w-prose border-l-2 border-rule pl-3 font-serif text-base text-ink">
             {point?.asks ?? finding.asks}
           </blockquote>
         )}
         {finding.cites.length > 0 && (
-          <p className="mt-1.5 text-xs text-ink-soft">Guidance: {finding.cites.join('; ')}</p>
+          <p className="mt-1.5 text-xs text-ink-soft">
+            Guidance: {finding.cites.map((key) => bibliography.get(key)?.text ?? key).join(' ')}
+          </p>
         )}
         {!rewording && (
           <div className="mt-2 flex flex-wrap gap-1.5 print:hidden">
