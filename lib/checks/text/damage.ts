@@ -21,7 +21,12 @@ function toLines(frame: Frame): Line[] {
   let last: Word | null = null
   for (const word of [...frame.words].sort((a, b) => a.order - b.order)) {
     let line = lines.at(-1)
-    if (!line || !last || Math.abs(last.v - word.v) > 0.6 * word.size || word.u0 < last.u0 - 2) {
+    if (
+      !line ||
+      !last ||
+      Math.abs(last.v - word.v) > 0.6 * Math.max(last.size, word.size) ||
+      word.u0 < last.u0 - 2
+    ) {
       line = { text: '', at: [] }
       lines.push(line)
     } else if (word.gap || word.u0 - last.u1 > 0.15 * word.size) {

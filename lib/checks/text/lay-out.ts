@@ -90,9 +90,13 @@ function write(parts: readonly Part[], flows: readonly { items: FlowItem[] }[], 
   const tables: PdfTable[] = []
   const marks: Mark[] = []
   let length = 0
+  let last: TablePart | null = null
   for (const part of parts) {
     if (part.kind === 'table') {
-      tables.push(toTable(part.table, part.page, length, vocabulary))
+      const table = toTable(part.table, part.page, length, vocabulary)
+      const before = tables.at(-1)
+      tables.push(last && before && goesOn(last, part) ? carryOver(before, table) : table)
+      last = part
       continue
     }
     const written = joinRows(part.rows, vocabulary)
@@ -102,6 +106,7 @@ function write(parts: readonly Part[], flows: readonly { items: FlowItem[] }[], 
       origins.push(null, null)
       length += 2
     }
+    if (part.kind === 'body') last = null
     marks.push(toMark(part, written.text, length))
     chunks.push(written.text)
     for (const origin of written.origins) origins.push(origin)
@@ -112,6 +117,31 @@ function write(parts: readonly Part[], flows: readonly { items: FlowItem[] }[], 
 
 function* linesOf(flows: readonly { items: FlowItem[] }[]): Generator<string> {
   for (const { items } of flows) for (const item of items) if (item.kind === 'line') yield textOf(item.row)
+}
+
+type TablePart = Extract<Part, { kind: 'table' }>
+
+/** The second table has the columns of the first, stands on the next page and no text lies between. */
+function goesOn(first: TablePart, second: TablePart): boolean {
+  const [before, after] = [first.table, second.table]
+  if (second.page !== first.page + 1 || before.columns.length !== after.columns.length) return false
+  const caption = after.caption.map(textOf).join(' ')
+  if (caption !== '' && !(/continued/i.test(caption) || after.number === before.number)) return false
+  return before.columns.every((column, i) => {
+    const other = after.columns[i]
+    return other !== undefined && Math.min(column.to, other.to) > Math.max(column.from, other.from) - 2
+  })
+}
+
+/** A table that goes on keeps the header, the number and the caption of its first part. */
+function carryOver(first: PdfTable, second: PdfTable): PdfTable {
+  const header = second.header.length > 0 ? second.header : first.header
+  return {
+    ...second,
+    header,
+    number: second.number ?? first.number,
+    caption: second.caption || first.caption,
+  }
 }
 
 function toTable(found: FoundTable, page: number, offset: number, vocabulary: Vocabulary): PdfTable {

@@ -1,6 +1,6 @@
 import { isFigureCaption, textOf } from './captions'
 import type { FlowItem } from './flow'
-import { kindOfHeading, isNumbered } from './headings'
+import { isNumbered, kindOfHeading, readRunIn } from './headings'
 import { median, type Lane, type Row } from './rows'
 import type { FoundTable } from './tables'
 
@@ -54,7 +54,7 @@ function startsParagraph(open: readonly Line[], last: Line, line: Line, usual: U
   const pitch = usualPitch(open, last, usual)
   if (drop > 1.32 * pitch || drop < -1) return true
   if (Math.abs(last.row.size - line.row.size) > 0.12 * usual.size) return true
-  if (isFigureCaption(line.text)) return true
+  if (isFigureCaption(line.text) || readRunIn(line.text)) return true
   const heads = looksLikeHeading(line, usual)
   if (heads !== looksLikeHeading(last, usual)) return true
   if (heads && isNewHeading(last, line)) return true
