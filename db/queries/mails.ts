@@ -1,6 +1,6 @@
-import { count, desc, eq } from 'drizzle-orm'
+import { and, count, desc, eq, isNotNull, isNull, notInArray, or } from 'drizzle-orm'
 import type { Reader } from '@/db/client'
-import { mails } from '@/db/schema'
+import { conflicts, mails, manuscripts } from '@/db/schema'
 import { may } from '@/lib/rules/permissions'
 import type { Actor } from '@/lib/rules/roles'
 import type { MailStatus } from '@/lib/rules/words'
@@ -20,7 +20,10 @@ export type MailRow = {
 
 export type MailPage = { rows: MailRow[]; total: number; page: number; pageSize: number }
 
-/** The outbox, newest first. For administrators. */
+/**
+ * The outbox, newest first. For administrators, but for what concerns a manuscript of their own, or of a
+ * conflict: to whom a review was offered would tell who the reviewer is.
+ */
 export function listMails(
   db: Reader,
   actor: Actor,
@@ -28,7 +31,22 @@ export function listMails(
 ): MailPage {
   const { status, page = 1, pageSize = 50 } = filter
   if (!may(actor, 'outbox.read')) return { rows: [], total: 0, page, pageSize }
-  const where = status && eq(mails.status, status)
+  const ones = db
+    .select({ id: manuscripts.id })
+    .from(manuscripts)
+    .leftJoin(
+      conflicts,
+      and(
+        eq(conflicts.manuscriptId, manuscripts.id),
+        eq(conflicts.personId, actor.id),
+        isNull(conflicts.liftedAt),
+      ),
+    )
+    .where(or(eq(manuscripts.submitterId, actor.id), isNotNull(conflicts.id)))
+  const where = and(
+    or(isNull(mails.manuscriptId), notInArray(mails.manuscriptId, ones)),
+    status && eq(mails.status, status),
+  )
   const rows = db
     .select({
       id: mails.id,
