@@ -1,4 +1,4 @@
-import type { z } from 'zod'
+import { z } from 'zod'
 import { refuse } from '@/lib/rules/refusal'
 
 const maxJsonBytes = 1024 * 1024
@@ -33,6 +33,31 @@ export async function readJson(request: Request): Promise<unknown> {
   } catch (cause) {
     throw Object.assign(refuse('invalid', 'The request is not valid JSON.'), { cause })
   }
+}
+
+/** A JSON body that is an object. */
+export async function readObject(request: Request): Promise<Record<string, unknown>> {
+  const body = await readJson(request)
+  if (typeof body !== 'object' || body === null || Array.isArray(body)) {
+    throw refuse('invalid', 'The request is not a JSON object.')
+  }
+  return { ...body }
+}
+
+/** A JSON body by the command's schema; what the address says (`fixed`) goes before what the body says. */
+export async function readInput<S extends z.ZodType>(
+  request: Request,
+  schema: S,
+  fixed: Record<string, string> = {},
+): Promise<z.output<S>> {
+  return parse(schema, { ...(await readObject(request)), ...fixed })
+}
+
+const roundQuery = z.object({ round: z.coerce.number().int().min(1).optional() })
+
+/** The round that the address asks for; undefined for the current one. */
+export function getRound(request: Request): number | undefined {
+  return parse(roundQuery, readQuery(request)).round
 }
 
 /** The query string as an object; a name that is given more than once becomes a list. */

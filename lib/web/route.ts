@@ -47,12 +47,16 @@ async function getSurroundings(): Promise<Surroundings> {
   return { db: getDb(), settings: getSettings(), actor: await getActor(), now: Date.now() }
 }
 
+/** JSON that nobody stores; for an answer that may be null without being "not found". */
+export function answerJson(value: unknown): Response {
+  return Response.json(value, { headers: { 'Cache-Control': 'private, no-store' } })
+}
+
 function toResponse(answer: Answer): Response {
   if (answer === null) throw refuse('not-found', 'There is nothing here that you can open.')
   if (answer instanceof Response) return answer
-  const headers = { 'Cache-Control': 'private, no-store' }
-  if (answer === undefined) return new Response(null, { status: 204, headers })
-  return Response.json(answer, { headers })
+  if (answer !== undefined) return answerJson(answer)
+  return new Response(null, { status: 204, headers: { 'Cache-Control': 'private, no-store' } })
 }
 
 /** A browser names the site that a change comes from; a site other than this one may change nothing here. */

@@ -1,0 +1,60 @@
+import type { Audit, Report } from '@/lib/checks/types'
+
+type Cell = string | number | boolean | null
+
+/** An audit's reports as CSV (RFC 4180), one a row, each with its family, the decision on it and its statistic. */
+export function writeAuditCsv(audit: Audit): string {
+  const rows = audit.reports.map((report) => Object.values(toRow(audit, report)))
+  const header = audit.reports[0] ? Object.keys(toRow(audit, audit.reports[0])) : noReports
+  return [header, ...rows].map((row) => `${row.map(writeCell).join(',')}\r\n`).join('')
+}
+
+const noReports = ['report']
+
+function toRow(audit: Audit, report: Report): Record<string, Cell> {
+  const family = audit.families.find((one) => one.id === report.family)
+  const decision = family?.decisions.find((one) => one.report === report.id)
+  const claim = audit.claims.find((one) => one.id === family?.claim)
+  const statistic = audit.statistics.find((one) => one.id === report.statistic)
+  return {
+    report: report.id,
+    source: report.place.source,
+    page: report.place.page,
+    row: report.place.row,
+    sheet: report.place.sheet,
+    quote: report.place.quote,
+    relation: report.relation,
+    value: report.value,
+    decimals: report.decimals,
+    low: report.low,
+    high: report.high,
+    scale: report.scale,
+    called: report.called,
+    comparison_a: report.comparison?.[0] ?? null,
+    comparison_b: report.comparison?.[1] ?? null,
+    family: report.family,
+    family_label: family?.label ?? null,
+    procedure: claim?.procedure ?? null,
+    m_printed: family?.m.printed ?? null,
+    m_claimed: family?.m.claimed ?? null,
+    m_due: family?.m.due ?? null,
+    family_outcome: family?.outcome ?? null,
+    adjusted_low: decision?.adjusted[0] ?? null,
+    adjusted_high: decision?.adjusted[1] ?? null,
+    significant: decision?.significant ?? null,
+    survives_up_to: decision?.survivesUpTo ?? null,
+    test: statistic?.test ?? null,
+    df: statistic ? statistic.df.join(' ') : null,
+    statistic: statistic?.value ?? null,
+    p_low: statistic?.pLow ?? null,
+    p_high: statistic?.pHigh ?? null,
+  }
+}
+
+/** Text that a spreadsheet would take for a formula is led by an apostrophe; numbers stay numbers. */
+function writeCell(cell: Cell): string {
+  if (cell === null) return ''
+  if (typeof cell !== 'string') return String(cell)
+  const text = /^[=+\-@\t\r]/.test(cell) ? `'${cell}` : cell
+  return /[",\r\n]/.test(text) ? `"${text.replaceAll('"', '""')}"` : text
+}
