@@ -1,7 +1,8 @@
 import { printedInterval } from '../numbers/printed-interval'
 import type { LaidOut, ReadReport, ReadStatistic } from '../types'
 import { findCall, type WordedCall } from './grammar/call'
-import { findKnown, findPair } from './grammar/comparison'
+import { findKnown } from './grammar/comparison'
+import { findFurther, findPair } from './grammar/pair'
 import type { PrintedP } from './grammar/p-value'
 import { findRole } from './grammar/role'
 import { findOutcome } from './grammar/outcome'
@@ -55,12 +56,15 @@ function readSentence(laidOut: LaidOut, found: SentenceReports, names: Known, al
   const idOf = (kind: 'p' | 's', at: number) => `text-${kind}-${start + at}`
   const clauses = cutClauses(found)
   const calls = settleCalls(found, clauses, names, alpha)
+  const pairs: ([string, string] | null)[] = []
+  for (const clause of clauses)
+    pairs.push(findComparison(clause, text, names, pairs[pairs.length - 1] ?? null))
   return {
     reports: reports.map(({ p, statistic }, i) => {
       const printed = toValue(p, alpha)
       const clause = clauses[i] ?? { before: '', after: '' }
       const own = statistic === null ? null : (statistics[statistic] ?? null)
-      const comparison = findComparison(clause, text, names)
+      const comparison = pairs[i] ?? null
       const from = own && own.start < p.start && p.start - own.end < 6 ? own.start : p.start
       return {
         id: idOf('p', p.start),
@@ -161,21 +165,19 @@ function settleCalls(
   const own = clauses.map(({ before }) => findCall(before, hidden))
   const tail = findCall(clauses[clauses.length - 1]?.after ?? '', hidden)
   let last: WordedCall = null
-  return reports
-    .map(({ p }, i) => {
-      const clause = clauses[i]
-      const worded = own[i] ?? null
-      if (worded) last = worded
-      if (p.markOnly) return 'not significant'
-      // the value heads its clause: 'p = .02 for A', or the verb follows: '(p = .02) differed'
-      const following: WordedCall = worded ? null : findCall(clause?.after.split(/[,;(]/)[0] ?? '', hidden)
-      const inherited = worded ? null : (following ?? last ?? tail)
-      const call = worded ?? inherited
-      if (!call) return null
-      if (worded?.strength === 'strong') return call.call
-      return isAgainst(call.call, p, alpha) ? null : call.call
-    })
-    .map((call, i) => (call === 'significant' && /\b(?:hedge|tend)/i.test('') ? null : call) ?? null)
+  return reports.map(({ p }, i) => {
+    const clause = clauses[i]
+    const worded = own[i] ?? null
+    const earlier: WordedCall = last
+    if (worded) last = worded
+    if (p.markOnly) return 'not significant'
+    // the value heads its clause: 'p = .02 for A', or the verb follows: '(p = .02) differed'
+    const following: WordedCall = worded ? null : findCall(clause?.after.split(/[,;(]/)[0] ?? '', hidden)
+    if (worded?.strength === 'strong') return worded.call
+    const candidates = worded ? [worded] : [following, earlier, tail]
+    const call = candidates.find((other) => other !== null && !isAgainst(other.call, p, alpha))
+    return call?.call ?? null
+  })
 }
 
 /** Whether the printed value itself contradicts the call. */
@@ -185,21 +187,44 @@ function isAgainst(call: 'significant' | 'not significant', p: PrintedP, alpha: 
 }
 
 /** The pair that a clause compares: names known from tables first, else by its own grammar. */
-function findComparison({ before, after }: Clause, text: string, names: Known): [string, string] | null {
+function findComparison(
+  { before, after }: Clause,
+  text: string,
+  names: Known,
+  previous: [string, string] | null,
+): [string, string] | null {
   const label = /^\s*(?:for|in|between)\s[^,;()]*/i.exec(after)?.[0] ?? ''
   for (const stretch of [before, label]) {
     const [a, b, more] = findKnown(stretch, names.groups)
     if (a && b && !more) return [a, b]
   }
-  const pair = findPair(before.replace(/\(\s*$/, '')) ?? findPair(label)
+  const pair = findPair(before) ?? findPair(label)
   if (pair) return pair
+  const [only, other] = findKnown(before, names.groups)
+  if (previous) {
+    // '… and C', 'but not from C'
+    const further = only && !other ? only : findFurther(before)
+    if (
+      further &&
+      !previous.some((name) => name.toLowerCase() === further.toLowerCase()) &&
+      findFurther(before)
+    )
+      return joinFurther(previous, further, before)
+  }
   const [a, b, more] = findKnown(text, names.groups)
   if (a && b && !more) return [a, b]
   // one treatment alone, where all are compared with one control
-  const [only, other] = findKnown(before, names.groups)
   return only && !other && names.control && only.toLowerCase() !== names.control.toLowerCase()
     ? [only, names.control]
     : null
+}
+
+/** A further group stands against the control of the pair before, or, after 'than' or 'from', against its first. */
+function joinFurther(previous: [string, string], further: string, clause: string): [string, string] {
+  const control = previous.find((name) =>
+    /\b(?:control|placebo|vehicle|sham|untreated|reference|baseline)s?\b/i.test(name),
+  )
+  return control && !/\b(?:than|from|to|with)\b/i.test(clause) ? [further, control] : [previous[0], further]
 }
 
 /** The one group with which all others are compared: in every pair of the tables, and named as such or in three pairs. */

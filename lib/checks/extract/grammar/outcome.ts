@@ -3,6 +3,8 @@ import { findKnown } from './comparison'
 
 /** 'differed in accuracy', 'no difference was found for braking distance', 'effect on yield', 'correlated with colony size'. */
 const FORMS: readonly RegExp[] = [
+  // 'effect of temperature on growth'
+  /\beffects?\sof\s[^.;()]{2,60}?\son\s(?:the\s)?(?<name>[A-Za-z][\w\s-]{2,40}?)(?=\s*(?:[,;(]|$|\b(?:between|among|was|were|did|when|after|with|under|than|by|at|compared)\b))/i,
   /\b(?:differ\w*|differences?|effects?|change\w*|improve\w*|increase\w*|reduction|decrease\w*)\b[^.;()]{0,60}?\b(?:in|for|on|of)\s(?:the\s)?(?<name>(?!(?:the\s)?(?:mean|means|groups?|treatments?)\b)[A-Za-z][\w\s-]{2,40}?)(?=\s*(?:[,;(]|$|\b(?:between|among|was|were|did|when|after|with|under|than|by|at|compared|versus|vs)\b))/i,
   // 'Grip strength was higher', 'Fanning was correlated with colony size', 'For lane keeping the difference'
   /^[\s,;)]*(?:and\s|but\s|whereas\s|while\s)?(?:for|in|on)\s(?:the\s)?(?<name>[a-z][\w\s-]{2,30}?)\s(?=the|there|no\b|groups?\b|differences?\b)/i,
@@ -16,9 +18,13 @@ export function findOutcome(clause: string, sentence: string, names: Names): str
   const [only, second] = findKnown(sentence, names.outcomes)
   if (only && !second) return only
   for (const form of FORMS) {
-    const name = form.exec(clause.trim())?.groups?.name?.trim()
+    const name = form
+      .exec(clause.trim())
+      ?.groups?.name?.replace(/^(?:mean|median|average|total)\s/i, '')
+      .trim()
     if (
       name &&
+      !/\b(?:vs|versus|against|than|between)\b/i.test(name) &&
       !/^(?:it|they|there|this|that|these|those|none|each|all|both|we|groups?|treatments?|differences?|means?)$/i.test(
         name,
       ) &&
