@@ -39,7 +39,7 @@ export function AuditPane(props: AuditPaneProps) {
     >
       <Tabs.List
         aria-label="Parts of the audit"
-        className="flex h-11 shrink-0 gap-4 overflow-x-auto border-b border-rule px-4 print:hidden"
+        className="flex min-h-11 shrink-0 flex-wrap gap-x-4 border-b border-rule px-4 print:hidden"
       >
         <Tab value="families" count={audit.families.length} />
         <Tab value="findings" count={audit.findings.length} />
@@ -78,7 +78,7 @@ function Tab({ value, count }: { value: AuditTab; count: number | null }) {
   return (
     <Tabs.Trigger
       value={value}
-      className="inline-flex items-center gap-1.5 border-b-2 border-transparent px-0.5 whitespace-nowrap text-ink-soft hover:text-ink data-[state=active]:border-tide data-[state=active]:font-medium data-[state=active]:text-ink"
+      className="-mb-px inline-flex min-h-9 items-center gap-1.5 border-b-2 border-transparent px-0.5 whitespace-nowrap text-ink-soft hover:text-ink data-[state=active]:border-tide data-[state=active]:font-medium data-[state=active]:text-ink"
     >
       {value.charAt(0).toUpperCase() + value.slice(1)}
       {count !== null && <span className="tabular text-xs">{count}</span>}
@@ -98,7 +98,7 @@ function Pane({ value, title, children }: { value: AuditTab; title: string; chil
       forceMount
       className="min-h-0 flex-1 overflow-y-auto px-3 py-4 data-[state=inactive]:hidden sm:px-5 print:block! print:overflow-visible"
     >
-      <h2 className="mb-3 hidden text-lg font-semibold print:block">{title}</h2>
+      <h2 className="sr-only mb-3 text-lg font-semibold print:not-sr-only">{title}</h2>
       {children}
     </Tabs.Content>
   )

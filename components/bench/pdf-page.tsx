@@ -40,7 +40,12 @@ export function PdfPage(props: PdfPageProps) {
   return (
     <div
       className="relative mx-auto bg-white shadow-sheet"
-      style={{ width: size.width, height: size.height, ['--total-scale-factor' as string]: scale }}
+      style={{
+        colorScheme: 'light',
+        width: size.width,
+        height: size.height,
+        ['--total-scale-factor' as string]: scale,
+      }}
     >
       {page && viewport && <Drawn page={page} viewport={viewport} onFail={() => setFailed(true)} />}
       {viewport && (
@@ -119,8 +124,14 @@ async function drawText(
   container.replaceChildren()
   const layer = new TextLayer({ textContentSource: page.streamTextContent(), container, viewport })
   // Without the text layer the page can still be read; selecting text is all that is lost.
-  layer.render().catch(() => undefined)
+  layer.render().then(hideMeasuringCanvas, () => undefined)
   return layer
+}
+
+/** The reader measures letters on a canvas of no size, which it leaves outside every landmark. */
+function hideMeasuringCanvas() {
+  for (const canvas of document.querySelectorAll('.hiddenCanvasElement'))
+    canvas.setAttribute('aria-hidden', 'true')
 }
 
 function isCancelled(error: unknown): boolean {

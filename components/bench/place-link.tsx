@@ -1,11 +1,16 @@
 import type { Place } from '@/lib/checks/types'
 import { classes } from '../ui/classes'
 
-/** Where something stands, in few words. */
+/** Where something stands, in full. */
 export function placeWords(place: Pick<Place, 'page' | 'row' | 'sheet'>): string {
+  return place.page === null && place.row !== null && place.sheet
+    ? `${place.sheet}, ${shortPlace(place)}`
+    : shortPlace(place)
+}
+
+function shortPlace(place: Pick<Place, 'page' | 'row'>): string {
   if (place.page !== null) return `p. ${place.page}`
-  if (place.row === null) return '–'
-  return place.sheet ? `${place.sheet}, row ${place.row}` : `row ${place.row}`
+  return place.row === null ? '–' : `row ${place.row}`
 }
 
 type PlaceLinkProps = {
@@ -31,7 +36,7 @@ export function PlaceLink({ place, what, onShow, row, className }: PlaceLinkProp
         className,
       )}
     >
-      {placeWords(place)}
+      {shortPlace(place)}
     </button>
   )
 }

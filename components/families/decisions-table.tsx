@@ -16,6 +16,8 @@ import { StatisticText } from './statistic-text'
 
 const FIRST_ROWS = 30
 
+const calls = { significant: 'sig.', 'not significant': 'n.s.' } as const
+
 const outcomeTones: Record<Outcome, string> = {
   holds: 'text-holds',
   fails: 'font-semibold text-fails',
@@ -79,11 +81,13 @@ function DecisionRow({ decision, report, family }: { decision: Decision; report:
           <PlaceLink row place={report.place} what={nameOfReport(report)} onShow={() => show(target)} />
         </span>
       </Td>
-      <RowTh>{report.comparison ? report.comparison.join(' – ') : nameOfReport(report)}</RowTh>
+      <RowTh className="max-w-52 truncate">
+        {report.comparison?.join(' – ') ?? <q className="font-mono text-xs">{report.place.quote}</q>}
+      </RowTh>
       <Td number>{printedP(report)}</Td>
       <Td className="whitespace-nowrap">{statistic ? <StatisticText statistic={statistic} /> : '–'}</Td>
       <Td number>{recomputedInterval(decision.adjusted, report.decimals)}</Td>
-      <Td className="whitespace-nowrap">{report.called ?? 'not stated'}</Td>
+      <Td className="whitespace-nowrap">{report.called ? calls[report.called] : 'not stated'}</Td>
       <Td className={outcome ? outcomeTones[outcome] : undefined}>{outcome ? outcomeWords[outcome] : '–'}</Td>
       <Td number>{decision.survivesUpTo ?? '–'}</Td>
     </Tr>

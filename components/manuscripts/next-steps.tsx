@@ -70,9 +70,7 @@ export function NextSteps({
       {may('readRecord') && <ButtonLink href={`${home}/record`}>Record</ButtonLink>}
       {may('runAuditAgain') && <Button onClick={() => setAsked('again')}>Run the audit again</Button>}
       {may('endAssignment') && <Button onClick={() => setAsked('end')}>End the assignment</Button>}
-      {may('declareConflict') && manuscript.sight === 'reviewer' && (
-        <Button onClick={() => setAsked('conflict')}>Declare a conflict</Button>
-      )}
+      {may('declareConflict') && <Button onClick={() => setAsked('conflict')}>Declare a conflict</Button>}
       {may('closeManuscript') && <Button onClick={() => setAsked('close')}>Close</Button>}
       {may('withdrawManuscript') && (
         <Button variant="danger" onClick={() => setAsked('withdraw')}>

@@ -1,13 +1,14 @@
 'use client'
 
 import { useState } from 'react'
-import type { ManuscriptView } from '@/db/queries/manuscript'
+import type { ConflictView, ManuscriptView } from '@/db/queries/manuscript'
 import { CommentsSection } from '../comments/comments-section'
 import type { CommentSubject } from '../comments/use-comments'
 import { StateTag } from '../shell/state-tag'
 import { Page } from '../ui/page'
 import { PageHead } from '../ui/page-head'
 import { AuditProgressView } from './audit-progress'
+import { LiftConflict } from './lift-conflict'
 import type { ManuscriptActions } from './manuscript-actions'
 import { NextSteps } from './next-steps'
 import { PeopleList } from './people-list'
@@ -55,7 +56,16 @@ export function Overview({ manuscript, actions, limitBytes }: OverviewProps) {
             <h2 id="people-title" className="mb-2 text-lg font-semibold">
               Who has it
             </h2>
-            <PeopleList manuscript={manuscript} />
+            <PeopleList
+              manuscript={manuscript}
+              {...(may('liftConflict')
+                ? {
+                    conflictAction: (conflict: ConflictView) => (
+                      <LiftConflict conflict={conflict} lift={actions.liftConflict} />
+                    ),
+                  }
+                : {})}
+            />
           </section>
           <section aria-labelledby="files-title">
             <h2 id="files-title" className="mb-2 text-lg font-semibold">

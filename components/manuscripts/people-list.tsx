@@ -1,9 +1,16 @@
-import type { ManuscriptView } from '@/db/queries/manuscript'
+import type { ReactNode } from 'react'
+import type { ConflictView, ManuscriptView } from '@/db/queries/manuscript'
 import { DueTime } from '../docket/due-time'
 import { Time } from '../ui/time'
 
+type PeopleListProps = {
+  manuscript: ManuscriptView
+  /** What can be done about a conflict, such as lifting it. */
+  conflictAction?: (conflict: ConflictView) => ReactNode
+}
+
 /** Who has the manuscript, as far as the house rules let the viewer know. */
-export function PeopleList({ manuscript }: { manuscript: ManuscriptView }) {
+export function PeopleList({ manuscript, conflictAction }: PeopleListProps) {
   const { submitter, correspondingAuthor, correspondingEmail, assignment, conflicts } = manuscript
   return (
     <dl className="grid grid-cols-[max-content_minmax(0,1fr)] gap-x-5 gap-y-2">
@@ -59,7 +66,8 @@ export function PeopleList({ manuscript }: { manuscript: ManuscriptView }) {
                   {conflict.person.name}: {conflict.reason}{' '}
                   <span className="text-xs text-ink-soft">
                     (<Time at={conflict.createdAt} show="short" />)
-                  </span>
+                  </span>{' '}
+                  {conflictAction?.(conflict)}
                 </li>
               ))}
             </ul>
