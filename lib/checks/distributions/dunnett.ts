@@ -22,7 +22,9 @@ export function productNormalUpper(d: number, loadings: readonly number[], sides
   const steepest = distinct.reduce((largest, [l]) => Math.max(largest, Math.abs(l)), 0)
   const reach = WIDTH + Math.max(0, steepest * d)
   let sum = 0
-  for (let j = -Math.ceil(reach / step); j <= reach / step; j++) {
+  // Two-sided, the integrand is the same at z and −z.
+  const first = sides === 2 ? 0 : -Math.ceil(reach / step)
+  for (let j = first; j <= reach / step; j++) {
     const z = j * step
     let log = 0
     for (const [loading, times] of distinct) {
@@ -31,7 +33,7 @@ export function productNormalUpper(d: number, loadings: readonly number[], sides
       const below = sides === 2 ? normalUpper((d + loading * z) / rest) : 0
       log += times * Math.log1p(-Math.min(1, above + below))
     }
-    sum -= normalDensity(z) * Math.expm1(log)
+    sum -= (sides === 2 && j > 0 ? 2 : 1) * normalDensity(z) * Math.expm1(log)
   }
   return Math.min(1, sum * step)
 }

@@ -44,9 +44,9 @@ export const hommel: AdjustSorted = (sorted, m) => {
   const p = (rank: number) => sorted[rank - 1] ?? 1
 
   // d(s) is 1 (the cap) up to s = unknown + 1, where only members at p = 1 enter; least[s - unknown] from there on.
+  // Those members need no point of their own: what they give is the cap.
   const least = new Float64Array(n + 1).fill(1)
-  const hull = createHull(n + 1)
-  if (unknown > 0) hull.add(0, 1)
+  const hull = createHull(n)
   for (let s = unknown + 2; s <= m; s++) {
     hull.add(s - 2, p(m - s + 2))
     least[s - unknown] = Math.min(1, s * hull.leastSlope(s))

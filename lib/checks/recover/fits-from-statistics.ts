@@ -46,12 +46,13 @@ export function fitsFromStatistics(
 ): StatisticFit[] {
   const raw = statistics.map(({ test, low, high, df, sides }) => pBounds(test, low, high, df, sides))
   const fromP = fits(printed, raw, options).map((fit) => ({ ...fit, groups: null }))
-  return [...fromP, ...findFromT(printed, statistics, options.groupsMax ?? 12)]
+  return [...fromP, ...findFromT(printed, statistics, raw, options.groupsMax ?? 12)]
 }
 
 function findFromT(
   printed: readonly Interval[],
   statistics: readonly PrintedStatistic[],
+  raw: readonly Interval[],
   groupsMax: number,
 ): StatisticFit[] {
   const df = statistics[0]?.df[0]
@@ -68,12 +69,24 @@ function findFromT(
   for (const { procedure, count, p } of FROM_T) {
     for (let k = 2; k <= groupsMax; k++) {
       if (count(k) < statistics.length) continue
-      const all = printed.every((print, i) => {
-        const size = sizes[i] ?? { low: NaN, high: NaN }
-        return meet(print, { low: p(size.high, k, df), high: p(size.low, k, df) })
-      })
+      // Tukey and Dunnett lie between the raw p and Bonferroni's: what misses that needs no quadrature.
+      const bounded = procedure === 'scheffe' || isWithinBonferroni(printed, raw, count(k))
+      const all =
+        bounded &&
+        printed.every((print, i) => {
+          const size = sizes[i] ?? { low: NaN, high: NaN }
+          const low = p(size.high, k, df)
+          return meet(print, { low, high: 1 }) && meet(print, { low, high: p(size.low, k, df) })
+        })
       if (all) found.push({ procedure, m: count(k), groups: k })
     }
   }
   return found
+}
+
+function isWithinBonferroni(printed: readonly Interval[], raw: readonly Interval[], m: number): boolean {
+  return printed.every((print, i) => {
+    const { low, high } = raw[i] ?? { low: NaN, high: NaN }
+    return meet(print, { low, high: Math.min(1, m * high) })
+  })
 }
