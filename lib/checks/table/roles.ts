@@ -117,9 +117,9 @@ const PLAIN: readonly (readonly [
   ['ci', /\bCI\b|confidence|\blwr\b|\bupr\b|^(?:lower|upper)\b/i],
   ['se', /^(?:s\.?e\.?m?\.?|std\.? ?err(?:or)?\.?|standard error)\b/i],
   ['sd', /^(?:s\.?d\.?|std\.? ?dev(?:iation)?\.?|standard deviation)\b/i],
-  ['mean', /^(?:means?|average|m|median)\b/i],
   ['n', /^(?:n|no\.?|number|sample size|count)\b(?!.*(?:mean|%))/i],
   ['estimate', /\bdiff|estimate|coef|^(?:β|b|md|or|hr|rr|d|g|log2?fc|effect(?: size)?|delta|Δ)\b|fold/i],
+  ['mean', /^(?:means?|average|m|median)\b/i],
   [
     'group2',
     /^(?:\(j\)|group ?(?:b|2|ii|j)\b|treatment ?(?:b|2)\b|versus|vs\.?|reference|compared (?:with|to)|second group|condition ?(?:b|2)\b|level ?(?:b|2)\b)/i,
