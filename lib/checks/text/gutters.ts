@@ -98,7 +98,7 @@ function findRepeated(found: readonly Gutter[][]): Gutter[] {
 }
 
 function holds(gutter: Gutter, lines: readonly Segment[]): boolean {
-  const starters = lines.filter((s) => Math.abs(s.u0 - gutter.to) < 3).length
+  const starters = lines.filter((s) => s.u0 > gutter.to - 3 && s.u0 < gutter.to + 40).length
   const beside = lines.filter((s) => s.u1 < gutter.to - 3).length
   const crossing = lines.filter((s) => crosses(s, gutter.to)).length
   return starters >= 2 && beside >= 2 && crossing <= 0.5 * (starters + beside)

@@ -82,8 +82,8 @@ function isHost(other: Word, word: Word, mark: boolean): boolean {
   if (!mark && word.size >= 0.85 * other.size) return false
   const after = word.u0 - other.u1
   const before = other.u0 - word.u1
-  const near = (gap: number) => gap < 0.3 * other.size && gap > -0.35 * other.size
-  return near(after) || (shift > 0 && near(before))
+  const near = (gap: number, most: number) => gap < most * other.size && gap > -0.35 * other.size
+  return near(after, 0.3) || (shift > 0 && near(before, 0.4))
 }
 
 function splitRow(row: Word[], gutters: readonly Gutter[]): Segment[] {

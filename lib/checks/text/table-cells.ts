@@ -1,6 +1,7 @@
 import type { Box, PdfCell } from '../types'
 import { normalise } from './normalise'
 import type { Row } from './rows'
+import { isLabelOnly, mergeWrapped } from './table-lines'
 import type { Column } from './table-columns'
 import { toPageBox, type Word } from './words'
 import { writeLine } from './write-line'
@@ -13,11 +14,12 @@ export function isNumeric(text: string): boolean {
 }
 
 // a number with words to it is a head or a label: "18–25 Years", "0 Day"
-function isPlainNumber(text: string): boolean {
+export function isPlainNumber(text: string): boolean {
   return isNumeric(text) && !/\p{L}{3,}/u.test(text.replace(/\([^)]*\)/g, ''))
 }
 
-type Line = { cells: Word[][]; row: Row; spans: { from: number; to: number; words: Word[] }[] }
+/** A row of a table: the words of each column, and those that reach over several. */
+export type Line = { cells: Word[][]; row: Row; spans: { from: number; to: number; words: Word[] }[] }
 
 /** Puts every row's words into the columns; rows above the first row of numbers are the header. */
 export function fillCells(
@@ -27,7 +29,7 @@ export function fillCells(
   const lines = rows.map((row) => toLine(row, columns))
   const first = lines.findIndex((line) => isBody(line))
   const headEnd = first < 0 ? Math.min(1, lines.length) : backOverLabels(lines, first)
-  const header = lines.slice(0, headEnd).map((line) => toCells(line, columns.length, true))
+  const header = spreadHeads(lines.slice(0, headEnd).map((line) => toCells(line, columns.length, true)))
   const merged = mergeWrapped(lines.slice(headEnd))
   return { header, body: merged.map((line) => toCells(line, columns.length, false)) }
 }
@@ -79,7 +81,7 @@ function cut(words: readonly Word[], columns: readonly Column[]): Word[][] {
           last !== null &&
           last.u1 <= next.from - 0.5 &&
           word.u0 >= c.to + 0.5 &&
-          gapWidth >= Math.min(0.5 * (next.from - c.to), 0.8 * word.size)
+          (gapWidth > 0.48 * word.size || isNumeric(word.chars) || isNumeric(last.chars))
         )
       })
     if (!last || boundary) pieces.push([word])
@@ -109,8 +111,8 @@ function cutByEdges(words: Word[], columns: readonly Column[]): Word[][] {
   const u1 = words.at(-1)?.u1 ?? 0
   const spanned = columns.filter((c) => Math.min(u1, c.to) - Math.max(u0, c.from) > 1)
   if (spanned.length < 2 || words.length < spanned.length) return [words]
-  const ends = spanned.map((c) => words.findIndex((word) => Math.abs(word.u1 - c.to) < 0.3 * word.size))
-  const begins = spanned.map((c) => words.findIndex((word) => Math.abs(word.u0 - c.from) < 0.3 * word.size))
+  const ends = spanned.map((c) => words.findIndex((word) => Math.abs(word.u1 - c.to) < 0.15 * word.size))
+  const begins = spanned.map((c) => words.findIndex((word) => Math.abs(word.u0 - c.from) < 0.15 * word.size))
   const cuts = isRising(ends)
     ? ends.slice(0, -1).map((at) => at + 1)
     : isRising(begins)
@@ -133,53 +135,44 @@ function isBody(line: Line): boolean {
   return rest.filter((c) => isPlainNumber(c.text)).length >= 0.5 * rest.length
 }
 
-/** Labels that wrap: a line with nothing but a label that runs on into the next line, or from the last one. */
-function mergeWrapped(lines: readonly Line[]): Line[] {
-  const merged: Line[] = []
-  const pitches = lines.slice(1).map((line, i) => (lines[i]?.row.v ?? 0) - line.row.v)
-  const usual = pitches.length > 0 ? Math.max(...pitches) : 0
-  lines.forEach((line, index) => {
-    const last = merged.at(-1)
-    const pitch = pitches[index - 1] ?? Infinity
-    const onlyLabel = isLabelOnly(line)
-    if (last && onlyLabel && pitch < 1.5 * line.row.size && runsOn(last, line, pitch, usual)) {
-      line.cells.forEach((words, i) => last.cells[i]?.push(...words))
-      last.spans.push(...line.spans)
-    } else if (last && isLabelOnly(last) && !onlyLabel && runsInto(last, line)) {
-      line.cells.forEach((words, i) => last.cells[i]?.push(...words))
-      last.spans.push(...line.spans)
-    } else merged.push({ cells: line.cells.map((c) => [...c]), row: line.row, spans: [...line.spans] })
-  })
-  return merged
-}
-
-function isLabelOnly(line: Line): boolean {
-  return (
-    line.spans.length === 0 &&
-    line.cells.every((words, i) => (i === 0 ? words.length > 0 : words.length === 0))
-  )
-}
-
-function runsOn(last: Line, line: Line, pitch: number, usual: number): boolean {
-  if (isLabelOnly(last)) return false
-  const before = writeLine(last.cells[0] ?? []).text
-  const text = writeLine(line.cells[0] ?? []).text
-  return (
-    /^[\p{Ll}(+&]/u.test(text) || /(?:\bvs\.?|\band|[-–,+&]|\bof|\bor)$/.test(before) || pitch < 0.92 * usual
-  )
-}
-
-function runsInto(last: Line, line: Line): boolean {
-  const before = writeLine(last.cells[0] ?? []).text
-  const text = writeLine(line.cells[0] ?? []).text
-  return /(?:\bvs\.?|\band|[-–+&]|\bof|\bor)$/.test(before) || /^(?:\p{Ll}|vs\b|\+)/u.test(text)
-}
-
 function toCells(line: Line, count: number, header: boolean): PdfCell[] {
   const groups: Word[][] = Array.from({ length: count }, (_, i) => [...(line.cells[i] ?? [])])
   for (const span of line.spans)
     for (let i = span.from; i <= (header ? span.to : span.from); i++) groups[i]?.push(...span.words)
   return groups.map(toCell)
+}
+
+/**
+ * Heads over groups of columns, where the names below them repeat themselves ('t', 'P', 't', 'P'): each
+ * head above stands over its whole group, wherever in the group it was printed.
+ */
+function spreadHeads(header: PdfCell[][]): PdfCell[][] {
+  return header.map((row, index) => {
+    const below = header.slice(index + 1)
+    const names = row.slice(1).map((_, i) =>
+      below
+        .map((cells) => cells[i + 1]?.text ?? '')
+        .join(' ')
+        .trim(),
+    )
+    const period = findPeriod(names)
+    if (period === null) return row
+    const groups = Array.from({ length: names.length / period }, (_, g) => {
+      const filled = row.slice(1 + g * period, 1 + (g + 1) * period).filter((cell) => cell.text !== '')
+      return new Set(filled.map((cell) => cell.text)).size === 1 ? filled[0] : undefined
+    })
+    if (new Set(groups.map((cell) => cell?.text)).size < groups.length || groups.includes(undefined))
+      return row
+    return row.map((cell, i) => (i === 0 ? cell : (groups[Math.floor((i - 1) / period)] ?? cell)))
+  })
+}
+
+function findPeriod(names: readonly string[]): number | null {
+  for (let period = 2; period <= names.length / 2; period++) {
+    if (names.length % period !== 0) continue
+    if (names.every((name, i) => name !== '' && name === names[i % period])) return period
+  }
+  return null
 }
 
 export function toCell(words: readonly Word[]): PdfCell {

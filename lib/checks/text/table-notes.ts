@@ -21,7 +21,8 @@ export function findNotes(
     if (!row || !before) break
     const text = textOf(row)
     const distance = before.v - row.v
-    if (distance > 2.2 * Math.max(row.size, size) || captionNumber(text) !== null || isFigureCaption(text))
+    const reach = noteStart.test(text) ? 3.6 : 2.2
+    if (distance > reach * Math.max(row.size, size) || captionNumber(text) !== null || isFigureCaption(text))
       break
     const small = row.size < 0.95 * bodySize
     const continues = end > from && distance < 1.45 * row.size && Math.abs(row.size - before.size) < 0.4

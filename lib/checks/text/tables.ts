@@ -1,7 +1,7 @@
 import type { PdfCell } from '../types'
 import { captionNumber, isCommand, isFigureCaption, textOf } from './captions'
 import { cutFinely, isProseLine, median, type Lane, type Row } from './rows'
-import { fillCells, isNumeric } from './table-cells'
+import { fillCells, isNumeric, isPlainNumber } from './table-cells'
 import { cutAtColumns, findColumns, type Column } from './table-columns'
 import { findNotes } from './table-notes'
 
@@ -109,7 +109,7 @@ function buildTable(
   const end = absorb(reading, columns, trimEnd(fine, start, grown) - 1, 1, free) + 1
   const blocks = splitStacked(fine.slice(first, end)).map((block) => toBlock(block))
   const cells = blocks.flatMap((block) => block.body.flat()).filter((cell) => cell.text !== '')
-  const numeric = cells.filter((cell) => isNumeric(cell.text)).length
+  const numeric = cells.filter((cell) => isPlainNumber(cell.text)).length
   const lines = blocks.reduce((sum, block) => sum + block.body.length, 0)
   const below = above ? null : findCaptionBelow(rows, end, pitch)
   const captioned = above !== null || below !== null
