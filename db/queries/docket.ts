@@ -258,6 +258,7 @@ function noOutcomes(): Record<Outcome, number> {
 
 function countOutcomes(db: Reader, auditIds: string[]): Map<string, Record<Outcome, number>> {
   const counts = new Map<string, Record<Outcome, number>>()
+  if (auditIds.length === 0) return counts
   const rows = db
     .select({ auditId: families.auditId, outcome: families.outcome, n: count() })
     .from(families)
@@ -271,6 +272,7 @@ function countOutcomes(db: Reader, auditIds: string[]): Map<string, Record<Outco
 }
 
 function countOpenPoints(db: Reader, roundIds: string[]): Map<string, number> {
+  if (roundIds.length === 0) return new Map()
   const rows = db
     .select({ roundId: points.roundId, n: count() })
     .from(points)

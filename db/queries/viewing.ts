@@ -55,6 +55,7 @@ export function listPseudonyms(
   db: Reader,
   manuscriptIds: readonly string[],
 ): Map<string, Map<string, string>> {
+  if (manuscriptIds.length === 0) return new Map()
   const rows = db
     .select({ manuscriptId: assignments.manuscriptId, reviewerId: assignments.reviewerId })
     .from(assignments)

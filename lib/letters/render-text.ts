@@ -2,8 +2,8 @@ import type { Token } from 'markdown-it'
 
 const width = 76
 
-/** A line's beginning: `first` on the first line of the next block, `rest` on every other. */
-type Frame = { first: string; rest: string; count: number | null }
+/** A line's beginning: `first` on the first line within the frame, `rest` on every other. */
+type Frame = { first: string; rest: string; count: number | null; begun: boolean }
 
 /** Markdown's tokens as plain text of at most 76 columns, for the part of a mail that shows no HTML. */
 export function renderText(tokens: readonly Token[]): string {
@@ -11,13 +11,15 @@ export function renderText(tokens: readonly Token[]): string {
   const frames: Frame[] = []
   let heading = false
   const write = (text: string, kept = false) => {
-    const prefix = frames.map((frame) => frame.rest).join('')
-    const first = frames.map((frame) => frame.first).join('')
-    for (const frame of frames) if (frame.count === null) frame.first = frame.rest
-    const room = Math.max(20, width - prefix.length)
+    const rest = frames.map((frame) => frame.rest).join('')
+    const first = frames.map((frame) => (frame.begun ? frame.rest : frame.first)).join('')
+    // An empty line belongs to what goes on, not to the quotation or item that begins after it.
+    const between = frames.filter((frame) => frame.begun).map((frame) => frame.rest)
+    for (const frame of frames) frame.begun = true
+    const room = Math.max(20, width - rest.length)
     const rows = text.split('\n').flatMap((line) => (kept ? [line] : wrap(line, room)))
-    if (lines.length > 0 && lines.at(-1) !== '') lines.push(prefix.trimEnd())
-    lines.push(...rows.map((row, i) => ((i === 0 ? first : prefix) + row).trimEnd()))
+    if (lines.length > 0) lines.push(between.join('').trimEnd())
+    lines.push(...rows.map((row, i) => ((i === 0 ? first : rest) + row).trimEnd()))
     return rows
   }
   for (const token of tokens) {
@@ -29,11 +31,11 @@ export function renderText(tokens: readonly Token[]): string {
         heading = false
         break
       case 'blockquote_open':
-        frames.push({ first: '> ', rest: '> ', count: null })
+        frames.push({ first: '> ', rest: '> ', count: null, begun: false })
         break
       case 'bullet_list_open':
       case 'ordered_list_open':
-        frames.push({ first: '', rest: '', count: Number(token.attrGet('start') ?? 1) })
+        frames.push({ first: '', rest: '', count: Number(token.attrGet('start') ?? 1), begun: false })
         break
       case 'list_item_open':
         frames.push(openItem(frames.at(-1), token.markup))
@@ -63,10 +65,11 @@ export function renderText(tokens: readonly Token[]): string {
 
 function openItem(list: Frame | undefined, markup: string): Frame {
   // A bullet's markup is "-", "+" or "*"; a numbered item's is the character after its number.
-  if (!list || list.count === null || /[-+*]/.test(markup)) return { first: '- ', rest: '  ', count: null }
+  if (!list || list.count === null || /[-+*]/.test(markup))
+    return { first: '- ', rest: '  ', count: null, begun: false }
   const label = `${list.count}${markup} `
   list.count += 1
-  return { first: label, rest: ' '.repeat(label.length), count: null }
+  return { first: label, rest: ' '.repeat(label.length), count: null, begun: false }
 }
 
 function renderInline(tokens: readonly Token[]): string {
