@@ -19,7 +19,7 @@ export function ClaimsSection() {
           ' by the house rules; the manuscript states none.'
         ) : (
           <>
-            , stated on page {alpha.page}: <q className="font-mono text-xs">{alpha.quote}</q>
+            , stated on page {alpha.page}: <q className="font-mono text-xs font-normal">{alpha.quote}</q>
           </>
         )}
       </p>
@@ -55,7 +55,7 @@ export function ClaimsSection() {
                     <Td>
                       <PlaceLink row place={claim.place} what="the claim" onShow={() => show(target)} />
                     </Td>
-                    <RowTh className="min-w-56 font-mono text-xs">{claim.place.quote}</RowTh>
+                    <RowTh className="min-w-56 font-mono text-xs font-normal">{claim.place.quote}</RowTh>
                     <Td>{procedureNames[claim.procedure]}</Td>
                     <Td number>{claim.m ?? '–'}</Td>
                     <Td number>{claim.threshold ?? '–'}</Td>

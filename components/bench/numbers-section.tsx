@@ -3,6 +3,7 @@
 import { useMemo, useState } from 'react'
 import type { Report, Statistic } from '@/lib/checks/types'
 import { SOURCES, type Source } from '@/lib/checks/vocabulary'
+import { shortCalls } from '../charts/describe-dot'
 import { printedP, recomputedInterval } from '../charts/printed-p'
 import { StatisticText } from '../families/statistic-text'
 import { OutcomeShape, outcomeWords } from '../shell/outcome-mark'
@@ -125,11 +126,13 @@ function ReportsTable({ reports, total }: { reports: readonly Report[]; total: n
                       />
                     </span>
                   </Td>
-                  <RowTh className="max-w-56 truncate font-mono text-xs">{report.place.quote}</RowTh>
+                  <RowTh className="max-w-56 truncate font-mono text-xs font-normal">
+                    {report.place.quote}
+                  </RowTh>
                   <Td number>{printedP(report)}</Td>
                   <Td>{report.scale}</Td>
-                  <Td>{report.comparison?.join(' – ') ?? '–'}</Td>
-                  <Td className="whitespace-nowrap">{report.called ?? '–'}</Td>
+                  <Td className="max-w-44 truncate">{report.comparison?.join(' – ') ?? '–'}</Td>
+                  <Td className="whitespace-nowrap">{report.called ? shortCalls[report.called] : '–'}</Td>
                   <Td className="max-w-48 truncate">
                     {(report.family && index.families.get(report.family)?.label) || '–'}
                   </Td>
@@ -191,7 +194,9 @@ function StatisticsTable({ statistics, total }: { statistics: readonly Statistic
                       onShow={() => show(target)}
                     />
                   </Td>
-                  <RowTh className="max-w-56 truncate font-mono text-xs">{statistic.place.quote}</RowTh>
+                  <RowTh className="max-w-56 truncate font-mono text-xs font-normal">
+                    {statistic.place.quote}
+                  </RowTh>
                   <Td>
                     <StatisticText statistic={statistic} />
                   </Td>

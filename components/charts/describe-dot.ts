@@ -25,3 +25,6 @@ export function callWords({ called, significant }: Pick<Decision, 'called' | 'si
   if (called === significant) return `${call}, holds`
   return significant ? `${call}, is significant` : `${call}, is not`
 }
+
+/** As the trade abbreviates them, for narrow columns. */
+export const shortCalls = { significant: 'sig.', 'not significant': 'n.s.' } as const

@@ -73,7 +73,7 @@ export function CommentThread({ manuscriptId, thread, mayWrite, onShow }: Commen
         </div>
       ) : (
         mayWrite && (
-          <div className="mt-1 flex gap-1 print:hidden">
+          <div className="mt-1 -ml-2 flex gap-1 print:hidden">
             <Button size="small" variant="quiet" onClick={() => setReplying(true)}>
               Reply
             </Button>

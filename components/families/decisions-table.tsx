@@ -3,7 +3,7 @@
 import { useState } from 'react'
 import type { Decision, Family, Report } from '@/lib/checks/types'
 import type { Outcome } from '@/lib/checks/vocabulary'
-import { nameOfReport } from '../charts/describe-dot'
+import { nameOfReport, shortCalls } from '../charts/describe-dot'
 import { outcomeOfDecision } from '../charts/outcome-of-decision'
 import { printedP, recomputedInterval } from '../charts/printed-p'
 import { isSame } from '../bench/audit-index'
@@ -15,8 +15,6 @@ import { RowTh, Table, Tbody, Td, Th, Thead, Tr } from '../ui/table'
 import { StatisticText } from './statistic-text'
 
 const FIRST_ROWS = 30
-
-const calls = { significant: 'sig.', 'not significant': 'n.s.' } as const
 
 const outcomeTones: Record<Outcome, string> = {
   holds: 'text-holds',
@@ -81,13 +79,13 @@ function DecisionRow({ decision, report, family }: { decision: Decision; report:
           <PlaceLink row place={report.place} what={nameOfReport(report)} onShow={() => show(target)} />
         </span>
       </Td>
-      <RowTh className="max-w-52 truncate">
+      <RowTh className="max-w-52 truncate font-normal">
         {report.comparison?.join(' – ') ?? <q className="font-mono text-xs">{report.place.quote}</q>}
       </RowTh>
       <Td number>{printedP(report)}</Td>
       <Td className="whitespace-nowrap">{statistic ? <StatisticText statistic={statistic} /> : '–'}</Td>
       <Td number>{recomputedInterval(decision.adjusted, report.decimals)}</Td>
-      <Td className="whitespace-nowrap">{report.called ? calls[report.called] : 'not stated'}</Td>
+      <Td className="whitespace-nowrap">{report.called ? shortCalls[report.called] : 'not stated'}</Td>
       <Td className={outcome ? outcomeTones[outcome] : undefined}>{outcome ? outcomeWords[outcome] : '–'}</Td>
       <Td number>{decision.survivesUpTo ?? '–'}</Td>
     </Tr>
