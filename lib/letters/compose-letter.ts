@@ -120,7 +120,7 @@ function commentSection(comments: readonly LetterComment[]): string[] {
     const place = [escapeMarkdown(targetLabel), page === null ? '' : `page ${page}`].filter((p) => p !== '')
     const lead = place.length === 0 ? '' : `(${place.join(', ')}) `
     // A comment is the reviewer's own Markdown: its further lines stand under the same bullet.
-    return `- ${lead}${body.trim().replaceAll('\n', '\n  ')}`
+    return `- ${lead}${body.trim().replace(/\n(?=[^\n])/g, '\n  ')}`
   })
   return ['## Further comments', items.join('\n')]
 }

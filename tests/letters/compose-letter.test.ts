@@ -143,8 +143,7 @@ test('the reviewer’s order stands within a severity, and numbers run through',
 
 test('no sentence of the letter accuses', () => {
   // Words that a letter to authors does not use, whatever the verdict.
-  const words =
-    /fail|wrong|incorrect|mistake|neglect|p-hack|cherry|mislead|fraud|false|should have/i
+  const words = /fail|wrong|incorrect|mistake|neglect|p-hack|cherry|mislead|fraud|false|should have/i
   const verdicts = [
     'sound',
     'sound after changes',
