@@ -9,6 +9,11 @@ import { clip, combine, type Interval } from './interval'
 
 const unknown: Interval = { low: 0, high: 1 }
 
+/** Whether each p is adjusted by itself, whatever the others are. */
+export function isSingleStep(procedure: Procedure): boolean {
+  return procedure === 'bonferroni' || procedure === 'sidak'
+}
+
 /** Whether the procedure is a function of the p-values alone, so that any family of them can be adjusted. */
 export function worksOnP(procedure: Procedure): boolean {
   return procedureTable[procedure].adjust !== null
@@ -21,7 +26,8 @@ export function worksOnT(procedure: Procedure): boolean {
 
 /**
  * Adjusted p-values of a whole family as ranges, in input order. `raw`: ranges of the raw p; null for a member of
- * which nothing is known, which then may have any p. `m` below the number of members is raised to it.
+ * which nothing is known, which then may have any p. An `m` below the number of members is taken as it is by
+ * single-step procedures, and raised to the number by all others.
  */
 export function adjustRanges(
   procedure: Procedure,
@@ -30,6 +36,9 @@ export function adjustRanges(
   alpha: number,
 ): Interval[] {
   const known = raw.map((range) => clip(range ?? unknown))
+  if (m < known.length && isSingleStep(procedure)) {
+    return known.flatMap((range) => adjustRanges(procedure, [range], Math.max(1, m), alpha))
+  }
   const bounds = adjustBounds(
     procedure,
     known.map(({ low }) => low),

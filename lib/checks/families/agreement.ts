@@ -56,6 +56,12 @@ export function isIdentified(a: Item, b: Item): boolean {
   return exact && digits >= 2 && agreement(a, b) === true
 }
 
+/** Whether two p-values are printed alike, with two digits or more, whatever scale they are taken for. */
+export function isSamePrint(a: Item, b: Item): boolean {
+  const exact = a.report.relation === '=' && b.report.relation === '='
+  return exact && digitsOf(a) >= 2 && a.report.value === b.report.value
+}
+
 /** Significant digits printed of a p-value. */
 function digitsOf({ report }: Item): number {
   if (report.value <= 0) return 0

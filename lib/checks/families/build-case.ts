@@ -2,7 +2,7 @@ import { fits } from '../recover/fits'
 import { survivesUpTo } from '../sensitivity/survives-up-to'
 import type { Fit, HouseRules } from '../types'
 import type { ClaimedProcedure, Outcome, Procedure } from '../vocabulary'
-import { worksOnP, worksOnT } from './adjusted'
+import { adjustRanges, worksOnP, worksOnT } from './adjusted'
 import type { Assigned } from './assign'
 import { impliedCall, statedCall } from './calls'
 import type { Case, Exemption, Judged } from './case'
@@ -10,30 +10,32 @@ import type { Cluster, Evidence, Remarks } from './comparison'
 import { adjustFamily, isSignificant, type Yardstick } from './decide'
 import { designOf, type Design } from './design'
 import { expectAdjusted, readSeries, type Series } from './evidence'
+import { overlaps } from './interval'
 import { findExemption } from './exemption'
 import type { FamilyDraft } from './join-outcomes'
 import { labelOf } from './label'
 import { outcomeOf, whyOf } from './outcome'
 import { weighEvidence } from './weigh-evidence'
 
-export type Setting = { remarks: Remarks; rules: HouseRules; alpha: number; alphaStated: boolean }
+export type Setting = { remarks: Remarks; rules: HouseRules; alpha: number }
 
 /** Judges one family under the claim that speaks for it. `number`: 1, 2 … for the id. */
 export function buildCase(draft: FamilyDraft, setting: Setting, number: number): Case {
   const { remarks, alpha } = setting
   const { cluster, assigned } = draft
-  const design = designOf(cluster, assigned?.view ?? null, remarks, draft.alternatives)
+  const ownView = assigned?.own ? assigned.view : null
+  const design = designOf(cluster, ownView, remarks, draft.alternatives)
   const claimed = toProcedure(assigned?.view.procedure ?? 'none')
   const groups = groupsOf(design, assigned)
-  const counts = [...new Set([design.due, assigned?.view.m ?? null, ...design.alternatives])]
-    .flatMap((m) => m ?? [])
-    .map((m) => Math.max(m, cluster.comparisons.length))
-  const expected = expectAdjusted(cluster.comparisons, claimed, [...new Set(counts)], groups, alpha)
+  const counts = [...new Set([design.due, assigned?.view.m ?? null, ...design.alternatives])].flatMap(
+    (m) => m ?? [],
+  )
+  const expected = expectAdjusted(cluster.comparisons, claimed, counts, groups, alpha)
   const series = readSeries(cluster.comparisons, expected, remarks.oneSided)
   const used = { procedure: claimed, m: assigned?.view.m ?? design.due ?? cluster.comparisons.length }
   const evidence = cluster.comparisons.map((comparison) => weighEvidence(comparison, series, used))
   const printed = cluster.comparisons.map((_, i) => evidence[i]?.adjusted ?? null)
-  const found = fitsOf(evidence, printed, design)
+  const found = fitsOf(evidence, printed, design, assigned?.view.m ?? null)
   const effective = isCorrected(assigned, series) ? assigned : null
   const exemption = findExemption(cluster, design, effective, setting)
   const procedure = yardstickOf(effective, exemption)
@@ -41,7 +43,9 @@ export function buildCase(draft: FamilyDraft, setting: Setting, number: number):
 
   const judgeAt = (m: number) => {
     const yardstick = { procedure, m, groups, alpha }
-    const adjusted = adjustFamily(cluster.comparisons, evidence, yardstick, trusted)
+    const adjusted = listParts(draft, m).flatMap(([from, to]) =>
+      adjustFamily(cluster.comparisons.slice(from, to), evidence.slice(from, to), yardstick, trusted),
+    )
     return cluster.comparisons.map((comparison, i): Judged => {
       const due = adjusted[i] ?? { low: 0, high: 1 }
       const each = evidence[i]
@@ -56,7 +60,7 @@ export function buildCase(draft: FamilyDraft, setting: Setting, number: number):
         called: stated ?? implied,
         implied: stated === null && implied !== null,
         significant: isSignificant(due, alpha),
-        survivesUpTo: each?.raw ? finite(survivesUpTo(each.raw.high, alpha)) : null,
+        survivesUpTo: each?.raw ? keptUpTo(each.raw.high, alpha) : null,
       }
     })
   }
@@ -77,7 +81,7 @@ export function buildCase(draft: FamilyDraft, setting: Setting, number: number):
       groups: design.groups.length > 0 ? design.groups.length : null,
       m: {
         printed: cluster.comparisons.length,
-        claimed: assigned?.view.m ?? null,
+        claimed: ownView?.m ?? null,
         due: design.due,
         why: design.why,
       },
@@ -105,8 +109,19 @@ export function buildCase(draft: FamilyDraft, setting: Setting, number: number):
   }
 }
 
-function finite(m: number): number | null {
-  return Number.isFinite(m) ? m : null
+/** The stretches of a joined family that an m below its size corrects one by one; else the whole. */
+function listParts({ cluster, parts }: FamilyDraft, m: number): [from: number, to: number][] {
+  const whole = cluster.comparisons.length
+  if (parts.length === 0 || m >= whole) return [[0, whole]]
+  const ends = parts.map((_, i) =>
+    parts.slice(0, i + 1).reduce((sum, part) => sum + part.cluster.comparisons.length, 0),
+  )
+  return ends.map((to, i) => [ends[i - 1] ?? 0, to])
+}
+
+/** Null where no family of any use is too large for it. */
+function keptUpTo(p: number, alpha: number): number | null {
+  return p < 1e-12 ? null : survivesUpTo(p, alpha)
 }
 
 /** A claim's word for a procedure as the one that is computed; null where it names none. */
@@ -146,18 +161,36 @@ function yardstickOf(assigned: Assigned, exemption: Exemption | null): Yardstick
 }
 
 /** What reproduces the printed adjusted values; a list that is too long to tell anything is cut to the family's own m. */
-function fitsOf(evidence: readonly Evidence[], printed: Evidence['adjusted'][], design: Design): Fit[] {
+function fitsOf(
+  evidence: readonly Evidence[],
+  printed: readonly Evidence['adjusted'][],
+  design: Design,
+  claimedM: number | null,
+): Fit[] {
   const direct = evidence.map(({ raw, adjusted }, i) =>
     adjusted && raw ? { raw, printed: printed[i] } : null,
   )
   const pairs = direct.flatMap((pair) => (pair?.printed ? [{ raw: pair.raw, printed: pair.printed }] : []))
   if (pairs.length === 0) return []
   const largest = Math.max(design.due ?? 0, ...design.alternatives, pairs.length)
-  return fits(
-    pairs.map((pair) => pair.printed),
-    pairs.map((pair) => pair.raw),
-    { mMax: Math.max(largest, Math.min(60, 2 * largest)) },
+  const below = [claimedM ?? 0, ...design.alternatives].filter((m) => m >= 2 && m < pairs.length)
+  const single = (['bonferroni', 'sidak'] as const).flatMap((procedure) =>
+    below
+      .filter((m) =>
+        pairs.every((pair) =>
+          adjustRanges(procedure, [pair.raw], m, 0.05).some((range) => overlaps(range, pair.printed)),
+        ),
+      )
+      .map((m) => ({ procedure, m })),
   )
+  return [
+    ...single,
+    ...fits(
+      pairs.map((pair) => pair.printed),
+      pairs.map((pair) => pair.raw),
+      { mMax: Math.max(largest, Math.min(60, 2 * largest)) },
+    ),
+  ]
 }
 
 /** One judgement out of several admissible ones: a decision stands only where all agree. */

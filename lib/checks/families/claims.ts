@@ -80,12 +80,14 @@ function toView(claim: ReadClaim): ClaimView {
 
 function extend(view: ClaimView, claim: ReadClaim) {
   view.all.push(claim)
-  if (view.procedure === 'unspecified') view.procedure = claim.procedure
+  if (view.procedure === 'unspecified' || (view.procedure === 'fdr' && claim.procedure !== 'unspecified'))
+    view.procedure = claim.procedure
+  view.errorRate ??= claim.errorRate
+  if (claim.section === 'abstract' || claim.section === 'discussion') return
   view.m ??= claim.m
   view.threshold ??= claim.threshold
   view.alpha ??= claim.alpha
   view.groups ??= claim.groups
   view.design ??= claim.scope.design
-  view.errorRate ??= claim.errorRate
   view.experiment ??= experimentIn(claim.sentence)
 }

@@ -1,4 +1,4 @@
-import { agreement, isIdentified } from './agreement'
+import { agreement, isIdentified, isSamePrint } from './agreement'
 import type { Cluster, Comparison, Item } from './comparison'
 import { isSameName } from './names'
 
@@ -18,7 +18,36 @@ export function clusterItems(items: readonly Item[]): Cluster[] {
   }
   clusters = mergeAll(clusters)
   placeLoose(clusters, loose)
-  return mergeAll(clusters)
+  return absorbIdentified(mergeAll(clusters))
+}
+
+/** Rows whose labels were not understood, and whose numbers are those of another cluster, are that cluster. */
+function absorbIdentified(clusters: readonly Cluster[]): Cluster[] {
+  const kept = [...clusters]
+  const candidates = clusters.filter(({ kind }) => kind === 'outcomes')
+  for (const cluster of candidates.sort((a, b) => a.comparisons.length - b.comparisons.length)) {
+    for (const other of kept) {
+      if (other === cluster || other.comparisons.length < cluster.comparisons.length) continue
+      const twins = cluster.comparisons.map((comparison) => findTwin(comparison, other))
+      const known = twins.filter((twin) => twin !== null)
+      if (known.length < 2 || known.length < 0.7 * twins.length || new Set(known).size < known.length)
+        continue
+      cluster.comparisons.forEach(({ items }, i) => twins[i]?.items.push(...items))
+      other.blocks.push(...cluster.blocks)
+      kept.splice(kept.indexOf(cluster), 1)
+      break
+    }
+  }
+  return kept
+}
+
+function findTwin(comparison: Comparison, { comparisons }: Cluster): Comparison | null {
+  const alike = comparisons.filter((other) =>
+    comparison.items.some((a) =>
+      other.items.some((b) => a.block !== b.block && (isIdentified(a, b) || isSamePrint(a, b))),
+    ),
+  )
+  return alike.length === 1 ? (alike[0] ?? null) : null
 }
 
 /** The clusters of one place. The outcome tells pairs apart only where one pair comes with two values. */
@@ -84,10 +113,9 @@ function toCluster(kind: Cluster['kind'], items: readonly Item[]): Cluster {
   return { kind, comparisons, blocks: [...new Set(items.map((item) => item.block))] }
 }
 
-/** Several columns of one scale in a row of a table are several tests. */
 function addTo(comparisons: Comparison[], kind: Cluster['kind'], item: Item) {
   const found = comparisons.find(
-    (comparison) => isSameTest(kind, comparison, item) && !isOtherColumn(comparison, item),
+    (comparison) => isSameTest(kind, comparison, item) && !isOtherCell(kind, comparison, item),
   )
   if (found) {
     found.items.push(item)
@@ -109,15 +137,18 @@ function isSameTest(kind: Cluster['kind'], comparison: Comparison, item: Item): 
   return !apart && isSameName(comparison.outcome, item.outcome)
 }
 
-function isOtherColumn(comparison: Comparison, item: Item): boolean {
+/** Another column of one scale is another test; so is another row, where no pair says that it is the same. */
+function isOtherCell(kind: Cluster['kind'], comparison: Comparison, item: Item): boolean {
   if (item.report.place.source === 'text') return false
-  return comparison.items.some(
-    ({ report, block }) =>
-      block === item.block &&
-      report.scale === item.report.scale &&
-      report.cell?.row === item.report.cell?.row &&
-      report.cell?.column !== item.report.cell?.column,
-  )
+  return comparison.items.some(({ report, block }) => {
+    if (block !== item.block || report.place.source !== item.report.place.source) return false
+    if (rowOf(report) !== rowOf(item.report)) return kind === 'outcomes'
+    return report.scale === item.report.scale && report.cell?.column !== item.report.cell?.column
+  })
+}
+
+function rowOf({ place, cell }: Item['report']): number | null {
+  return place.row ?? cell?.row ?? null
 }
 
 function mergeAll(clusters: readonly Cluster[]): Cluster[] {

@@ -40,7 +40,7 @@ export type Remarks = {
   exploratory: boolean
   coPrimary: boolean
   order: { sentence: string; offset: number } | null
-  allCompared: boolean
+  allCompared: string | null
   familyWise: { sentence: string; offset: number } | null
 }
 

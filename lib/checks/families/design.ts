@@ -1,5 +1,6 @@
 import type { ClaimView } from './claims'
 import type { Cluster, Remarks } from './comparison'
+import { isAllCompared } from './remarks'
 
 /**
  * What the tests of a family are, and how many there are to be counted. `due`: null where the text allows more than
@@ -50,14 +51,16 @@ function ofPairs(cluster: Cluster, view: ClaimView | null, remarks: Remarks): De
   const groups = [...new Set(pairs.flat())]
   const k = groups.length
   const full = (k * (k - 1)) / 2
-  const center = groups.find((group) => pairs.every((pair) => pair.includes(group)))
-  const allPairs = `${inWords(k)} groups give ${k} × ${k - 1} / 2 = ${full} pairwise comparisons`
-  if (pairs.length === full && k >= 3) return settled('all-pairs', groups, full, allPairs)
-  if (pairs.length === 1) return settled('contrasts', groups, 1, 'one comparison')
+  const all = saysAllCompared(view, remarks)
+  const stated = all === null ? k : Math.max(k, countIn(all))
+  if (stated > k) return everyPair(groups, stated, ', and the manuscript says that all were compared')
+  if (pairs.length === full && k >= 3) return everyPair(groups, k)
+  if (pairs.length === 1)
+    return settled('contrasts', groups, Math.max(1, view?.m ?? 0), 'one comparison is reported')
 
+  const center = groups.find((group) => pairs.every((pair) => pair.includes(group)))
   const star = center !== undefined && pairs.length === k - 1
-  const saysAll =
-    view?.procedure === 'tukey' || view?.design === 'all-pairs' || (!star && remarks.allCompared)
+  const saysAll = view?.procedure === 'tukey' || view?.design === 'all-pairs' || all !== null
   const manyToOne = view?.design === 'many-to-one' || view?.procedure === 'dunnett'
   if (star && (manyToOne || !saysAll)) {
     const due = Math.max(k - 1, view?.m ?? 0)
@@ -65,16 +68,38 @@ function ofPairs(cluster: Cluster, view: ClaimView | null, remarks: Remarks): De
     return settled('many-to-one', groups, due, `${inWords(k - 1)} groups compared with ${center}${more}`)
   }
   if (saysAll && isNumberOfGroups(k, view, remarks)) {
-    return settled('all-pairs', groups, full, `${allPairs}, and the manuscript says that all were compared`)
+    return everyPair(groups, k, ', and the manuscript says that all were compared')
   }
   const due = Math.max(pairs.length, view?.m ?? 0)
   const counted = due > pairs.length ? `; the manuscript counts ${due}` : ''
   return settled('contrasts', groups, due, `${inWords(pairs.length)} comparisons are reported${counted}`)
 }
 
+function everyPair(groups: string[], k: number, more = ''): Design {
+  const due = (k * (k - 1)) / 2
+  const why = `${inWords(k)} groups give ${k} × ${k - 1} / 2 = ${due} pairwise comparisons${more}`
+  return settled('all-pairs', groups, due, why)
+}
+
+/** The sentence that says that all groups were compared with each other; of the claim, or of a manuscript with one set of pairs. */
+function saysAllCompared(view: ClaimView | null, { allCompared }: Remarks): string | null {
+  return view?.all.map(({ sentence }) => sentence).find(isAllCompared) ?? allCompared
+}
+
+/** "all four substrates", "the 5 media": the number of groups in the sentence, 0 where it has none. */
+function countIn(sentence: string): number {
+  const found =
+    /\b(?:all|the|of)\s+(\d{1,2}|\p{L}+)\s+(?!pair|compar|test|contrast|outcome|endpoint|measure|variable)\p{L}{3,}/giu
+  for (const [, word = ''] of sentence.matchAll(found)) {
+    const n = /^\d/.test(word) ? Number(word) : numberWords.indexOf(word.toLowerCase())
+    if (n >= 3 && n <= 12) return n
+  }
+  return 0
+}
+
 /** Names are read from prose and may be misread: the number of groups must be stated or shown somewhere else too. */
 function isNumberOfGroups(k: number, view: ClaimView | null, { text, tables }: Remarks): boolean {
-  if (view?.groups !== null && view?.groups !== undefined) return view.groups === k
+  if (view?.groups === k) return true
   const stated = new RegExp(`\\b(?:${inWords(k)}|${k})\\s+\\p{L}{3,}`, 'iu')
   return stated.test(text) || tables.some((table) => table.rows.length === k)
 }

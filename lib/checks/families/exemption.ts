@@ -38,7 +38,7 @@ export function findExemption(
 
 /** "all analyses are exploratory", "the p-values are nominal", "this exploratory study" */
 function declaresAll(text: string): boolean {
-  return /\b(?:all|these|this|the|our)\s+(?:\w+\s+){0,3}(?:(?:are|were|is|was)\s+(?:\w+\s+){0,3})?(?:exploratory|nominal|descriptive|hypothesis-generating)\b/i.test(
+  return /\b(?:all|these|this|the|our)\s+(?:\w+\s+){0,3}(?:(?:are|were|is|was)\s+(?:\w+\s+){0,3})?(?:exploratory|hypothesis-generating|nominal p|nominal$|nominal\.)\b/i.test(
     text,
   )
 }

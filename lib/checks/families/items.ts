@@ -28,7 +28,12 @@ export function listItems(reading: Reading): Item[] {
   const members = reading.reports
     .map((report) => ({ report, statistic: statisticOf.get(report.statistic ?? '') ?? null }))
     .filter(({ report, statistic }) => findReasonApart(report, statistic) === null)
-  const canon = canonicalNames(members.flatMap(({ report }) => report.comparison ?? []))
+  const pairsOf = (list: typeof members) =>
+    list.flatMap(({ report }) => (report.comparison ? [report.comparison] : []))
+  const canon = canonicalNames(
+    pairsOf(members),
+    pairsOf(members.filter(({ report }) => report.place.source !== 'text')),
+  )
   return members.map(({ report, statistic }) => ({
     report,
     statistic,

@@ -21,15 +21,13 @@ export function judge(
   laidOut: LaidOut,
   rules: HouseRules,
 ): { families: Family[]; findings: Finding[]; called: Map<string, Call> } {
-  const remarks = readRemarks(laidOut)
-  const setting: Setting = {
-    remarks,
-    rules,
-    alpha: reading.alpha.value,
-    alphaStated: reading.alpha.quote !== null,
-  }
-  const views = groupClaims(reading.claims)
   const clusters = clusterItems(listItems(reading)).filter(isOfThisManuscript)
+  const views = groupClaims(reading.claims)
+  const said = readRemarks(laidOut)
+  // with several sets of pairs such a sentence is tied to none of them
+  const oneSet = clusters.filter(({ kind }) => kind === 'pairs').length <= 1
+  const remarks = { ...said, allCompared: oneSet ? said.allCompared : null }
+  const setting: Setting = { remarks, rules, alpha: reading.alpha.value }
   const assigned = assignClaims(clusters, views)
   const apart = clusters.map((cluster, i) => ({
     cluster,

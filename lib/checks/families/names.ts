@@ -43,25 +43,30 @@ export function isSameName(a: string, b: string): boolean {
 }
 
 /**
- * Leads each name to the one under which it is kept. Exact forms win; else a name that is within exactly one
- * other name, or holds exactly one, is taken for that one ("untreated control" for "control").
+ * Leads each name to the one under which it is kept. Names of tables (`fixed`) stand as they are. A name of the text
+ * that is no table's name, and is within exactly one other name or holds exactly one, is taken for that one
+ * ("untreated control" for "control"), unless the two are compared with each other or with the same third group.
  */
-export function canonicalNames(names: readonly string[]): (name: string) => string {
-  const counts = new Map<string, number>()
-  for (const name of names) {
-    const normal = normaliseName(name)
-    counts.set(normal, (counts.get(normal) ?? 0) + 1)
-  }
-  const known = [...counts.keys()]
+export function canonicalNames(
+  pairs: readonly (readonly [string, string])[],
+  fixed: readonly (readonly [string, string])[],
+): (name: string) => string {
+  const normal = pairs.map(([a, b]) => [normaliseName(a), normaliseName(b)] as const)
+  const kept = new Set(fixed.flat().map(normaliseName))
+  const known = [...new Set(normal.flat())]
+  const partners = (name: string) =>
+    new Set(normal.flatMap(([a, b]) => (a === name ? [b] : b === name ? [a] : [])))
   const lead = new Map<string, string>()
-  for (const name of known) {
+  for (const name of known.filter((each) => !kept.has(each))) {
     const alike = known.filter((other) => other !== name && (isWithin(name, other) || isWithin(other, name)))
     const [only] = alike
-    const often = (counts.get(only ?? '') ?? 0) > (counts.get(name) ?? 0)
-    if (alike.length === 1 && only !== undefined && often) lead.set(name, only)
+    if (alike.length !== 1 || only === undefined || lead.has(only)) continue
+    const [mine, others] = [partners(name), partners(only)]
+    const apart = mine.has(only) || (!kept.has(only) && [...mine].some((partner) => others.has(partner)))
+    if (!apart) lead.set(name, only)
   }
   return (name) => {
-    const normal = normaliseName(name)
-    return lead.get(normal) ?? normal
+    const form = normaliseName(name)
+    return lead.get(form) ?? form
   }
 }

@@ -35,9 +35,9 @@ const welch = /welch|satterthwaite|kenward|unequal variance/i
 const repeated = /\brepeated[-\s]measures?\b|\bwithin[-\s](?:subjects?|participants?)\b/i
 /** "Fisher's exact test", "Yates", "continuity correction", "permutation test" */
 const exact = /\bexact\b|\byates\b|\bcontinuity\b|\bpermutation\b|\bbootstrap/i
-/** "exploratory", "hypothesis-generating", "nominal p", "descriptive only" */
+/** "exploratory", "hypothesis-generating", "nominal p-values", "nominally significant", "descriptive only" */
 const exploratory =
-  /\bexploratory\b|hypothesis[-\s]generating|\bnominal\b|\bdescriptive(?:ly)?\s+(?:only|p|purposes)/i
+  /\bexploratory\b|hypothesis[-\s]generating|\bnominal(?:ly)?\s+(?:p\b|significan|level)|\bp[-\s]?values?\s+(?:are|were)\s+(?:\w+\s+)?nominal\b|\bdescriptive(?:ly)?\s+(?:only|p\b|purposes)/i
 /** "co-primary", "both endpoints had to be significant", "success required all" */
 const coPrimary =
   /\bco-?primary\b|\b(?:both|all)\b[^.]{0,60}\b(?:must|had to|were required to|have to)\b[^.]{0,40}\b(?:significant|succeed|be met|reach)|\bintersection[-\s]union\b/i
@@ -70,11 +70,15 @@ export function readRemarks(laidOut: LaidOut): Remarks {
     exploratory: find(exploratory) !== null,
     coPrimary: find(coPrimary) !== null,
     order: place(ordered),
-    allCompared: find(allCompared) !== null,
+    allCompared: find(allCompared)?.text ?? null,
     familyWise: place(familyWise),
   }
 }
 
 export function saysExploratory(text: string): boolean {
   return exploratory.test(text)
+}
+
+export function isAllCompared(text: string): boolean {
+  return allCompared.test(text)
 }

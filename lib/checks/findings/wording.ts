@@ -17,11 +17,13 @@ export function showRange({ low, high }: Interval): string {
   return from === to ? from : `${from} to ${to}`
 }
 
-/** The p-value as it is printed, with its relation. */
+/** The p-value as it is printed, with its relation; out of a quote that may hold the statistic too. */
 export function showReport({ place, relation, value, decimals }: ReadReport): string {
-  const quote = place.quote.trim()
-  // a quote that already reads as a p-value: "p = .03", "P<0.001", "q = 0.02"
-  if (/^[pq]\b[^|]{0,24}$/i.test(quote)) return quote
+  // "p = .03", "P<0.001", "adjusted p = 0.02", "q = .04" at the end of "t(36) = 2.43, p = .020"
+  const printed = /(?:\b(?:adjusted|corrected)\s+)?\b[pq](?:[-_\s]\p{L}{1,10})?\s?[=<>≤≥⩽⩾][^;,|]*$/iu.exec(
+    place.quote.trim(),
+  )
+  if (printed) return printed[0].replace(/[)\].\s]+$/, '')
   const number = decimals >= 0 && decimals <= 12 ? value.toFixed(decimals) : String(value)
   return `p ${relation} ${number}`
 }

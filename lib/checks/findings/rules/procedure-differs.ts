@@ -30,9 +30,7 @@ function inFamily(judged: Case): Found[] {
     return []
   const pairs = listPairs(judged)
   if (pairs.length < 2) return []
-  const counts = [...new Set([assigned.view.m, design.due, ...design.alternatives])]
-    .flatMap((m) => m ?? [])
-    .map((m) => Math.max(m, comparisons.length))
+  const counts = [...new Set([assigned.view.m, design.due, ...design.alternatives])].flatMap((m) => m ?? [])
   const groups = Math.max(design.groups.length, assigned.view.groups ?? 0)
   const expected = expectAdjusted(
     comparisons,

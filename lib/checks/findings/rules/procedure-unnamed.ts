@@ -4,8 +4,10 @@ import { reportsOf } from '../wording'
 
 /** A question: needed to judge. Silent where another sentence names the procedure. */
 function find({ views, cases }: Bench): Found[] {
+  const named = views.some(({ procedure }) => procedure !== 'unspecified' && procedure !== 'none')
   return views
-    .filter(({ procedure }) => procedure === 'unspecified')
+    .filter((view) => view.procedure === 'unspecified')
+    .filter((view) => !named || cases.some(({ assigned }) => assigned?.view === view && assigned.own))
     .map((view) => {
       const concerned = cases.find(({ assigned }) => assigned?.view === view)
       return {
