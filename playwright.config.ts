@@ -32,7 +32,7 @@ export default defineConfig({
   webServer: {
     command: 'node scripts/e2e-server.mjs',
     url: `http://localhost:${port}/api/health`,
-    timeout: 120_000,
+    timeout: 400_000,
     reuseExistingServer: false,
     gracefulShutdown: { signal: 'SIGTERM', timeout: 10_000 },
     env: { ASSIZE_E2E_PORT: String(port) },
