@@ -11,6 +11,8 @@ import { Notice } from '../ui/notice'
 import { placeOf, type AuditIndex, type MarkedPlace, type Target } from './audit-index'
 import { bringIntoSight } from './page-marks'
 import { PdfPage } from './pdf-page'
+import { placeWords } from './place-link'
+import { RowView } from './row-view'
 import { usePdfDocument } from './use-pdf-document'
 import './page-pane.css'
 
@@ -101,6 +103,12 @@ function Pages(props: PagePaneProps & { pdf: PDFDocumentProxy; first: { width: n
         onFit={() => setZoom(null)}
         url={url}
       />
+      {place && place.page === null && place.row !== null && (
+        <div role="status" className="shrink-0 border-b border-rule bg-sheet px-3 py-2">
+          <p className="text-ink-soft">This stands in the results table, not on a page:</p>
+          <RowView place={place} words={placeWords(place)} />
+        </div>
+      )}
       <div
         ref={scroller}
         data-page-scroller=""

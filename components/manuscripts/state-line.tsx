@@ -10,7 +10,7 @@ export function StateLine({ steps }: { steps: readonly Step[] }) {
         <li
           key={step.label}
           aria-current={step.status === 'now' ? 'step' : undefined}
-          className="relative flex min-w-24 flex-1 gap-2.5 pb-2 pl-1 max-sm:border-l-0 sm:flex-col sm:gap-1 sm:border-t-2 sm:border-rule sm:pt-2.5 sm:pl-0 data-[status=done]:sm:border-ink data-[status=now]:sm:border-tide"
+          className="relative flex min-w-24 flex-1 gap-2.5 pb-2 pl-1 max-sm:border-l-0 sm:flex-col sm:gap-1 sm:border-t-2 sm:border-rule sm:pt-2.5 sm:pl-0 data-[status=done]:sm:border-ink"
           data-status={step.status}
         >
           <span

@@ -28,7 +28,10 @@ export function StuckRemedy({ manuscript, limitBytes, handInAgain }: StuckRemedy
     round?.files.find((file) => file.kind === kind && file.replacedAt === null) ?? null
   const url = manuscriptUrl(manuscript.id, '/files')
   return (
-    <div className="flex flex-col gap-3">
+    <section aria-labelledby="replace-title" className="flex flex-col gap-3">
+      <h2 id="replace-title" className="text-lg font-semibold">
+        Replace the file
+      </h2>
       <FileSlot
         kind="manuscript"
         url={url}
@@ -54,6 +57,6 @@ export function StuckRemedy({ manuscript, limitBytes, handInAgain }: StuckRemedy
           Hand in again
         </Button>
       </div>
-    </div>
+    </section>
   )
 }
