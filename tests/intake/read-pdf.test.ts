@@ -47,6 +47,12 @@ test('a damaged PDF says so', async () => {
   await expect(readPdf(path)).rejects.toThrow('damaged')
 })
 
+test('a file that is not there is no fault of the file', async () => {
+  const reading = readPdf(join(makeFolder(), 'absent.pdf'))
+  await expect(reading).rejects.toMatchObject({ code: 'ENOENT' })
+  await expect(reading).rejects.not.toHaveProperty('refusal')
+})
+
 test('a PDF with too many pages and one that takes too long are refused in words', async () => {
   const path = await put({ pages: Array.from({ length: 20 }, () => 'kelp '.repeat(800)) })
   await expect(readPdf(path, { ...defaultLimits, pages: 3 })).rejects.toThrow('more pages than can be read')

@@ -18,5 +18,7 @@ export type ThreadMessage =
   | { kind: 'read'; document: ReadDocument }
   | { kind: 'audited'; audit: Audit }
   | { kind: 'refused'; refusal: RefusalKind; message: string }
-  /** Where it broke: in the file, or in judging it, which is a fault of ours. */
-  | { kind: 'trouble'; phase: 'reading' | 'judging'; name: string; message: string; stack: string }
+  /** Where it broke: while reading the PDF it is the file's trouble, else it is ours. */
+  | { kind: 'trouble'; phase: Phase; name: string; message: string; stack: string; code: string | null }
+
+export type Phase = 'opening' | 'reading' | 'reading the table' | 'judging'

@@ -58,8 +58,9 @@ export function runThread<T extends object>({ task, limits, signal, onMessage }:
 function toFailure(message: ThreadMessage): Error | null {
   if (message.kind === 'refused') return refuse(message.refusal, message.message)
   if (message.kind !== 'trouble') return null
-  const cause = Object.assign(new Error(message.message), { name: message.name, stack: message.stack })
-  return message.phase === 'judging' ? cause : unreadable(describeTrouble(message.name), cause)
+  const { phase, name, stack, code } = message
+  const cause = Object.assign(new Error(message.message), { name, stack, ...(code ? { code } : {}) })
+  return phase === 'reading' ? unreadable(describeTrouble(name), cause) : cause
 }
 
 function unreadable(message: string, cause?: unknown) {

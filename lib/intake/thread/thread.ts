@@ -3,15 +3,16 @@ import { parentPort, workerData } from 'node:worker_threads'
 import { isRefusal } from '@/lib/rules/refusal'
 import { readPages } from '../pdf/open-document'
 import { readTableFile } from '../table/read-table'
-import type { AuditTask, ThreadMessage, ThreadTask } from './messages'
+import type { AuditTask, Phase, ThreadMessage, ThreadTask } from './messages'
 
 // Runs in a worker thread of its own: a file that eats memory or time ends this thread and nothing else.
 const task = workerData as ThreadTask
 const send = (message: ThreadMessage) => parentPort?.postMessage(message)
-let phase: 'reading' | 'judging' = 'reading'
+let phase: Phase = 'opening'
 
 try {
   const bytes = new Uint8Array(await readFile(task.path))
+  phase = 'reading'
   const document = await readPages(bytes, task.maxPages, (page, of) => send({ kind: 'page', page, of }))
   if (task.kind === 'read') send({ kind: 'read', document })
   else send({ kind: 'audited', audit: await judge(task, document) })
@@ -20,6 +21,7 @@ try {
 }
 
 async function judge({ table, rules }: AuditTask, document: Awaited<ReturnType<typeof readPages>>) {
+  phase = 'reading the table'
   const rows = table ? await readTableFile(table.path, table.name) : null
   phase = 'judging'
   const { audit } = await import('@/lib/checks/audit')
@@ -28,6 +30,8 @@ async function judge({ table, rules }: AuditTask, document: Awaited<ReturnType<t
 
 function describe(error: unknown): ThreadMessage {
   if (isRefusal(error)) return { kind: 'refused', refusal: error.refusal, message: error.message }
-  const { name, message, stack = '' } = error instanceof Error ? error : new Error(String(error))
-  return { kind: 'trouble', phase, name, message, stack }
+  const thrown = error instanceof Error ? error : new Error(String(error))
+  const { name, message, stack = '' } = thrown
+  const code = 'code' in thrown && typeof thrown.code === 'string' ? thrown.code : null
+  return { kind: 'trouble', phase, name, message, stack, code }
 }
