@@ -1,4 +1,4 @@
-import { useMutation, useQuery, useQueryClient } from '@tanstack/react-query'
+import { useIsMutating, useMutation, useQuery, useQueryClient, type QueryClient } from '@tanstack/react-query'
 import type { PointRow } from '@/db/queries/points'
 import type { Severity } from '@/lib/checks/vocabulary'
 import type { PointStatus } from '@/lib/rules/words'
@@ -11,6 +11,19 @@ export function usePoints(manuscriptId: string, enabled = true) {
     queryKey: manuscriptKeys.points(manuscriptId),
     queryFn: ({ signal }) => fetchJson<PointRow[]>(manuscriptUrl(manuscriptId, '/points'), { signal }),
   })
+}
+
+const changing = (manuscriptId: string) => ['points', manuscriptId]
+
+/** True while a change of a point is on its way: what is made from the points must wait for it. */
+export function useArePointsChanging(manuscriptId: string): boolean {
+  return useIsMutating({ mutationKey: changing(manuscriptId) }) > 0
+}
+
+/** The last of several changes asks again; an answer in between would undo the others on the screen. */
+function askAgain(client: QueryClient, manuscriptId: string): Promise<void> | undefined {
+  if (client.isMutating({ mutationKey: changing(manuscriptId) }) > 1) return undefined
+  return client.invalidateQueries({ queryKey: manuscriptKeys.points(manuscriptId) })
 }
 
 export type PointChange = {
@@ -26,6 +39,7 @@ export function useDecidePoint(manuscriptId: string) {
   const client = useQueryClient()
   const key = manuscriptKeys.points(manuscriptId)
   return useMutation({
+    mutationKey: changing(manuscriptId),
     mutationFn: ({ pointId, ...change }: PointChange) =>
       fetchJson(manuscriptUrl(manuscriptId, `/points/${pointId}`), { method: 'PATCH', body: change }),
     onMutate: async ({ pointId, ...change }) => {
@@ -37,7 +51,7 @@ export function useDecidePoint(manuscriptId: string) {
       return { before }
     },
     onError: (_error, _change, context) => client.setQueryData(key, context?.before),
-    onSettled: () => client.invalidateQueries({ queryKey: key }),
+    onSettled: () => askAgain(client, manuscriptId),
   })
 }
 
@@ -52,17 +66,19 @@ export type NewPoint = {
 export function useAddPoint(manuscriptId: string) {
   const client = useQueryClient()
   return useMutation({
+    mutationKey: changing(manuscriptId),
     mutationFn: (point: NewPoint) =>
       fetchJson(manuscriptUrl(manuscriptId, '/points'), { method: 'POST', body: point }),
-    onSuccess: () => client.invalidateQueries({ queryKey: manuscriptKeys.points(manuscriptId) }),
+    onSuccess: () => askAgain(client, manuscriptId),
   })
 }
 
 export function useMovePoint(manuscriptId: string) {
   const client = useQueryClient()
   return useMutation({
+    mutationKey: changing(manuscriptId),
     mutationFn: ({ pointId, position }: { pointId: string; position: number }) =>
       fetchJson(manuscriptUrl(manuscriptId, `/points/${pointId}`), { method: 'PATCH', body: { position } }),
-    onSettled: () => client.invalidateQueries({ queryKey: manuscriptKeys.points(manuscriptId) }),
+    onSettled: () => askAgain(client, manuscriptId),
   })
 }

@@ -15,6 +15,8 @@ type LetterEditorProps = {
   /** Whether the words in the field were written by hand since they were composed. */
   edited: boolean
   composing: boolean
+  /** Changes of points are on their way; the letter must not be made before they have arrived. */
+  waiting: boolean
   mayCompose: boolean
   onCompose: () => void
   preview: Preview
@@ -35,7 +37,7 @@ export function LetterEditor(props: LetterEditorProps) {
         <Button
           size="small"
           disabled={!props.mayCompose}
-          busy={props.composing && 'Composing…'}
+          busy={props.composing ? 'Composing…' : props.waiting && 'Saving the points…'}
           onClick={() => (edited && body.trim() ? setAsking(true) : onCompose())}
         >
           Compose from kept points
@@ -63,7 +65,7 @@ export function LetterEditor(props: LetterEditorProps) {
             </p>
           ) : preview.error ? (
             <Failed error={preview.error} onRetry={() => void preview.refetch()} />
-          ) : preview.data === undefined ? (
+          ) : !preview.data ? (
             <Skeleton rows={8} label="Setting the letter" />
           ) : (
             <LetterSheet html={preview.data} />

@@ -68,8 +68,8 @@ export function ReleasePanel({ manuscript, verdict, actions }: ReleasePanelProps
           onClose={() => setAsked(null)}
           onDone={() => router.refresh()}
         >
-          The letter is mailed to the submitter as it stands, with the verdict “{verdict.verdict}”. This
-          cannot be undone.
+          {undecidedWords(verdict.undecided)}The letter is mailed to the submitter as it stands, with the
+          verdict “{verdict.verdict}”. This cannot be undone.
         </ReasonDialog>
       )}
       {asked === 'back' && (
@@ -90,4 +90,11 @@ export function ReleasePanel({ manuscript, verdict, actions }: ReleasePanelProps
       )}
     </Notice>
   )
+}
+
+function undecidedWords(undecided: number): string {
+  if (undecided === 0) return ''
+  return undecided === 1
+    ? 'One point is not decided yet and not asked of the authors. '
+    : `${undecided} points are not decided yet and not asked of the authors. `
 }

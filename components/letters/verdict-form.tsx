@@ -4,6 +4,7 @@ import { useRouter } from 'next/navigation'
 import { useEffect, useState } from 'react'
 import type { VerdictView } from '@/db/queries/verdict'
 import { VERDICTS, type Verdict } from '@/lib/rules/words'
+import { useArePointsChanging } from '../findings/use-points'
 import { useAction } from '../shell/use-action'
 import { Button } from '../ui/button'
 import { RadioGroup } from '../ui/choice'
@@ -31,7 +32,8 @@ export function VerdictForm({ manuscriptId, verdict, actions }: VerdictFormProps
   const [saved, setSaved] = useState(() => stamp(choice, remark, effort, body))
   const now = stamp(choice, remark, effort, body)
   const unsaved = now !== saved
-  useWarnOnLeaving(unsaved)
+  const waiting = useArePointsChanging(manuscriptId)
+  useWarnOnLeaving(unsaved || waiting)
   const compose = useAction(actions.compose, (letter) => {
     setBody(letter.body)
     setComposed(letter.body)
@@ -65,6 +67,7 @@ export function VerdictForm({ manuscriptId, verdict, actions }: VerdictFormProps
         onBody={setBody}
         edited={body !== composed}
         composing={compose.pending}
+        waiting={waiting}
         mayCompose={choice !== null}
         onCompose={() => choice && compose.run({ manuscriptId, verdict: choice })}
         preview={actions.preview}
