@@ -14,7 +14,8 @@ import type { DocketParams, DocketPart } from './docket-params'
 type DocketFiltersProps = {
   params: DocketParams
   parts: readonly DocketPart[]
-  facets: DocketFacets
+  /** Null until they are known. */
+  facets: DocketFacets | null
   onChange: (next: Partial<DocketParams>) => void
 }
 
@@ -26,7 +27,7 @@ const partWords: Record<DocketPart, string> = {
 
 /** What narrows the docket. Every control answers at once; the search waits until one stops typing. */
 export function DocketFilters({ params, parts, facets, onChange }: DocketFiltersProps) {
-  const shown = STATES.filter((state) => facets.states[state] > 0 || params.states.includes(state))
+  const shown = STATES.filter((state) => (facets?.states[state] ?? 0) > 0 || params.states.includes(state))
   const toggle = (state: (typeof STATES)[number]) =>
     onChange({
       states: params.states.includes(state)
@@ -58,7 +59,7 @@ export function DocketFilters({ params, parts, facets, onChange }: DocketFilters
             empty="Any outcome"
             options={OUTCOMES.map((value) => ({
               value,
-              label: `${outcomeWords[value]} (${facets.outcomes[value]})`,
+              label: countLabel(outcomeWords[value], facets?.outcomes[value]),
             }))}
             onChange={(event) =>
               onChange({ outcome: OUTCOMES.find((o) => o === event.target.value) ?? null, page: 1 })
@@ -71,8 +72,8 @@ export function DocketFilters({ params, parts, facets, onChange }: DocketFilters
           value={params.due ?? ''}
           empty="Any due date"
           options={[
-            { value: 'overdue', label: `Overdue (${facets.due.overdue})` },
-            { value: 'this week', label: `Due this week (${facets.due['this week']})` },
+            { value: 'overdue', label: countLabel('Overdue', facets?.due.overdue) },
+            { value: 'this week', label: countLabel('Due this week', facets?.due['this week']) },
           ]}
           onChange={(event) => {
             const { value } = event.target
@@ -105,7 +106,7 @@ export function DocketFilters({ params, parts, facets, onChange }: DocketFilters
             >
               {state}
               <span className={params.states.includes(state) ? '' : 'text-ink-soft'}>
-                {facets.states[state]}
+                {facets?.states[state]}
               </span>
             </button>
           ))}
@@ -113,6 +114,10 @@ export function DocketFilters({ params, parts, facets, onChange }: DocketFilters
       ) : null}
     </search>
   )
+}
+
+function countLabel(label: string, n: number | undefined): string {
+  return n === undefined ? label : `${label} (${n})`
 }
 
 const settles = 250

@@ -1,10 +1,9 @@
 'use client'
 
 import { useQueryClient } from '@tanstack/react-query'
-import { useRouter } from 'next/navigation'
 import { useQueryStates } from 'nuqs'
 import { useState } from 'react'
-import type { DocketFacets, DocketRow } from '@/db/queries/docket'
+import type { DocketRow } from '@/db/queries/docket'
 import { Failed } from '../shell/failed'
 import type { Answer } from '../shell/use-action'
 import { Button, ButtonLink } from '../ui/button'
@@ -16,11 +15,10 @@ import { AssignDialog, type AssignInput } from './assign-dialog'
 import { DocketFilters } from './docket-filters'
 import { docketPageSize, docketParsers, isNarrowed, toDocketFilter, type DocketPart } from './docket-params'
 import { DocketTable } from './docket-table'
-import { useDocket } from './use-docket'
+import { useDocket, useDocketFacets } from './use-docket'
 
 type DocketScreenProps = {
   parts: readonly DocketPart[]
-  facets: DocketFacets
   mayAssign: boolean
   maySubmit: boolean
   reviewDays: number
@@ -33,11 +31,11 @@ export function DocketScreen(props: DocketScreenProps) {
   const [params, setParams] = useQueryStates(docketParsers, { history: 'push' })
   const filter = toDocketFilter(params, props.parts)
   const docket = useDocket(filter)
+  const facets = useDocketFacets(filter.as)
   const [selected, setSelected] = useState<ReadonlySet<string>>(new Set())
   const [assigning, setAssigning] = useState(false)
   const [answering, setAnswering] = useState<{ row: DocketRow; accept: boolean } | null>(null)
   const client = useQueryClient()
-  const router = useRouter()
 
   const rows = docket.data?.rows ?? []
   const chosen = rows.filter((row) => selected.has(row.id))
@@ -48,12 +46,11 @@ export function DocketScreen(props: DocketScreenProps) {
   const refresh = () => {
     setSelected(new Set())
     void client.invalidateQueries({ queryKey: ['docket'] })
-    router.refresh()
   }
 
   return (
     <>
-      <DocketFilters params={params} parts={props.parts} facets={props.facets} onChange={change} />
+      <DocketFilters params={params} parts={props.parts} facets={facets.data ?? null} onChange={change} />
       {chosen.length > 0 ? (
         <div className="sticky top-0 z-20 flex items-center justify-between gap-4 border border-tide bg-sheet px-3 py-2">
           <p aria-live="polite">{chosen.length} selected</p>

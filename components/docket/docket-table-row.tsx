@@ -110,7 +110,7 @@ function Outcomes({ counts }: { counts: DocketRow['outcomes'] }) {
 
 function Nothing() {
   return (
-    <span className="text-ink-soft">
+    <span data-nothing className="text-ink-soft">
       <span aria-hidden="true">–</span>
       <span className="sr-only">none</span>
     </span>

@@ -30,7 +30,7 @@ export function MailSheet({ mail }: MailSheetProps) {
       sandbox={sandbox}
       referrerPolicy="no-referrer"
       srcDoc={`<base target="_blank">${mail.html ?? ''}`}
-      className="h-[70dvh] w-full border border-rule bg-white scheme-light"
+      className="h-[70dvh] w-full border border-rule bg-[Canvas] scheme-light"
     />
   )
   return (

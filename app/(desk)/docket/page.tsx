@@ -1,6 +1,6 @@
 import { dehydrate, HydrationBoundary, QueryClient } from '@tanstack/react-query'
 import { notFound } from 'next/navigation'
-import { docketKey } from '@/components/docket/docket-key'
+import { docketKey, facetsKey } from '@/components/docket/docket-key'
 import { DOCKET_PARTS, loadDocketParams, toDocketFilter } from '@/components/docket/docket-params'
 import { DocketScreen } from '@/components/docket/docket-screen'
 import { ButtonLink } from '@/components/ui/button'
@@ -25,6 +25,7 @@ export default async function DocketPage({ searchParams }: PageProps<'/docket'>)
   const client = new QueryClient()
   const now = Date.now()
   client.setQueryData(docketKey(filter), listDocket(db, actor, filter, now))
+  client.setQueryData(facetsKey(filter.as), getDocketFacets(db, actor, filter, now))
   const maySubmit = may(actor, 'draft.create')
   return (
     <Page>
@@ -44,7 +45,6 @@ export default async function DocketPage({ searchParams }: PageProps<'/docket'>)
       <HydrationBoundary state={dehydrate(client)}>
         <DocketScreen
           parts={parts}
-          facets={getDocketFacets(db, actor, filter, now)}
           mayAssign={may(actor, 'assignment.offer')}
           maySubmit={maySubmit}
           reviewDays={getHouseRules(db, actor)?.rules.reviewDays ?? 14}
