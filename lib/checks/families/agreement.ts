@@ -24,7 +24,7 @@ function asT(statistic: ReadStatistic): { test: string; df: number | undefined; 
 /** Whether two printed statistics can be one and the same; null where they cannot be compared. */
 export function sameStatistic(a: ReadStatistic, b: ReadStatistic): boolean | null {
   const [one, other] = [asT(a), asT(b)]
-  if (one.test !== other.test) return null
+  if (one.test !== other.test || one.test === 'other') return null
   return overlaps(one.range, other.range)
 }
 

@@ -76,6 +76,9 @@ function score(
 const general =
   /\ball\s+(?:reported\s+)?(?:p|post|tests|comparisons|analyses)\b|\bthroughout\b|\bin all (?:tests|cases)\b/i
 
+/** Among several clusters a claim needs more than its mere presence to be about one of them. */
+const leastFit = 0.5
+
 /** For each cluster the claim that speaks for it, or null. */
 export function assignClaims(clusters: readonly Cluster[], views: readonly ClaimView[]): Assigned[] {
   const words = clusters.map(wordsOfCluster)
@@ -87,9 +90,10 @@ export function assignClaims(clusters: readonly Cluster[], views: readonly Claim
   const claimsLeft = new Set(views.keys())
   // each claim goes to the cluster it fits best, the clearest fit first; a cluster keeps the claim that fits it best
   const all = table.flatMap((row, v) => row.map((points, c) => ({ v, c, points })))
-  for (const { v, c } of all.sort((a, b) => b.points - a.points || a.v - b.v || a.c - b.c)) {
+  for (const { v, c, points } of all.sort((a, b) => b.points - a.points || a.v - b.v || a.c - b.c)) {
     const view = views[v]
     if (!view || assigned[c] || !claimsLeft.has(v)) continue
+    if (clusters.length > 1 && points < leastFit) continue
     assigned[c] = { view, own: true }
     claimsLeft.delete(v)
   }

@@ -38,7 +38,8 @@ export function buildCase(draft: FamilyDraft, setting: Setting, number: number):
   const found = fitsOf(evidence, printed, design, assigned?.view.m ?? null)
   const effective = isCorrected(assigned, series) ? assigned : null
   const exemption = findExemption(cluster, design, effective, setting)
-  const procedure = yardstickOf(effective, exemption)
+  const given = 2 * printed.filter((range) => range !== null).length > printed.length
+  const procedure = !effective && !exemption && given && !assigned ? 'any' : yardstickOf(effective, exemption)
   const trusted = claimed !== null && found.some((fit) => fit.procedure === claimed && fit.m === design.due)
 
   const judgeAt = (m: number) => {
@@ -49,7 +50,7 @@ export function buildCase(draft: FamilyDraft, setting: Setting, number: number):
     return cluster.comparisons.map((comparison, i): Judged => {
       const due = adjusted[i] ?? { low: 0, high: 1 }
       const each = evidence[i]
-      const stated = statedCall(comparison)
+      const stated = statedCall(comparison, alpha)
       const implied = stated === null ? impliedCall(comparison, effective?.view ?? null, series, alpha) : null
       return {
         ...comparison,
@@ -64,7 +65,7 @@ export function buildCase(draft: FamilyDraft, setting: Setting, number: number):
       }
     })
   }
-  const corrected = effective !== null || exemption !== null
+  const corrected = effective !== null || exemption !== null || procedure === 'any'
   const alternatives = design.alternatives.map((m) => ({ m, judged: judgeAt(m) }))
   const under = alternatives.map(({ m, judged }) => ({ m, outcome: outcomeOf(judged, corrected) }))
   const settledM = design.due ?? Math.max(...design.alternatives, cluster.comparisons.length)

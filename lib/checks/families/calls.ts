@@ -10,9 +10,14 @@ function rank({ place, section }: ReadReport): number {
   return section === 'results' ? 3 : 2
 }
 
+/** "did not differ (p < 0.05)": the level that was not reached, rather than a value below it. */
+function isCriterion({ called, relation, value }: ReadReport, alpha: number): boolean {
+  return called === 'not significant' && (relation === '<' || relation === '<=') && value >= alpha
+}
+
 /** What the manuscript calls the comparison in words or marks; null where it does not, or where it says both. */
-export function statedCall({ items }: Comparison): boolean | null {
-  const called = items.filter(({ report }) => report.called !== null)
+export function statedCall({ items }: Comparison, alpha: number): boolean | null {
+  const called = items.filter(({ report }) => report.called !== null && !isCriterion(report, alpha))
   const best = Math.max(...called.map(({ report }) => rank(report)))
   const words = new Set(
     called.filter(({ report }) => rank(report) === best).map(({ report }) => report.called),

@@ -132,9 +132,12 @@ function addTo(comparisons: Comparison[], kind: Cluster['kind'], item: Item) {
 function isSameTest(kind: Cluster['kind'], comparison: Comparison, item: Item): boolean {
   if (kind === 'pairs') return comparison.pair?.join('|') === item.pair?.join('|')
   if (comparison.outcome === null || item.outcome === null) return false
-  if (comparison.outcome === item.outcome) return true
+  const votes = comparison.items.map((other) => agreement(other, item))
+  // one name in two sentences with two values is two tests; with a table the name decides
+  const inProse = [item, ...comparison.items].every(({ report }) => report.place.source === 'text')
+  if (comparison.outcome === item.outcome) return !inProse || !votes.includes(false)
   const apart = comparison.items.some((other) => other.block === item.block)
-  return !apart && isSameName(comparison.outcome, item.outcome)
+  return !apart && votes.includes(true) && isSameName(comparison.outcome, item.outcome)
 }
 
 /** Another column of one scale is another test; so is another row, where no pair says that it is the same. */

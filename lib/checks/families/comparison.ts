@@ -44,9 +44,13 @@ export type Remarks = {
   familyWise: { sentence: string; offset: number } | null
 }
 
-/** A comparison with its evidence. `raw`: two-sided unadjusted p; `adjusted`: printed adjusted p. */
+/**
+ * A comparison with its evidence. `raw`: two-sided unadjusted p; `direct`: from statistics or raw values, not only
+ * inferred from an adjusted one; `adjusted`: printed adjusted p.
+ */
 export type Evidence = {
   raw: Interval | null
+  direct: boolean
   conflict: boolean
   adjusted: Interval | null
 }

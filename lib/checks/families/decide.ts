@@ -1,5 +1,5 @@
 import type { Procedure } from '../vocabulary'
-import { adjustRanges, adjustStatistics, worksOnP, worksOnT } from './adjusted'
+import { adjustRanges, adjustStatistics, isSingleStep, worksOnP, worksOnT } from './adjusted'
 import type { Comparison, Evidence } from './comparison'
 import { statisticsOf } from './evidence'
 import { clip, intersect, join, type Interval } from './interval'
@@ -33,10 +33,17 @@ export function adjustFamily(
   const onP = adjustOnP(procedure, raw, m, alpha)
   return comparisons.map((_, i) => {
     const printed = evidence[i]?.adjusted ?? null
+    // a step-wise procedure is not undone from its adjusted values: these are taken as they are
+    if (printed && (procedure === 'any' || (!evidence[i]?.direct && !isExactlyUndone(procedure))))
+      return printed
     const due = computed[i] ?? onP?.[i] ?? null
     if (!due) return printed ?? { low: raw[i]?.low ?? 0, high: 1 }
     return (trusted && printed && intersect(due, printed)) || due
   })
+}
+
+function isExactlyUndone(procedure: Yardstick['procedure']): boolean {
+  return procedure === 'raw' || (procedure !== 'any' && isSingleStep(procedure))
 }
 
 /** For a correction without a name the range runs from the most lenient common procedure to the strictest. */

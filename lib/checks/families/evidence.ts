@@ -24,8 +24,12 @@ export function statisticsOf(comparison: Comparison): ReadStatistic[] {
   return [...new Map(found.map((statistic) => [statistic.id, statistic] as const)).values()]
 }
 
-/** The two-sided p that the statistic stands for over its rounding; null without degrees of freedom. */
-export function rangeOfP({ pLow, pHigh }: ReadStatistic): Interval | null {
+/**
+ * The two-sided p that the statistic stands for over its rounding; null without degrees of freedom, and for a "Z" so
+ * large that it is a rank sum rather than a standard normal.
+ */
+export function rangeOfP({ pLow, pHigh, test, value }: ReadStatistic): Interval | null {
+  if (test === 'z' && Math.abs(value) > 38) return null
   return pLow === null || pHigh === null ? null : clip({ low: pLow, high: pHigh })
 }
 

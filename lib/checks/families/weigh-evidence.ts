@@ -2,7 +2,7 @@ import type { Procedure } from '../vocabulary'
 import { invert } from './adjusted'
 import type { Comparison, Evidence, Item } from './comparison'
 import { rangeOfP, rangeOfReport, statisticsOf, type Series } from './evidence'
-import { clip, combine, type Interval } from './interval'
+import { clip, combine, join, type Interval } from './interval'
 
 /**
  * What is known of a comparison's raw p: from its statistics, and from every printed p that is raw. Where there is
@@ -25,7 +25,7 @@ export function weighEvidence(
   for (const item of comparison.items) {
     const is = isOf(item)
     const range = rangeOfReport(item.report)
-    if (is?.is === 'one-sided') continue
+    if (is?.is === 'one-sided' || item.report.markOnly) continue
     const isRaw = is?.is === 'raw' || (item.report.scale === 'raw' && is?.is !== 'adjusted')
     const isAdjusted = is?.is === 'adjusted' || item.report.scale === 'adjusted'
     if (isRaw) raw.push(range)
@@ -34,8 +34,26 @@ export function weighEvidence(
   }
   const known = combine(raw)
   const printed = combine(adjusted)?.range ?? null
-  if (known) return { raw: clip(known.range), conflict: known.conflict, adjusted: printed }
-  if (printed) return { raw: invert(used.procedure, printed, used.m), conflict: false, adjusted: printed }
+  if (known && printed && isOutOfReach(printed, known.range, used.m)) {
+    const range = clip(join(known.range, invert(used.procedure, printed, used.m)))
+    return { raw: range, direct: true, conflict: true, adjusted: printed }
+  }
+  if (known) return { raw: clip(known.range), direct: true, conflict: known.conflict, adjusted: printed }
+  if (printed) {
+    const range = invert(used.procedure, printed, used.m)
+    return { raw: range, direct: false, conflict: false, adjusted: printed }
+  }
   const either = combine(open)
-  return { raw: either?.range ?? null, conflict: either?.conflict ?? false, adjusted: null }
+  return {
+    raw: either?.range ?? null,
+    direct: either !== null,
+    conflict: either?.conflict ?? false,
+    adjusted: null,
+  }
+}
+
+/** No common procedure multiplies a p by more than m times the harmonic sum (Benjamini and Yekutieli 2001). */
+function isOutOfReach(adjusted: Interval, raw: Interval, m: number): boolean {
+  const most = m * (1 + Math.log(Math.max(1, m)))
+  return adjusted.low > Math.min(1, raw.high * most * 1.05)
 }

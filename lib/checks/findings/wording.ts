@@ -62,6 +62,7 @@ export function reportsOf(comparisons: readonly Pick<Judged, 'items'>[]): string
 /** "A – B (p = .021): 0.124 to 0.125" */
 export function showDecision(judged: Judged): string {
   const lead = leadOf(judged)
-  const printed = lead ? ` (${showReport(lead)})` : ''
+  const shown = lead ? showReport(lead) : ''
+  const printed = shown === '' || judged.label.includes(shown) ? '' : ` (${shown})`
   return `${judged.label}${printed}: ${showRange(judged.due)}`
 }

@@ -16,7 +16,7 @@ function find({ cases }: Bench): Found[] {
 function inItems(label: string, items: readonly Item[], judged: Case): Found[] {
   for (const [i, a] of items.entries()) {
     for (const b of items.slice(i + 1)) {
-      if (isOnePlace(a, b)) continue
+      if (isOnePlace(a, b) || isProse(a, b)) continue
       const said = differ(a, b, judged)
       if (said) return [toFound(label, a, b, said, judged)]
     }
@@ -27,6 +27,19 @@ function inItems(label: string, items: readonly Item[], judged: Case): Found[] {
 /** Two columns of one row are two numbers, not one number twice. */
 function isOnePlace(a: Item, b: Item): boolean {
   return a.block === b.block && a.report.place.source !== 'text'
+}
+
+/**
+ * Two sentences often speak of two tests under one name; only an abstract that repeats one value counts as a
+ * duplicate.
+ */
+function isProse(a: Item, b: Item): boolean {
+  if (a.report.place.source !== 'text' || b.report.place.source !== 'text') return false
+  const [first, second] = [a.report.section, b.report.section]
+  const summary = (first === 'abstract') !== (second === 'abstract')
+  return (
+    !summary || [a, b].some(({ report }) => (report.sentence.match(/\bp\b\s*[=<>]/gi) ?? []).length !== 1)
+  )
 }
 
 function kindOf({ report }: Item, { series }: Case): string {

@@ -16,7 +16,7 @@ function inFamily(judgedCase: Case): Found[] {
   const { comparisons, family, alpha } = judgedCase
   const open = comparisons.filter(
     ({ called, significant, conflict, raw }) =>
-      called !== null && significant === null && !conflict && raw !== null,
+      called !== null && significant === null && !conflict && isRounded(raw),
   )
   const [first] = open
   if (!first) return []
@@ -31,6 +31,11 @@ function inFamily(judgedCase: Case): Found[] {
       cites: ['apa-7'],
     },
   ]
+}
+
+/** A range as wide as a rounding makes it; wider ones lack more than a digit. */
+function isRounded(raw: Judged['raw']): boolean {
+  return raw !== null && raw.low > 0 && raw.high <= 2 * raw.low
 }
 
 /** Which digit would decide, for the number that is quoted. */
