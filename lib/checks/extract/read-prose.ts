@@ -156,7 +156,7 @@ function cutClauses({ sentence: { text }, reports, statistics }: SentenceReports
  * only where the value itself does not speak against them.
  */
 function settleCalls(
-  { sentence: { text }, reports }: SentenceReports,
+  { reports }: SentenceReports,
   clauses: readonly Clause[],
   names: Names,
   alpha: number,

@@ -76,7 +76,26 @@ function cutSentences(body: string): [number, number][] {
     from = match.index + match[0].length
   }
   if (body.slice(from).trim() !== '') cuts.push([from, body.length])
-  return cuts
+  return cuts.flatMap((cut) => chop(body, cut))
+}
+
+/** Longest stretch that is read as one sentence; lists and console output know no full stops. */
+const LONGEST = 900
+
+/** Cuts an endless sentence after a bracket, semicolon, comma or blank, whichever comes last before the limit. */
+function chop(body: string, [from, to]: [number, number]): [number, number][] {
+  const pieces: [number, number][] = []
+  let start = from
+  while (to - start > LONGEST) {
+    const stretch = body.slice(start + LONGEST / 2, start + LONGEST)
+    const at = [') ', '; ', ', ', ' ']
+      .map((mark) => stretch.lastIndexOf(mark) + mark.length)
+      .find((i) => i > 2)
+    const end = start + LONGEST / 2 + (at ?? LONGEST / 2)
+    pieces.push([start, end])
+    start = end
+  }
+  return [...pieces, [start, to]]
 }
 
 function endsSentence(body: string, from: number, stop: number, width: number): boolean {

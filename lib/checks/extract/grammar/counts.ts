@@ -111,18 +111,14 @@ const OF_THE = new RegExp(
   'gi',
 )
 
+const ENDS_IN_TESTS = new RegExp(`${TESTS}$`, 'i')
+
 /** The number of groups that a sentence states, 2 to 60; null where it states none. */
 export function findGroupCount(text: string): number | null {
   for (const form of [GROUPS, OF_THE])
     for (const match of text.matchAll(form)) {
       const n = parseCount(match.groups?.n ?? match.groups?.n2 ?? '')
-      if (
-        n !== null &&
-        n >= 2 &&
-        n <= 60 &&
-        !new RegExp(`${TESTS}$`, 'i').test(match[0].replace(/doses$/, ''))
-      )
-        return n
+      if (n !== null && n >= 2 && n <= 60 && !ENDS_IN_TESTS.test(match[0].replace(/doses$/, ''))) return n
     }
   return null
 }
