@@ -10,6 +10,7 @@ import { FindingsSection } from '../findings/findings-section'
 import { useBench } from './bench-state'
 import { ClaimsSection } from './claims-section'
 import { NumbersSection } from './numbers-section'
+import { subjectOf } from './subject-of'
 
 export const AUDIT_TABS = ['families', 'findings', 'numbers', 'claims', 'comments'] as const
 export type AuditTab = (typeof AUDIT_TABS)[number]
@@ -26,7 +27,7 @@ type AuditPaneProps = {
 
 /** The audit in five lists. All but the comments stay drawn, so that they keep their place and can be printed. */
 export function AuditPane(props: AuditPaneProps) {
-  const { index, manuscriptId } = useBench()
+  const { index, manuscriptId, chosen } = useBench()
   const { audit } = index
   return (
     <Tabs.Root
@@ -66,6 +67,7 @@ export function AuditPane(props: AuditPaneProps) {
             mayWrite={props.mayComment}
             subject={props.subject}
             onSubject={props.onSubject}
+            offered={chosen && subjectOf(index, chosen)}
             onShow={props.onShowComment}
           />
         </Pane>

@@ -17,6 +17,8 @@ type CommentsSectionProps = {
   /** What a new comment is about; null while none is being written. */
   subject: CommentSubject | null
   onSubject: (subject: CommentSubject | null) => void
+  /** What is chosen on the screen, offered as a subject beside the whole. */
+  offered?: CommentSubject | null
   /** Shows what a comment is about; absent where there is nothing to show it on. */
   onShow?: (comment: CommentRow) => void
 }
@@ -28,6 +30,7 @@ export function CommentsSection({
   subject,
   onSubject,
   onShow,
+  offered,
 }: CommentsSectionProps) {
   const comments = useComments(manuscriptId)
   const write = useWriteComment(manuscriptId)
@@ -38,9 +41,16 @@ export function CommentsSection({
   const open = threads.filter((thread) => thread.first.resolvedAt === null)
   const shown = resolvedToo ? threads : open
   const begin = (
-    <Button size="small" onClick={() => onSubject(wholeManuscript)}>
-      Comment on the manuscript
-    </Button>
+    <div className="flex flex-wrap gap-2 print:hidden">
+      <Button size="small" onClick={() => onSubject(wholeManuscript)}>
+        Comment on the manuscript
+      </Button>
+      {offered && (
+        <Button size="small" className="max-w-full" onClick={() => onSubject(offered)}>
+          <span className="truncate">Comment {subjectWords(offered)}</span>
+        </Button>
+      )}
+    </div>
   )
   return (
     <div className="flex flex-col gap-4">
@@ -59,7 +69,7 @@ export function CommentsSection({
           />
         </div>
       ) : (
-        mayWrite && threads.length > 0 && <div className="print:hidden">{begin}</div>
+        mayWrite && threads.length > 0 && begin
       )}
       {threads.length === 0 && !subject && (
         <EmptyState action={mayWrite ? begin : undefined}>

@@ -14,6 +14,7 @@ export function usePreview(body: string, preview: Preview) {
     return () => clearTimeout(timer)
   }, [body])
   return useQuery({
+    enabled: settled.trim() !== '',
     queryKey: ['letter-preview', settled],
     queryFn: async () => {
       const answer = await preview({ body: settled })
