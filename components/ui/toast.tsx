@@ -13,7 +13,7 @@ export function Toaster() {
         unstyled: true,
         classNames: {
           toast:
-            'flex w-full items-center gap-3 rounded-md border border-rule bg-sheet px-4 py-3 text-sm text-ink shadow-sheet sm:w-[22rem]',
+            'flex w-full items-center gap-3 rounded-md font-sans border border-rule bg-sheet px-4 py-3 text-sm text-ink shadow-sheet sm:w-[22rem]',
           error: 'border-l-3 border-l-fails',
           success: 'border-l-3 border-l-holds',
           icon: 'hidden',
