@@ -64,15 +64,17 @@ function findWideTables(
   const isProse = (row: Row) =>
     row.segments.some((s) => {
       const lane = laneOf(s, gutters)
-      if (lane === null) return false
+      if (lane === null || s.words.length < 5) return false
       const width = (bounds[lane + 1] ?? right) - (bounds[lane] ?? left)
-      return s.u1 - s.u0 > 0.7 * width && s.words.length >= 5
+      const alone = row.segments.every((other) => other === s || laneOf(other, gutters) !== lane)
+      return alone && s.u1 - s.u0 > 0.7 * width
     })
   const spans = (row: Row) =>
     new Set(row.segments.map((s) => laneOf(s, gutters))).size > 1 ||
     row.segments.some((s) => laneOf(s, gutters) === null)
   const tables: WideTable[] = []
   let at = 0
+  let floor = 0
   while (at < rows.length) {
     const row = rows[at]
     if (!row || isProse(row) || !spans(row) || row.segments.length < 3) {
@@ -80,7 +82,7 @@ function findWideTables(
       continue
     }
     let from = at
-    while (from > 0 && !stops(rows, from - 1, isProse)) from--
+    while (from > floor && !stops(rows, from - 1, isProse)) from--
     let end = at + 1
     let last = at + 1
     while (end < rows.length && !stops(rows, end, isProse) && gapBefore(rows, end) < 3.5) {
@@ -97,6 +99,7 @@ function findWideTables(
       }
     }
     at = end
+    floor = end
   }
   return tables
 }

@@ -25,22 +25,30 @@ function measureColumns(rows: readonly Row[]): Column[] {
   if (full.length === 0) return []
   const size = Math.max(...full.map((row) => row.size))
   const words = full.map((row) => row.segments.flatMap((segment) => segment.words))
+  const labels = new Set(
+    full.flatMap((row) => (row.segments.length > 1 ? (row.segments[0]?.words ?? []) : [])),
+  )
   const left = Math.min(...full.map((row) => row.u0))
   const right = Math.max(...full.map((row) => row.u1))
   const step = 0.5
   const cover = new Uint16Array(Math.max(1, Math.ceil((right - left) / step) + 1))
+  const coverOfLabels = new Uint16Array(cover.length)
   for (const row of words) {
     for (const word of row) {
       const a = Math.max(0, Math.floor((word.u0 - left) / step))
       const b = Math.min(cover.length - 1, Math.ceil((word.u1 - left) / step))
-      for (let i = a; i < b; i++) cover[i] = (cover[i] ?? 0) + 1
+      const into = labels.has(word) ? coverOfLabels : cover
+      for (let i = a; i < b; i++) into[i] = (into[i] ?? 0) + 1
     }
   }
   const allowed = Math.floor(full.length * 0.08)
+  // a long label may reach into the gap that follows the labels
+  const overrun = Math.max(allowed, Math.floor(full.length * 0.15))
   const gaps: Column[] = []
   let open = -1
   for (let i = 0; i < cover.length; i++) {
-    const clear = (cover[i] ?? 0) <= allowed
+    const others = cover[i] ?? 0
+    const clear = others <= allowed && others + (coverOfLabels[i] ?? 0) <= (others === 0 ? overrun : allowed)
     if (clear && open < 0) open = i
     if (!clear && open >= 0) {
       const gap = { from: left + open * step, to: left + i * step }

@@ -11,7 +11,8 @@ export function mergeWrapped(lines: readonly Line[]): Line[] {
   lines.forEach((line, index) => {
     const last = merged.at(-1)
     const pitch = pitches[index - 1] ?? Infinity
-    const tight = pitch < 0.92 * usual && pitch < 1.6 * line.row.size
+    const after = pitches[index] ?? Infinity
+    const tight = pitch < 0.92 * Math.min(usual, after) || (pitch < 0.92 * usual && !isLabelOnly(line))
     const joins = last && pitch < 1.6 * line.row.size && (runsOn(last, line, tight) || runsInto(last, line))
     if (last && joins) {
       line.cells.forEach((words, i) => last.cells[i]?.push(...words))
@@ -61,6 +62,7 @@ function continuesCell(before: string, text: string, tight: boolean): boolean {
   const open = (before.match(/[([]/g)?.length ?? 0) > (before.match(/[)\]]/g)?.length ?? 0)
   // "<", "-3.6 (-5.6 to", "12.1 ±", "0.3,"
   if (open || /(?:[<>=≤≥±–,/]|\bto|\band)$/.test(before)) return true
+  if (!isNumeric(before) && /^\p{Ll}{2}/u.test(text)) return true
   return tight && !(isNumeric(before) && isNumeric(text))
 }
 

@@ -100,7 +100,7 @@ function buildTable(
   grown: number,
   free: number,
 ): { tables: FoundTable[]; next: number } | null {
-  const { rows, fine, lane, bodySize, pitch } = reading
+  const { rows, fine, lane, bodySize } = reading
   const above = findCaptionAbove(rows, from, free)
   const start = above ? above.end : from
   const columns = findColumns(fine.slice(start, grown))
@@ -111,13 +111,14 @@ function buildTable(
   const cells = blocks.flatMap((block) => block.body.flat()).filter((cell) => cell.text !== '')
   const numeric = cells.filter((cell) => isPlainNumber(cell.text)).length
   const lines = blocks.reduce((sum, block) => sum + block.body.length, 0)
-  const below = above ? null : findCaptionBelow(rows, end, pitch)
+  const below = above ? null : findCaptionBelow(reading, end)
   const captioned = above !== null || below !== null
   if (lines < (captioned ? 1 : 2)) return null
-  if (!captioned && (numeric < 0.4 * cells.length || numeric < 4)) return null
+  const wordy = cells.filter((cell) => cell.text.split(' ').length >= 7).length
+  if (!captioned && (numeric < 0.4 * cells.length || numeric < 4 || wordy > 0.25 * lines)) return null
   const notesFrom = below ? below.end : end
   const notesEnd = findNotes(rows, notesFrom, bodySize, lane, rows.slice(first, end))
-  const late = captioned ? null : findCaptionWithin(rows, end, notesEnd + 1, pitch)
+  const late = captioned ? null : findCaptionWithin(reading, end, notesEnd + 1)
   const caption = above ? rows.slice(above.from, above.end) : below ? rows.slice(end, below.end) : []
   const number = above?.number ?? below?.number ?? late?.number ?? null
   let at = first
@@ -248,7 +249,8 @@ function isBareNumber(text: string): boolean {
   return captionNumber(text) !== null && !/\p{L}{3,}.*\p{L}{3,}/u.test(text)
 }
 
-function findCaptionBelow(rows: readonly Row[], end: number, pitch: number): CaptionSpan | null {
+/** A caption under the table; one with a table under it belongs to that. */
+function findCaptionBelow({ rows, tabular, pitch }: Reading, end: number): CaptionSpan | null {
   const row = rows[end]
   const before = rows[end - 1]
   if (!row || !before || before.v - row.v > 3 * pitch) return null
@@ -260,20 +262,18 @@ function findCaptionBelow(rows: readonly Row[], end: number, pitch: number): Cap
     const prior = rows[last - 1]
     if (!next || !prior || prior.v - next.v > 1.4 * prior.size || Math.abs(next.size - prior.size) > 0.5)
       break
+    if (tabular[last]) return null
     last++
   }
-  return { from: end, end: last, number }
+  const [foot, under] = [rows[last - 1], rows[last]]
+  const heads = foot && under && foot.v - under.v < 2.6 * under.size && tabular[last] && tabular[last + 1]
+  return heads ? null : { from: end, end: last, number }
 }
 
 /** A caption that stands below the table's notes. */
-function findCaptionWithin(
-  rows: readonly Row[],
-  from: number,
-  to: number,
-  pitch: number,
-): CaptionSpan | null {
-  for (let at = from + 1; at < Math.min(to, rows.length); at++) {
-    const found = findCaptionBelow(rows, at, pitch)
+function findCaptionWithin(reading: Reading, from: number, to: number): CaptionSpan | null {
+  for (let at = from + 1; at < Math.min(to, reading.rows.length); at++) {
+    const found = findCaptionBelow(reading, at)
     if (found) return found
   }
   return null
