@@ -60,7 +60,7 @@ const untilReading = (db: Db) =>
   }, patient)
 
 test('an audit whose worker is killed is finished by another, once the lease has run out, exactly once', async () => {
-  const { db, manuscriptId, env } = await makeDesk(600)
+  const { db, manuscriptId, env } = await makeDesk(200)
   const killed = startWorker(env)
   await untilReading(db)
   killed.kill('SIGKILL')
@@ -81,7 +81,7 @@ test('an audit whose worker is killed is finished by another, once the lease has
 }, 240_000)
 
 test('a worker that is told to stop twice returns its audit at once and ends in order', async () => {
-  const { db, env } = await makeDesk(600)
+  const { db, env } = await makeDesk(200)
   const worker = startWorker(env)
   await untilReading(db)
   worker.kill('SIGTERM')
