@@ -21,7 +21,7 @@ export function read(laidOut: LaidOut, table: ReadTable | null, rules: HouseRule
   )
   const inTables = readPdfTables(laidOut, alpha.value, controls)
   const inResults = table ? readResultsTable(table, alpha.value) : { reports: [], statistics: [] }
-  const names = collectNames([...inTables.reports, ...inResults.reports])
+  const names = collectNames([...inTables.reports, ...inResults.reports], laidOut.tables)
   const inText = readProse(
     laidOut,
     sentences,

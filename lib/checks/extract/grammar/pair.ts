@@ -61,7 +61,7 @@ const FORMS: readonly RegExp[] = [
   ),
   // 'A was higher than B', 'A had more pain than those in B', 'C30 held better than A10'
   new RegExp(
-    String.raw`(?<a>${NAME})(?<!\b(?:the|an?))\s+(?:was|were|had|gave|showed|grew|is|are|did|held|kept|rose|took|lost|[a-z]+ed)\b[^,;:]*?\bthan\s+(?:(?:that|those)\s(?:of|for|in|with|under|from)\s|did\s)?(?<b>${NAME})${END}`,
+    String.raw`(?<a>${NAME})(?<!\bthe|\ban)\s+(?:was|were|had|gave|showed|grew|is|are|did|held|kept|rose|took|lost|[a-z]+ed)\b[^,;:]*?\bthan\s+(?:(?:that|those)\s(?:of|for|in|with|under|from)\s|did\s)?(?<b>${NAME})${END}`,
     'i',
   ),
   // 'the comparison A–B', 'Significant were A–B'
@@ -151,6 +151,7 @@ function dropShared(a: string, b: string): [string, string] {
 function isName(name: string): boolean {
   return (
     name.length > 0 &&
+    !/^(?:a|an|the)$/.test(name) &&
     name.split(' ').length <= 6 &&
     !/^(?:it|they|them|this|these|those|each other|one another|any|all|none|other|others|each|every|no|groups?|treatments?|conditions?|zero|chance|expected|before|after|we|two|three|four|five|six|tests?|post hoc tests?|results?|effects?|differences?|the rest|either|neither|which|who|pre|post|there)$/i.test(
       name,
