@@ -133,7 +133,11 @@ function ErrorSummary({ fields, fileMissing, onGo }: ErrorSummaryProps) {
 
 function SummaryLink({ onClick, children }: { onClick: () => void; children: string }) {
   return (
-    <button type="button" onClick={onClick} className="text-tide underline underline-offset-2">
+    <button
+      type="button"
+      onClick={onClick}
+      className="min-h-6 min-w-6 text-left text-tide underline underline-offset-2"
+    >
       {children}
     </button>
   )

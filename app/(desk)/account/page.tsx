@@ -10,6 +10,7 @@ import { listSessions } from '@/db/queries/sessions'
 import { may } from '@/lib/rules/permissions'
 import { requireActor } from '@/lib/web/actor'
 import { getTheme } from '@/lib/web/theme'
+import { getNow } from '@/lib/web/now'
 import {
   changePasswordAction,
   chooseThemeAction,
@@ -33,7 +34,7 @@ export default async function AccountPage() {
       </Part>
       <Part title="Sessions">
         <SessionList
-          sessions={listSessions(getDb(), actor, Date.now())}
+          sessions={listSessions(getDb(), actor, getNow())}
           end={revokeSessionAction}
           endAll={revokeAllSessionsAction}
         />

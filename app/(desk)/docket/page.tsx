@@ -12,6 +12,7 @@ import { getDocketFacets, listDocket } from '@/db/queries/docket'
 import { getHouseRules } from '@/db/queries/house-rules'
 import { may } from '@/lib/rules/permissions'
 import { requireActor } from '@/lib/web/actor'
+import { getNow } from '@/lib/web/now'
 import { answerAssignmentAction, offerAssignmentAction } from './actions'
 
 export const metadata = { title: 'Docket' }
@@ -23,7 +24,7 @@ export default async function DocketPage({ searchParams }: PageProps<'/docket'>)
   const parts = DOCKET_PARTS.filter((part) => actor.roles.includes(part))
   const filter = toDocketFilter(await loadDocketParams(searchParams), parts)
   const client = new QueryClient()
-  const now = Date.now()
+  const now = getNow()
   client.setQueryData(docketKey(filter), listDocket(db, actor, filter, now))
   client.setQueryData(facetsKey(filter.as), getDocketFacets(db, actor, filter, now))
   const maySubmit = may(actor, 'draft.create')

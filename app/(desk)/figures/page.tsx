@@ -13,6 +13,7 @@ import { getFigures } from '@/db/queries/figures'
 import { listReviewers } from '@/db/queries/reviewers'
 import { may } from '@/lib/rules/permissions'
 import { requireActor } from '@/lib/web/actor'
+import { getNow } from '@/lib/web/now'
 
 export const metadata = { title: 'Figures' }
 
@@ -20,7 +21,7 @@ export default async function FiguresPage() {
   const actor = await requireActor()
   if (!may(actor, 'figures.read')) notFound()
   const db = getDb()
-  const now = Date.now()
+  const now = getNow()
   const figures = getFigures(db, actor, now)
   return (
     <Page>

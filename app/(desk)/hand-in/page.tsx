@@ -9,6 +9,7 @@ import { listDocket } from '@/db/queries/docket'
 import { docketFilter } from '@/lib/rules/docket'
 import { may } from '@/lib/rules/permissions'
 import { requireActor } from '@/lib/web/actor'
+import { getNow } from '@/lib/web/now'
 import { createDraftAction, discardDraftAction } from './actions'
 
 export const metadata = { title: 'Hand in' }
@@ -17,7 +18,7 @@ export default async function HandInPage() {
   const actor = await requireActor()
   if (!may(actor, 'draft.create')) notFound()
   const filter = docketFilter.parse({ as: 'submitter', states: ['draft'], pageSize: 200 })
-  const drafts = listDocket(getDb(), actor, filter, Date.now())
+  const drafts = listDocket(getDb(), actor, filter, getNow())
   return (
     <Page narrow>
       <PageHead

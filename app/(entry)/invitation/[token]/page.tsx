@@ -2,13 +2,14 @@ import { NewPasswordForm } from '@/components/entry/new-password-form'
 import { SpentLink } from '@/components/entry/spent-link'
 import { getDb } from '@/db/current'
 import { findMailedLink } from '@/lib/desk/mailed-link'
+import { getNow } from '@/lib/web/now'
 import { acceptInvitationAction } from '../../actions'
 
 export const metadata = { title: 'Invitation' }
 
 export default async function InvitationPage({ params }: { params: Promise<{ token: string }> }) {
   const { token } = await params
-  const link = findMailedLink(getDb(), token, 'invitation', Date.now())
+  const link = findMailedLink(getDb(), token, 'invitation', getNow())
   if (!link) return <SpentLink invitation />
   return (
     <>
