@@ -10,14 +10,8 @@ export function printAudit(audit: Audit): string {
     '',
     ...findingLines(audit.findings),
     '',
-    ...wrap(
-      'This helps a qualified statistician and decides nothing. Numbers can be missed or misread: check each at its place.',
-      '',
-    ),
-    ...wrap(
-      'The policy of the journal or facility, reporting guidelines and, in clinical work, the protocol come first.',
-      '',
-    ),
+    'It helps a qualified statistician and decides nothing; numbers can be misread: check each in place.',
+    'House policy, reporting guidelines and, in clinical work, licensed practice and protocol come first.',
   ].join('\n')
 }
 
@@ -62,10 +56,10 @@ function familyLines(family: Family, audit: Audit): string[] {
 function decisionTable(decisions: readonly Decision[], reports: readonly Report[]): string[] {
   const rows = decisions.map((decision) => {
     const report = reports.find(({ id }) => id === decision.report)
-    const name = report?.comparison?.join(' – ') ?? report?.place.quote ?? decision.report
+    const name = report?.comparison?.join(' – ') ?? whereRead(report?.place ?? null)
     return [
       cut(name, 34),
-      cut(report?.place.quote ?? '', 20),
+      cut(printedP(report?.place.quote ?? ''), 20),
       rangeOf(decision.adjusted),
       decision.called === null ? '-' : decision.called ? 'significant' : 'not sign.',
       decision.significant === null ? 'open' : decision.significant ? 'significant' : 'not sign.',
@@ -79,6 +73,18 @@ function decisionTable(decisions: readonly Decision[], reports: readonly Report[
   return table.map((row) =>
     `  ${row.map((cell, column) => cell.padEnd(widths[column] ?? 0)).join('  ')}`.trimEnd().slice(0, width),
   )
+}
+
+/** The p-value at the end of a quote such as "t(36) = 2.43, p = .020"; else the quote. */
+function printedP(quote: string): string {
+  return /\b[pq]\s?[=<>≤≥][^;,]*$/iu.exec(quote)?.[0] ?? quote
+}
+
+function whereRead(place: Place | null): string {
+  if (!place) return '-'
+  return place.source === 'results-table'
+    ? `results table, row ${place.row ?? '?'}`
+    : `page ${place.page ?? '?'}`
 }
 
 function rangeOf([low, high]: Decision['adjusted']): string {

@@ -14,6 +14,7 @@ import { overlaps } from './interval'
 import { findExemption } from './exemption'
 import type { FamilyDraft } from './join-outcomes'
 import { labelOf } from './label'
+import { leadOf } from './lead'
 import { outcomeOf, whyOf } from './outcome'
 import { weighEvidence } from './weigh-evidence'
 
@@ -89,7 +90,7 @@ export function buildCase(draft: FamilyDraft, setting: Setting, number: number):
       outcome,
       why: whyOf(comparisons, outcome, { procedure, design, alpha, exemption, under }),
       decisions: comparisons.map(({ items, called, due, significant, survivesUpTo: upTo }) => ({
-        report: items[0]?.report.id ?? '',
+        report: leadOf({ items })?.id ?? '',
         called,
         adjusted: [due.low, due.high],
         significant,

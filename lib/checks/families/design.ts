@@ -60,7 +60,8 @@ function ofPairs(cluster: Cluster, view: ClaimView | null, remarks: Remarks): De
 
   const center = groups.find((group) => pairs.every((pair) => pair.includes(group)))
   const star = center !== undefined && pairs.length === k - 1
-  const saysAll = view?.procedure === 'tukey' || view?.design === 'all-pairs' || all !== null
+  const saysAll =
+    view?.procedure === 'tukey' || all !== null || (view?.design === 'all-pairs' && view.m !== pairs.length)
   const manyToOne = view?.design === 'many-to-one' || view?.procedure === 'dunnett'
   if (star && (manyToOne || !saysAll)) {
     const due = Math.max(k - 1, view?.m ?? 0)

@@ -51,7 +51,7 @@ export function canonicalNames(
   pairs: readonly (readonly [string, string])[],
   fixed: readonly (readonly [string, string])[],
 ): (name: string) => string {
-  const normal = pairs.map(([a, b]) => [normaliseName(a), normaliseName(b)] as const)
+  const normal = [...pairs, ...fixed].map(([a, b]) => [normaliseName(a), normaliseName(b)] as const)
   const kept = new Set(fixed.flat().map(normaliseName))
   const known = [...new Set(normal.flat())]
   const partners = (name: string) =>

@@ -1,4 +1,5 @@
 import type { Interval } from '../families/interval'
+import { leadOf } from '../families/lead'
 import { nameOf } from '../families/outcome'
 import type { Case, Judged } from '../families/case'
 import type { ReadReport, ReadStatistic } from '../types'
@@ -47,14 +48,6 @@ export function showYardstick({ procedure, design }: Case): string {
     : `${nameOf(procedure)} with m = ${design.due}`
 }
 
-/** The report by which a comparison is quoted: in the manuscript before the results file, in the results first. */
-export function leadOf({ items }: Pick<Judged, 'items'>): ReadReport | null {
-  const rank = ({ place, section }: ReadReport) =>
-    place.source === 'results-table' ? 3 : place.source === 'pdf-table' ? 1 : section === 'results' ? 0 : 2
-  const sorted = items.map(({ report }) => report).sort((a, b) => rank(a) - rank(b) || a.offset - b.offset)
-  return sorted[0] ?? null
-}
-
 export function reportsOf(comparisons: readonly Pick<Judged, 'items'>[]): string[] {
   return [...new Set(comparisons.flatMap(({ items }) => items.map(({ report }) => report.id)))]
 }
@@ -66,3 +59,5 @@ export function showDecision(judged: Judged): string {
   const printed = shown === '' || judged.label.includes(shown) ? '' : ` (${shown})`
   return `${judged.label}${printed}: ${showRange(judged.due)}`
 }
+
+export { leadOf }

@@ -1,23 +1,32 @@
 import type { Bench, Case } from '../../families/case'
+import type { ClaimView } from '../../families/claims'
+import type { Outcome } from '../../vocabulary'
 import type { Found, RuleRow } from '../finding'
 import { leadOf, listSome, reportsOf, showDecision } from '../wording'
 
 /** A question where the outcome depends on how the family is drawn; a note where it does not. */
 function find({ cases }: Bench): Found[] {
   const open = cases.filter(({ design }) => design.due === null)
-  const outside = cases.filter(
-    ({ assigned }) => assigned !== null && !assigned.own && assigned.view.m !== null,
-  )
-  return [...open.map(ofAlternatives), ...outside.flatMap(standsOutside)]
+  const counted = cases.find(({ assigned }) => assigned?.own && assigned.view.m !== null)?.assigned?.view
+  const outside = cases.flatMap((each) => {
+    const { assigned, family } = each
+    if (assigned !== null) return assigned.own ? [] : standsOutside(each, assigned.view)
+    return counted && family.outcome === 'uncorrected' ? standsOutside(each, counted) : []
+  })
+  return [...open.map((each) => ofAlternatives(each)), ...outside]
+}
+
+const words: Record<Outcome, string> = {
+  holds: 'all calls stand',
+  fails: 'at least one call does not stand',
+  undecidable: 'a call cannot be decided',
+  uncorrected: 'nothing was corrected',
 }
 
 function ofAlternatives({ under, family, assigned, comparisons, design }: Case): Found {
   const depends = new Set(under.map(({ outcome }) => outcome)).size > 1
   const open = comparisons.filter(({ called, significant }) => called !== null && significant === null)
-  const each = under.map(
-    ({ m, outcome }) =>
-      `with m = ${m} the family ${outcome === 'holds' ? 'holds' : `is judged "${outcome}"`}`,
-  )
+  const each = under.map(({ m, outcome }) => `with m = ${m} ${words[outcome]}`)
   const effect =
     open.length > 0 ? ` Adjusted over the admissible m: ${listSome(open.map(showDecision))}.` : ''
   const [first] = comparisons
@@ -32,10 +41,12 @@ function ofAlternatives({ under, family, assigned, comparisons, design }: Case):
   }
 }
 
-/** A correction that is said to hold for everything, with a number of tests that fits another family. */
-function standsOutside({ family, assigned, comparisons, design }: Case): Found[] {
-  const view = assigned?.view
-  if (!view || design.due === null || view.m === design.due) return []
+/**
+ * Tests beside a correction whose number fits another family. A question where the correction is said to hold for
+ * them too; without that `no-correction` asks already, and this is a note.
+ */
+function standsOutside({ family, assigned, comparisons, design }: Case, view: ClaimView): Found[] {
+  if (view.m === null || design.due === null || view.m === design.due) return []
   const [first] = comparisons
   const wrong = comparisons.filter(
     ({ called, significant }) => called !== null && significant !== null && called !== significant,
@@ -44,7 +55,7 @@ function standsOutside({ family, assigned, comparisons, design }: Case): Found[]
     wrong.length > 0 ? ` As a family of their own, by Holm: ${listSome(wrong.map(showDecision))}.` : ''
   return [
     {
-      severity: wrong.length > 0 ? 'question' : 'note',
+      severity: assigned !== null && wrong.length > 0 ? 'question' : 'note',
       family: family.id,
       reports: reportsOf(comparisons),
       place: (first && leadOf(first)?.place) ?? view.lead.place,

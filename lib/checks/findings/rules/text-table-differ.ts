@@ -16,7 +16,7 @@ function find({ cases }: Bench): Found[] {
 function inItems(label: string, items: readonly Item[], judged: Case): Found[] {
   for (const [i, a] of items.entries()) {
     for (const b of items.slice(i + 1)) {
-      if (isOnePlace(a, b) || isProse(a, b)) continue
+      if (isOnePlace(a, b) || isProse(a, b) || isListed(a) || isListed(b)) continue
       const said = differ(a, b, judged)
       if (said) return [toFound(label, a, b, said, judged)]
     }
@@ -37,9 +37,16 @@ function isProse(a: Item, b: Item): boolean {
   if (a.report.place.source !== 'text' || b.report.place.source !== 'text') return false
   const [first, second] = [a.report.section, b.report.section]
   const summary = (first === 'abstract') !== (second === 'abstract')
-  return (
-    !summary || [a, b].some(({ report }) => (report.sentence.match(/\bp\b\s*[=<>]/gi) ?? []).length !== 1)
-  )
+  return !summary || [a, b].some(({ report }) => countP(report.sentence) !== 1)
+}
+
+/** One of several p-values of a sentence without a statistic: which test it belongs to may be misread. */
+function isListed({ report, statistic }: Item): boolean {
+  return report.place.source === 'text' && statistic === null && countP(report.sentence) > 1
+}
+
+function countP(sentence: string): number {
+  return (sentence.match(/\b[pq]\b\s*[=<>]/gi) ?? []).length
 }
 
 function kindOf({ report }: Item, { series }: Case): string {
