@@ -48,7 +48,8 @@ export function findClaims(laidOut: LaidOut, sentences: readonly Sentence[]): Re
   sentences.forEach((sentence, i) => {
     if (NO_PROSE.test(sentence.text)) return
     const neighbours = [sentences[i - 1], sentences[i + 1]].filter(
-      (other): other is Sentence => other?.paragraph === sentence.paragraph,
+      (other): other is Sentence =>
+        other?.paragraph === sentence.paragraph && findProcedures(other.text).length === 0,
     )
     claims.push(
       ...claimsOf(

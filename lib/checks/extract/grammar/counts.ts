@@ -1,7 +1,7 @@
 import { COUNT, parseCount } from './number'
 
 /** Nouns of which the number is the number of tests. */
-const TESTS = String.raw`(?:comparisons?|tests?|contrasts?|pairs|hypothes[ei]s|p-?\s?values?|outcomes?|end-?\s?points?|measures|variables|parameters|regions?|ROIs?|transcripts|genes|probes|SNPs?|loci|voxels|vertices|proteins|metabolites|cytokines|taxa|items|subscales|scales|scores|behaviou?rs|traits|correlations?|time\s?points|markers|biomarkers|features|channels|electrodes|questions|analyses|models|predictors|exposures|subgroups|t-?\s?tests?|depths|doses|contrasts of interest|domains|indices|criteria)`
+const TESTS = String.raw`(?:comparisons?|tests?|contrasts?|pairs|hypothes[ei]s|p-?\s?values?|outcomes?|end-?\s?points?|measures|variables|parameters|regions?|ROIs?|transcripts|genes|probes|SNPs?|loci|voxels|vertices|proteins|metabolites|cytokines|taxa|items|subscales|scales|scores|behaviou?rs|traits|correlations?|time\s?points|markers|biomarkers|features|channels|electrodes|analyses|models|predictors|exposures|subgroups|t-?\s?tests?|depths|doses|contrasts of interest|domains|indices|criteria)`
 
 /** What may stand between the number and the noun: 'six pairwise post hoc', 'three planned', '15 independent'. */
 const KINDS = String.raw`(?:(?:pair-?\s?wise|post[\s-]?hoc|planned|possible|independent|separate|individual|multiple|primary|secondary|co-primary|different|univariate|main|key|orthogonal|such|between-group|statistical|follow-?up|simultaneous|a priori|paired|unpaired|two-sample|chi-square[d]?|χ\^?2|t|simple|resulting|candidate|measured|tested|dependent|single|bivariate|Bonferroni(?:-corrected)?|correlation|group|brain|cognitive|clinical|driving)[\s-]+){0,4}`
@@ -107,7 +107,7 @@ const GROUPS = new RegExp(
 )
 /** 'between the four N', 'of the five N', 'all pairs of the six N'. */
 const OF_THE = new RegExp(
-  String.raw`\b(?:between|among|of|on|across|for)\s(?:the|all)\s(?<n>${COUNT})\s(?!${KINDS}${TESTS}\b)[a-z-]+(?:\s[a-z-]+)?s\b`,
+  String.raw`\b(?:between|among|of|on|across|for)\s(?:the|all)\s(?<n>${COUNT})\s(?!${KINDS}${TESTS}\b|(?:questions|experiments|studies|trials|tables|figures|parts|aims|days|weeks|months|years|times|families|panels|authors|operators)\b)[a-z-]+(?:\s[a-z-]+)?s\b`,
   'gi',
 )
 
