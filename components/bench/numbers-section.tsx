@@ -224,8 +224,11 @@ function Count({ shown, total }: { shown: number; total: number }) {
 function More({ shown, total, onMore }: { shown: number; total: number; onMore: () => void }) {
   if (shown >= total) return null
   return (
-    <Button size="small" variant="quiet" className="mt-1 print:hidden" onClick={onMore}>
-      Show {Math.min(500, total - shown)} more
-    </Button>
+    <>
+      <Button size="small" variant="quiet" className="mt-1 print:hidden" onClick={onMore}>
+        Show {Math.min(500, total - shown)} more
+      </Button>
+      <p className="hidden print:block">{total - shown} more rows are in the CSV of this audit.</p>
+    </>
   )
 }

@@ -9,12 +9,14 @@ import { printedP, recomputedInterval } from '../charts/printed-p'
 import { isSame } from '../bench/audit-index'
 import { useBench } from '../bench/bench-state'
 import { PlaceLink } from '../bench/place-link'
-import { OutcomeShape, outcomeWords } from '../shell/outcome-mark'
+import { OutcomeShape } from '../shell/outcome-mark'
 import { Button } from '../ui/button'
 import { RowTh, Table, Tbody, Td, Th, Thead, Tr } from '../ui/table'
 import { StatisticText } from './statistic-text'
 
 const FIRST_ROWS = 30
+/** Rows that are drawn for the printer though the screen hides them. */
+const PRINTED_ROWS = 500
 
 const outcomeTones: Record<Outcome, string> = {
   holds: 'text-holds',
@@ -25,12 +27,12 @@ const outcomeTones: Record<Outcome, string> = {
 
 /** Every call of a family beside its recomputation. */
 export function DecisionsTable({ family }: { family: Family }) {
-  const { index } = useBench()
+  const { index, chosen } = useBench()
   const [all, setAll] = useState(false)
   const rows = family.decisions
     .map((decision) => ({ decision, report: index.reports.get(decision.report) }))
     .filter((row): row is { decision: Decision; report: Report } => row.report !== undefined)
-  const shown = all ? rows : rows.slice(0, FIRST_ROWS)
+  const drawn = all ? rows : rows.slice(0, PRINTED_ROWS)
   if (rows.length === 0) return <p className="text-ink-soft">No member of this family could be judged.</p>
   return (
     <div className="overflow-x-auto">
@@ -52,12 +54,18 @@ export function DecisionsTable({ family }: { family: Family }) {
           </tr>
         </Thead>
         <Tbody>
-          {shown.map(({ decision, report }) => (
-            <DecisionRow key={report.id} decision={decision} report={report} family={family} />
+          {drawn.map(({ decision, report }, at) => (
+            <DecisionRow
+              key={report.id}
+              decision={decision}
+              report={report}
+              family={family}
+              printOnly={!all && at >= FIRST_ROWS && chosen?.id !== report.id}
+            />
           ))}
         </Tbody>
       </Table>
-      {rows.length > shown.length && (
+      {!all && rows.length > FIRST_ROWS && (
         <Button size="small" variant="quiet" className="mt-1 print:hidden" onClick={() => setAll(true)}>
           Show all {rows.length}
         </Button>
@@ -66,13 +74,20 @@ export function DecisionsTable({ family }: { family: Family }) {
   )
 }
 
-function DecisionRow({ decision, report, family }: { decision: Decision; report: Report; family: Family }) {
+type DecisionRowProps = { decision: Decision; report: Report; family: Family; printOnly: boolean }
+
+function DecisionRow({ decision, report, family, printOnly }: DecisionRowProps) {
   const { index, chosen, show } = useBench()
   const target = { kind: 'report' as const, id: report.id }
   const outcome = outcomeOfDecision(decision, family)
   const statistic = report.statistic ? index.statistics.get(report.statistic) : undefined
   return (
-    <Tr opens selected={isSame(chosen, target)} data-target={`report-${report.id}`}>
+    <Tr
+      opens
+      selected={isSame(chosen, target)}
+      data-target={`report-${report.id}`}
+      className={printOnly ? 'hidden print:table-row' : undefined}
+    >
       <Td className="whitespace-nowrap">
         <span className="inline-flex items-center gap-1.5">
           {outcome ? <OutcomeShape outcome={outcome} /> : <span className="size-3.5" />}
@@ -86,7 +101,7 @@ function DecisionRow({ decision, report, family }: { decision: Decision; report:
       <Td className="whitespace-nowrap">{statistic ? <StatisticText statistic={statistic} /> : '–'}</Td>
       <Td number>{recomputedInterval(decision.adjusted, report.decimals)}</Td>
       <Td className="whitespace-nowrap">{report.called ? shortCalls[report.called] : 'not stated'}</Td>
-      <Td className={outcome ? outcomeTones[outcome] : undefined}>{outcome ? outcomeWords[outcome] : '–'}</Td>
+      <Td className={outcome ? outcomeTones[outcome] : undefined}>{outcome ?? '–'}</Td>
       <Td number>{decision.survivesUpTo ?? '–'}</Td>
     </Tr>
   )

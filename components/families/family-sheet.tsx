@@ -25,7 +25,7 @@ export function FamilySheet({ family, number }: { family: Family; number: number
     <article
       aria-labelledby={`family-${family.id}-title`}
       data-target={`family-${family.id}`}
-      className="grid grid-cols-[2.5rem_minmax(0,1fr)] break-inside-avoid-page scroll-mt-4"
+      className="grid grid-cols-[2.5rem_minmax(0,1fr)] scroll-mt-4"
     >
       <div className="flex flex-col items-center gap-1 pt-1 text-xs text-ink-soft">
         <OutcomeShape outcome={family.outcome} className="size-4.5" />
@@ -87,7 +87,7 @@ export function FamilySheet({ family, number }: { family: Family; number: number
           )}
         </dl>
         {reports.length > 0 && (
-          <figure>
+          <figure className="break-inside-avoid">
             <Staircase
               id={`staircase-${family.id}`}
               family={family}
