@@ -26,7 +26,12 @@ export function audit(
   const reading = read(laidOut, table, rules)
   onStage('judging')
   const { families, findings, called } = judge(reading, laidOut, rules)
-  const familyOf = new Map(families.flatMap((family) => family.members.map((id) => [id, family.id] as const)))
+  // comparisons that only the results file holds are no members, and belong to the family all the same
+  const familyOf = new Map(
+    families.flatMap(({ id, members, decisions }) =>
+      [...decisions.map(({ report }) => report), ...members].map((report) => [report, id] as const),
+    ),
+  )
   return {
     engine: ENGINE,
     document: { pages: document.pages.length, sha256: document.sha256, title: document.title },
