@@ -1,6 +1,7 @@
 'use client'
 
 import { useRouter } from 'next/navigation'
+import { useState } from 'react'
 import { useAction, type Answer } from '../shell/use-action'
 import { RadioGroup } from '../ui/choice'
 
@@ -20,8 +21,10 @@ const options = [
 /** Kept in this browser; the server draws the page in it, so that nothing flashes. */
 export function ThemeChoice({ theme, choose }: ThemeChoiceProps) {
   const router = useRouter()
+  const [chosen, setChosen] = useState(theme)
   const { run } = useAction(choose, () => router.refresh())
   const change = (value: Choice) => {
+    setChosen(value)
     if (value === 'system') delete document.documentElement.dataset.theme
     else document.documentElement.dataset.theme = value
     run({ theme: value })
@@ -32,7 +35,7 @@ export function ThemeChoice({ theme, choose }: ThemeChoiceProps) {
       name="theme"
       inline
       options={options}
-      value={theme}
+      value={chosen}
       onChange={change}
     />
   )

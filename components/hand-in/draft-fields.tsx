@@ -7,7 +7,12 @@ import { Section } from './section'
 
 /** What the reader needs to know beside the files. */
 export function DraftFields({ form }: { form: UseFormReturn<DraftForm> }) {
-  const { register, formState } = form
+  const { formState } = form
+  // The value stands in the server's page too, so that nothing is empty before the script has come.
+  const register = (field: keyof DraftForm) => ({
+    ...form.register(field),
+    defaultValue: formState.defaultValues?.[field],
+  })
   const error = (field: keyof DraftForm) => formState.errors[field]?.message
   return (
     <>

@@ -49,7 +49,18 @@ export function HouseRulesForm({ rules, procedures, save }: HouseRulesFormProps)
   })
   const error = (field: keyof FullHouseRules) => form.formState.errors[field]?.message ?? fields[field]
   const submit = form.handleSubmit((input) => run(input))
-  const { register, control } = form
+  const { control } = form
+  // The values stand in the server's page too, so that nothing is empty before the script has come.
+  const register = (
+    field: 'alpha' | 'correctionFrom' | 'reviewDays' | 'answerDays' | 'greeting' | 'closing',
+  ) => ({
+    ...form.register(field),
+    defaultValue: rules[field],
+  })
+  const registerBox = (field: 'secondaryApart' | 'submitterSeesAudit' | 'twoPersonRelease') => ({
+    ...form.register(field),
+    defaultChecked: rules[field],
+  })
 
   return (
     <form noValidate onSubmit={(event) => void submit(event)}>
@@ -78,7 +89,7 @@ export function HouseRulesForm({ rules, procedures, save }: HouseRulesFormProps)
           </Field>
           <Checkbox
             label="Primary and secondary outcomes are separate families"
-            {...register('secondaryApart')}
+            {...registerBox('secondaryApart')}
           />
           <Controller
             control={control}
@@ -110,12 +121,12 @@ export function HouseRulesForm({ rules, procedures, save }: HouseRulesFormProps)
           <Checkbox
             label="Submitters see the audit before the verdict"
             hint="Without it they see its progress and then the letter."
-            {...register('submitterSeesAudit')}
+            {...registerBox('submitterSeesAudit')}
           />
           <Checkbox
             label="A verdict takes two people"
             hint="The reviewer drafts it, an editor releases it."
-            {...register('twoPersonRelease')}
+            {...registerBox('twoPersonRelease')}
           />
           <div className="flex flex-wrap gap-6">
             <Field label="Days for a review" error={error('reviewDays') && 'From 1 to 365 days.'}>
