@@ -45,6 +45,15 @@ export function experimentIn(text: string): string | null {
   return experiment.exec(text)?.[1]?.toLowerCase() ?? null
 }
 
+/**
+ * Abstract and discussion sum up, and so does a sentence outside the methods that names less than is named elsewhere;
+ * numbers in them count results rather than tests.
+ */
+function sumsUp({ section, procedure }: ReadClaim, view: ClaimView): boolean {
+  const vague = (procedure === 'fdr' || procedure === 'unspecified') && procedure !== view.procedure
+  return section === 'abstract' || section === 'discussion' || (vague && section !== 'methods')
+}
+
 function isCompatible(view: ClaimView, claim: ReadClaim): boolean {
   const sameProcedure =
     claim.procedure === view.procedure ||
@@ -79,11 +88,12 @@ function toView(claim: ReadClaim): ClaimView {
 }
 
 function extend(view: ClaimView, claim: ReadClaim) {
+  const summary = sumsUp(claim, view)
   view.all.push(claim)
   if (view.procedure === 'unspecified' || (view.procedure === 'fdr' && claim.procedure !== 'unspecified'))
     view.procedure = claim.procedure
   view.errorRate ??= claim.errorRate
-  if (claim.section === 'abstract' || claim.section === 'discussion') return
+  if (summary) return
   view.m ??= claim.m
   view.threshold ??= claim.threshold
   view.alpha ??= claim.alpha

@@ -38,7 +38,7 @@ export function adjustFamily(
       return printed
     const due = computed[i] ?? onP?.[i] ?? null
     if (!due) return printed ?? { low: raw[i]?.low ?? 0, high: 1 }
-    return (trusted && printed && intersect(due, printed)) || due
+    return ((trusted || m > comparisons.length) && printed && intersect(due, printed)) || due
   })
 }
 

@@ -1,4 +1,4 @@
-import type { ReadReport, ReadStatistic, Reading } from '../types'
+import type { PdfTable, ReadReport, ReadStatistic, Reading } from '../types'
 import type { Item } from './comparison'
 import { canonicalNames, normaliseName } from './names'
 
@@ -23,7 +23,7 @@ export function findReasonApart(report: ReadReport, statistic: ReadStatistic | n
 }
 
 /** Reports that can be members of a family, with their statistic and with names brought to one form. */
-export function listItems(reading: Reading): Item[] {
+export function listItems(reading: Reading, tables: readonly PdfTable[]): Item[] {
   const statisticOf = new Map(reading.statistics.map((statistic) => [statistic.id, statistic] as const))
   const members = reading.reports
     .map((report) => ({ report, statistic: statisticOf.get(report.statistic ?? '') ?? null }))
@@ -39,7 +39,7 @@ export function listItems(reading: Reading): Item[] {
     statistic,
     pair: toPair(report.comparison, canon),
     outcome: report.outcome === null ? null : normaliseName(report.outcome) || null,
-    block: toBlock(report),
+    block: toBlock(report, tables),
   }))
 }
 
@@ -51,8 +51,16 @@ function toPair(comparison: [string, string] | null, canon: (name: string) => st
   return pair
 }
 
-function toBlock({ place, table, section, heading }: ReadReport): string {
-  if (place.source === 'pdf-table') return `table ${table}`
+/** A table that goes on over the page is one place: it has the number again, or says that it continues. */
+function tableName(at: number | null, tables: readonly PdfTable[]): string {
+  const table = at === null ? undefined : tables[at]
+  if (at === null || !table) return `at ${at}`
+  if (table.number !== null) return table.number
+  return /\bcont(?:inued|\.|'d)/i.test(table.caption) && at > 0 ? tableName(at - 1, tables) : `at ${at}`
+}
+
+function toBlock({ place, table, section, heading }: ReadReport, tables: readonly PdfTable[]): string {
+  if (place.source === 'pdf-table') return `table ${tableName(table, tables)}`
   if (place.source === 'results-table') return `sheet ${place.sheet ?? ''} ${heading}`
   return section === 'results' || section === 'other' ? `text ${section} ${heading}` : `text ${section}`
 }
