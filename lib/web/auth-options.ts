@@ -11,8 +11,8 @@ import { getSettings, type Settings } from '@/lib/settings'
 import { log } from '@/lib/log'
 import { logUnknown } from './problem'
 
+/* eslint-disable @typescript-eslint/consistent-type-definitions -- declaration merging works with an interface alone */
 declare module 'next-auth' {
-  // Declaration merging works with an interface alone.
   interface Session {
     sessionId?: string
   }
@@ -25,6 +25,7 @@ declare module 'next-auth/jwt' {
     sessionId?: string
   }
 }
+/* eslint-enable @typescript-eslint/consistent-type-definitions */
 
 /**
  * Sign-in by e-mail and password. The cookie is an encrypted token that carries the id of a row in `sessions`
