@@ -1,4 +1,4 @@
-import type { ReadClaim } from '../types'
+import type { ReadClaim, SectionKind } from '../types'
 import type { ClaimedProcedure } from '../vocabulary'
 
 /**
@@ -31,11 +31,20 @@ export function groupClaims(claims: readonly ReadClaim[]): ClaimView[] {
   return views.sort((a, b) => a.lead.offset - b.lead.offset)
 }
 
+const weightOf: Partial<Record<ClaimedProcedure, number>> = { unspecified: 0, none: 2, fdr: 2 }
+const weightAt: Partial<Record<SectionKind, number>> = {
+  methods: 3,
+  results: 2,
+  abstract: -2,
+  discussion: -2,
+}
+
 /** How much a sentence says; the methods section outranks the rest. */
-function weigh(claim: ReadClaim): number {
-  const named = claim.procedure === 'unspecified' ? 0 : claim.procedure === 'none' ? 2 : 4
-  const stated = [claim.m, claim.threshold, claim.groups].filter((value) => value !== null).length
-  return named + stated + (claim.section === 'methods' ? 3 : claim.section === 'results' ? 2 : 0)
+function weigh({ procedure, m, threshold, groups, section }: ReadClaim): number {
+  const named = weightOf[procedure] ?? 4
+  const stated = [m, threshold, groups].filter((value) => value !== null).length
+  const place = weightAt[section] ?? 0
+  return named + stated + place
 }
 
 /** "Experiment 1", "Study 2a", "Trial B" */
@@ -54,11 +63,18 @@ function sumsUp({ section, procedure }: ReadClaim, view: ClaimView): boolean {
   return section === 'abstract' || section === 'discussion' || (vague && section !== 'methods')
 }
 
+/** "FDR" alone may stand for any of the procedures that control it. */
+const falseDiscovery = new Set<ClaimedProcedure>(['fdr', 'bh', 'by', 'bky', 'storey'])
+
 function isCompatible(view: ClaimView, claim: ReadClaim): boolean {
   const sameProcedure =
     claim.procedure === view.procedure ||
     claim.procedure === 'unspecified' ||
-    view.procedure === 'unspecified'
+    view.procedure === 'unspecified' ||
+    ([claim.procedure, view.procedure].includes('fdr') &&
+      falseDiscovery.has(claim.procedure) &&
+      falseDiscovery.has(view.procedure))
+  if (sumsUp(claim, view)) return sameProcedure
   const number = experimentIn(claim.sentence)
   return (
     sameProcedure &&
