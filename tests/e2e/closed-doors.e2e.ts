@@ -55,7 +55,11 @@ test("another's draft does not exist for anyone else", async ({ browser }) => {
       `/manuscripts/${id}/record`,
       `/api/manuscripts/${id}`,
       `/api/manuscripts/${id}/audit`,
+      `/api/manuscripts/${id}/progress`,
+      `/api/manuscripts/${id}/points`,
       `/api/manuscripts/${id}/comments`,
+      `/api/manuscripts/${id}/verdict`,
+      `/api/manuscripts/${id}/letter`,
     ]) {
       expect(await statusOf(page, path), `${key} ${path}`).toBe(404)
     }

@@ -120,6 +120,7 @@ test('a manuscript goes from hand-in to the letter that its submitter reads', as
       .getByRole('link', { name: /verdict/i })
       .first()
       .click()
+    await administrator.waitForURL(/\/mailbox\/.+/)
     await expect(administrator.getByText(personOf('submitter').email)).toBeVisible()
     await administrator.getByRole('tab', { name: 'Text' }).click()
     await expect(administrator.getByText(/not supported/).first()).toBeVisible()
