@@ -19,7 +19,7 @@ const MOST = 75
 /** Two panes side by side with a movable border from 1,024 px; one of them at a time below that. */
 export function SplitPanes({ left, right, leftName, rightName, shown, onShown }: SplitPanesProps) {
   const frame = useRef<HTMLDivElement>(null)
-  const [share, setShare] = useState(45)
+  const [share, setShare] = useState(42)
   const drag = (event: PointerEvent<HTMLDivElement>) => {
     if (!event.currentTarget.hasPointerCapture(event.pointerId) || !frame.current) return
     const { left: from, width } = frame.current.getBoundingClientRect()

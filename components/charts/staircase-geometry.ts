@@ -2,6 +2,7 @@ import { scaleLinear, scaleLog } from '@visx/scale'
 import type { Claim, Decision, Family, Report } from '@/lib/checks/types'
 import type { Outcome } from '@/lib/checks/vocabulary'
 import { outcomeOfDecision } from './outcome-of-decision'
+import type { Interval } from './raw-intervals'
 import { spreadLabels } from './spread-labels'
 import { procedureNames, steppedFor, thresholdOf, type Stepped } from './thresholds'
 
@@ -43,20 +44,30 @@ export type StaircaseGeometry = {
 
 const others: readonly Stepped[] = ['bonferroni', 'sidak', 'holm', 'bh', 'by']
 
-/** Everything that the picture of a family needs, in pixels of `frame`; no drawing. */
+const noRaw: ReadonlyMap<string, Interval> = new Map()
+
+type Entry = Interval & { report: Report; decision: Decision | null; value: number }
+
+/**
+ * Everything that the picture of a family needs, in pixels of `frame`; no drawing. One dot a comparison: its
+ * unadjusted p-value against the thresholds where that is known (`raw`, by the decision's report), else the
+ * adjusted ones against alpha.
+ */
 export function staircaseGeometry(
   family: Family,
   reports: readonly Report[],
   claim: Claim | null,
   alpha: number,
   frame: StaircaseFrame,
+  raw: ReadonlyMap<string, Interval> = noRaw,
 ): StaircaseGeometry {
-  const members = family.members
-    .map((id) => reports.find((report) => report.id === id))
-    .filter((report): report is Report => report !== undefined)
-  const rawMembers = members.filter((report) => report.scale !== 'adjusted')
-  const adjustedOnly = rawMembers.length === 0
-  const shown = [...(adjustedOnly ? members : rawMembers)].sort((a, b) => a.value - b.value || a.low - b.low)
+  const members = listMembers(family, reports)
+  const onThresholds = claim === null || claim.procedure === 'none' || steppedFor(claim.procedure) !== null
+  const rawEntries = onThresholds ? members.flatMap((member) => rawEntry(member, raw)) : []
+  const adjustedOnly = rawEntries.length === 0
+  const shown = (adjustedOnly ? members.map(printedEntry) : rawEntries).sort(
+    (a, b) => a.value - b.value || a.low - b.low,
+  )
   const m = Math.max(family.m.due ?? family.m.printed, shown.length, 1)
   const lastRank = Math.min(m, Math.max(shown.length * 2, 12))
   const narrow = frame.width < 480
@@ -85,7 +96,7 @@ export function staircaseGeometry(
   return {
     frame,
     plot,
-    dots: shown.map((report, index) => placeDot(report, index + 1, family, floor, xScale, yScale)),
+    dots: shown.map((entry, index) => placeDot(entry, index + 1, family, floor, xScale, yScale)),
     lines: lines.map(({ key, label, kind, points, end }, index) => ({
       key,
       label,
@@ -96,9 +107,37 @@ export function staircaseGeometry(
     })),
     ticks: decades(floor).map((value) => ({ y: yScale(value), label: tickLabel(value) })),
     ranks: rankTicks(lastRank, narrow ? 6 : 12).map((rank) => ({ x: xScale(rank), label: String(rank) })),
-    apart: adjustedOnly ? [] : members.filter((report) => report.scale === 'adjusted'),
+    apart: adjustedOnly
+      ? []
+      : members.flatMap(({ report }) => (shown.some((one) => one.report === report) ? [] : [report])),
     adjustedOnly,
   }
+}
+
+type Member = { report: Report; decision: Decision | null }
+
+/** One a comparison, as decided; the members themselves where nothing was decided. */
+function listMembers(family: Family, reports: readonly Report[]): Member[] {
+  const byId = new Map(reports.map((report) => [report.id, report]))
+  const entries: { id: string; decision: Decision | null }[] =
+    family.decisions.length > 0
+      ? family.decisions.map((decision) => ({ id: decision.report, decision }))
+      : family.members.map((id) => ({ id, decision: null }))
+  return entries.flatMap(({ id, decision }) => {
+    const report = byId.get(id)
+    return report ? [{ report, decision }] : []
+  })
+}
+
+function printedEntry({ report, decision }: Member): Entry {
+  return { report, decision, low: report.low, high: report.high, value: report.value }
+}
+
+function rawEntry(member: Member, raw: ReadonlyMap<string, Interval>): Entry[] {
+  const { report, decision } = member
+  const behind = report.scale === 'raw' ? undefined : raw.get(report.id)
+  if (behind) return [{ report, decision, ...behind, value: Math.sqrt(behind.low * behind.high) }]
+  return report.scale === 'adjusted' ? [] : [printedEntry(member)]
 }
 
 type DraftLine = {
@@ -154,8 +193,8 @@ const shortNames: Record<Stepped, string> = {
 }
 
 /** The lowest decade that is drawn: below every printed value and threshold, between 1e-12 and 1e-3. */
-function floorOf(shown: readonly Report[], lines: readonly DraftLine[], lastRank: number): number {
-  const values = shown.flatMap((report) => [report.low, report.value, report.high])
+function floorOf(shown: readonly Entry[], lines: readonly DraftLine[], lastRank: number): number {
+  const values = shown.flatMap((entry) => [entry.low, entry.value, entry.high])
   const steps = lines.flatMap((line) => [line.at(1), line.at(lastRank)])
   const smallest = Math.min(...[...values, ...steps].filter((value) => value > 0), 1)
   const exponent = Math.floor(Math.log10(smallest) - 0.15)
@@ -177,17 +216,17 @@ function stepPoints(at: (rank: number) => number, lastRank: number, x: Scale, y:
 }
 
 function placeDot(
-  report: Report,
+  entry: Entry,
   rank: number,
   family: Family,
   floor: number,
   x: Scale,
   y: Scale,
 ): StaircaseDot {
-  const decision = family.decisions.find((one) => one.report === report.id) ?? null
-  const middle = report.value > 0 ? report.value : report.high
-  const top = y(Math.max(report.high, floor))
-  const bottom = y(Math.max(report.low, floor))
+  const { report, decision } = entry
+  const middle = entry.value > 0 ? entry.value : entry.high
+  const top = y(Math.max(entry.high, floor))
+  const bottom = y(Math.max(entry.low, floor))
   return {
     report,
     decision,
@@ -195,7 +234,7 @@ function placeDot(
     x: x(rank),
     y: y(Math.max(middle, floor)),
     whisker: bottom - top > 1 ? { top, bottom } : null,
-    openBelow: report.low < floor,
+    openBelow: entry.low < floor,
     outcome: decision ? outcomeOfDecision(decision, family) : null,
   }
 }

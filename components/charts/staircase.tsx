@@ -2,6 +2,7 @@ import { LinePath } from '@visx/shape'
 import type { Claim, Family, Report } from '@/lib/checks/types'
 import { OutcomeRing } from './outcome-ring'
 import { describeDot, nameOfReport } from './describe-dot'
+import type { Interval } from './raw-intervals'
 import { staircaseGeometry, type StaircaseDot, type StaircaseLine } from './staircase-geometry'
 
 export type StaircaseProps = {
@@ -9,6 +10,8 @@ export type StaircaseProps = {
   reports: readonly Report[]
   claim: Claim | null
   alpha: number
+  /** The unadjusted p-values behind the printed ones, where they are known. */
+  raw?: ReadonlyMap<string, Interval>
   /** Unique on the page: names the picture's title and description. */
   id: string
   chosen?: string | null
@@ -34,7 +37,7 @@ const MOST_STOPS = 40
 
 function Picture(props: StaircaseProps & { width: number; height: number }) {
   const { family, reports, claim, alpha, id, width, height } = props
-  const picture = staircaseGeometry(family, reports, claim, alpha, { width, height })
+  const picture = staircaseGeometry(family, reports, claim, alpha, { width, height }, props.raw)
   const { plot, dots } = picture
   const stops = dots.length <= MOST_STOPS
   const radius = Math.max(1.8, Math.min(4.5, (plot.right - plot.left) / (dots.length * 3 + 1)))
@@ -198,7 +201,7 @@ function Dot(props: {
           strokeWidth={2}
           className={`stroke-tide group-focus-visible:opacity-100 ${props.chosen ? '' : 'opacity-0'}`}
         />
-        <DotBody called={report.called} radius={radius} />
+        <DotBody called={callOf(report, decision)} radius={radius} />
         {dot.outcome && <OutcomeRing outcome={dot.outcome} radius={radius + 3.5} />}
       </g>
       <g
@@ -215,6 +218,12 @@ function Dot(props: {
       </g>
     </g>
   )
+}
+
+/** As the judgement took it, which looks at every place of the comparison; else as it stands with the number. */
+function callOf(report: Report, decision: StaircaseDot['decision']): Report['called'] {
+  if (decision === null || decision.called === null) return report.called
+  return decision.called ? 'significant' : 'not significant'
 }
 
 function DotBody({ called, radius }: { called: Report['called']; radius: number }) {

@@ -1,7 +1,9 @@
 'use client'
 
+import { useMemo } from 'react'
 import type { Family } from '@/lib/checks/types'
 import { procedureNames } from '../charts/thresholds'
+import { rawIntervals } from '../charts/raw-intervals'
 import { Staircase } from '../charts/staircase'
 import { StaircaseTable } from '../charts/staircase-table'
 import { isSame } from '../bench/audit-index'
@@ -18,7 +20,9 @@ export function FamilySheet({ family, number }: { family: Family; number: number
   const { index, chosen, show, comment } = useBench()
   const claim = family.claim ? (index.claims.get(family.claim) ?? null) : null
   const alpha = claim?.alpha ?? index.audit.alpha.value
-  const reports = family.members.flatMap((id) => index.reports.get(id) ?? [])
+  const judged = family.decisions.map((decision) => decision.report)
+  const reports = [...new Set([...family.members, ...judged])].flatMap((id) => index.reports.get(id) ?? [])
+  const raw = useMemo(() => rawIntervals(family, index.reports, index.statistics), [family, index])
   const target = { kind: 'family' as const, id: family.id }
   const page = claim?.place.page ?? reports[0]?.place.page ?? null
   return (
@@ -94,6 +98,7 @@ export function FamilySheet({ family, number }: { family: Family; number: number
               reports={reports}
               claim={claim}
               alpha={alpha}
+              raw={raw}
               chosen={chosen?.kind === 'report' ? chosen.id : null}
               onPick={(id) => show({ kind: 'report', id })}
             />
@@ -101,7 +106,7 @@ export function FamilySheet({ family, number }: { family: Family; number: number
               <StaircaseLegend />
               <details className="mt-1 print:hidden">
                 <summary className="text-tide">The picture as a table</summary>
-                <StaircaseTable family={family} reports={reports} claim={claim} alpha={alpha} />
+                <StaircaseTable family={family} reports={reports} claim={claim} alpha={alpha} raw={raw} />
               </details>
             </figcaption>
           </figure>

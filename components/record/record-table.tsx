@@ -2,6 +2,7 @@ import Link from 'next/link'
 import type { RecordRow } from '@/db/queries/record'
 import { Table, Tbody, Td, Th, Thead, Tr } from '../ui/table'
 import { Time } from '../ui/time'
+import { RecordDetail } from './record-detail'
 
 type RecordTableProps = {
   rows: readonly RecordRow[]
@@ -51,9 +52,7 @@ export function RecordTable({ rows, showManuscript = true }: RecordTableProps) {
             ) : null}
             <Td label="Who">{row.actorName}</Td>
             <Td label="Detail" className="text-ink-soft">
-              {Object.entries(row.detail)
-                .map(([name, value]) => `${name}: ${String(value)}`)
-                .join(' · ')}
+              <RecordDetail detail={row.detail} />
             </Td>
           </Tr>
         ))}

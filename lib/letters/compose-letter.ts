@@ -104,7 +104,7 @@ function pointParagraphs(point: LetterPoint, number: number, cite: Letter['cite'
     ...(point.quote === '' ? [] : [`> ${escapeMarkdown(point.quote)}`]),
     ...(point.says === '' ? [] : [`What we see: ${escapeMarkdown(point.says)}`]),
     `${point.severity === 'note' ? 'For your information' : 'What we ask'}: ${escapeMarkdown(point.asks)}`,
-    ...(cited.length === 0 ? [] : [`See: ${cited.map(escapeMarkdown).join(' · ')}`]),
+    ...(cited.length === 0 ? [] : [`See: ${cited.map(escapeMarkdown).join(' ')}`]),
   ]
 }
 

@@ -45,10 +45,19 @@ test('a manuscript goes from hand-in to the letter that its submitter reads', as
     await expect(submitter.getByText('ready', { exact: true }).first()).toBeVisible({ timeout: 90_000 })
   })
 
+  let reference = ''
   const editor = await enterAs(browser, 'editor')
   await test.step('the editor finds it on the docket and assigns it', async () => {
     await editor.goto('/docket')
     await editor.getByRole('link', { name: title }).click()
+    reference =
+      (
+        await editor
+          .getByText(/THC-\d{4}-\d{4}/)
+          .first()
+          .textContent()
+      )?.match(/THC-\d{4}-\d{4}/)?.[0] ?? ''
+    expect(reference).not.toBe('')
     await editor.getByRole('button', { name: 'Assign', exact: true }).click()
     const dialog = editor.getByRole('dialog')
     await dialog.getByRole('radio', { name: personOf('reviewer').name }).check()
@@ -110,16 +119,12 @@ test('a manuscript goes from hand-in to the letter that its submitter reads', as
 
   await test.step('the mail arrives at the SMTP server', async () => {
     const administrator = await enterAs(browser, 'administrator')
+    const mail = administrator.getByRole('link', { name: new RegExp(`verdict on ${reference}`) }).first()
     await expect(async () => {
       await administrator.goto('/mailbox')
-      await expect(administrator.getByRole('link', { name: /verdict/i }).first()).toBeVisible({
-        timeout: 2000,
-      })
+      await expect(mail).toBeVisible({ timeout: 2000 })
     }).toPass({ timeout: 60_000 })
-    await administrator
-      .getByRole('link', { name: /verdict/i })
-      .first()
-      .click()
+    await mail.click()
     await administrator.waitForURL(/\/mailbox\/.+/)
     await expect(administrator.getByText(personOf('submitter').email)).toBeVisible()
     await administrator.getByRole('tab', { name: 'Text' }).click()
