@@ -47,16 +47,15 @@ export function findClaims(laidOut: LaidOut, sentences: readonly Sentence[]): Re
   const claims: ReadClaim[] = []
   sentences.forEach((sentence, i) => {
     if (NO_PROSE.test(sentence.text)) return
-    const neighbours = [sentences[i - 1], sentences[i + 1]].filter(
-      (other): other is Sentence =>
-        other?.paragraph === sentence.paragraph && findProcedures(other.text).length === 0,
-    )
+    const listBeside = () =>
+      [sentences[i - 1], sentences[i + 1]]
+        .filter(
+          (other): other is Sentence =>
+            other?.paragraph === sentence.paragraph && findProcedures(other.text).length === 0,
+        )
+        .map(({ text }) => text)
     claims.push(
-      ...claimsOf(
-        sentence.text,
-        sentence.section,
-        neighbours.map(({ text }) => text),
-      ).map((claim) => ({
+      ...claimsOf(sentence.text, sentence.section, listBeside).map((claim) => ({
         ...claim,
         id: '',
         offset: sentence.start,
@@ -76,7 +75,7 @@ export function findClaims(laidOut: LaidOut, sentences: readonly Sentence[]): Re
         boxes: [],
       }
       claims.push(
-        ...claimsOf(text, 'results', []).map((claim) => ({
+        ...claimsOf(text, 'results', () => []).map((claim) => ({
           ...claim,
           id: '',
           offset: table.offset,
@@ -97,20 +96,26 @@ export function findClaims(laidOut: LaidOut, sentences: readonly Sentence[]): Re
 
 type Bare = Omit<ReadClaim, 'id' | 'offset' | 'section' | 'place'>
 
-/** The claims of one sentence (folded). `beside` are the sentences before and after it in its paragraph. */
-export function claimsOf(text: string, section: SectionKind, beside: readonly string[]): Bare[] {
+/**
+ * The claims of one sentence (folded). `listBeside` gives the sentences before and after it in its paragraph; it is
+ * asked only where there is a claim.
+ */
+export function claimsOf(text: string, section: SectionKind, listBeside: () => readonly string[]): Bare[] {
   if (isCitedWork(text, section)) return []
   const procedures = findClaimed(text, section)
-  const context = [text, ...beside]
+  if (procedures.length === 0) return []
+  const beside = listBeside()
+  const groups = first([text, ...beside], findGroupCount)
+  const alpha = findAlpha(text)
   return procedures.map((procedure) => {
     const m = procedure === 'none' ? null : countTests(text, beside)
     const threshold = procedure === 'none' ? null : findThreshold(text)
     return {
       procedure,
       m,
-      alpha: findAlpha(text),
+      alpha,
       threshold,
-      groups: first(context, findGroupCount),
+      groups,
       sentence: text.trim(),
       scope: findScope(text, procedure),
       errorRate: findErrorRate(text),
@@ -177,13 +182,13 @@ export function findGeneralAlpha(
     .filter(
       ({ text, section }) => section !== 'references' && section !== 'introduction' && !NO_PROSE.test(text),
     )
-    .map((sentence) => ({ sentence, value: findAlpha(sentence.text) }))
-    .filter((found): found is { sentence: Sentence; value: number } => found.value !== null)
-    .filter(({ sentence }) =>
+    .filter(({ text }) =>
       /signific|alpha|α|level|error|threshold|\b[pPq][\s-]?(?:values?)?\s?[<≤]|below|compared with/i.test(
-        sentence.text,
+        text,
       ),
     )
+    .map((sentence) => ({ sentence, value: findAlpha(sentence.text) }))
+    .filter((found): found is { sentence: Sentence; value: number } => found.value !== null)
     .map((found) => ({ ...found, weight: weigh(found.sentence) }))
     .filter(({ weight }) => weight > 0)
     .sort((a, b) => b.weight - a.weight || a.sentence.start - b.sentence.start)

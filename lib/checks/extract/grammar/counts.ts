@@ -20,6 +20,8 @@ const DIVISION = new RegExp(
   String.raw`(?<alpha>(?:0?[.,]\d+|\d+(?:\.\d+)?\s?%|α|alpha))\s?(?:\/|÷|divided by)\s?(?:the number of (?:\w+\s){0,3}\(?)?(?<n>${COUNT})(?![\d.]*\s?[A-Za-z]{0,2}\/)`,
   'i',
 )
+/** What no division is without. */
+const DIVIDES = /[/÷]|divided by/i
 /** 'divided by six', 'divided by the number of comparisons (six)', 'dividing 0.05 by 6', 'dividing α by the number of tests (n = 6)'. */
 const DIVIDED = new RegExp(
   String.raw`\bdivid(?:ed|ing)\b[^.;]{0,40}?\bby\s(?:the\s(?:total\s)?number of [a-z\s-]{0,40}\(?\s?(?:[mknN]\s?=\s?)?)?(?<n>${COUNT})\b`,
@@ -45,6 +47,7 @@ const FOR_THESE = new RegExp(
 export function findDivision(
   text: string,
 ): { alpha: number | null; m: number; end: number; start: number } | null {
+  if (!DIVIDES.test(text)) return null
   const match = DIVISION.exec(text)
   const m = parseCount(match?.groups?.n ?? '')
   if (!match || m === null || m < 1) return null

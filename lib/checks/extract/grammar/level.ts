@@ -40,6 +40,9 @@ const GENERAL: readonly RegExp[] = [
 /** 'Cronbach's α = .81', power and reliability, confidence, and effect sizes are no levels. */
 const NO_LEVEL = /cronbach|reliab|internal consistency|mcdonald|coefficient alpha/i
 
+/** Every printed level has one of these: '.05', '5 %', '5 per cent', '2 × 10-4'; a sentence without is not searched. */
+const HAS_LEVEL = /[.,]\d|\d\s?(?:%|per\s?cent|[×x]\s?10)/i
+
 /** What may be a level: above 0, at most 0.2. */
 export function toLevel(printed: string): number | null {
   const percent = /%|per\s?cent/i.test(printed)
@@ -51,7 +54,7 @@ export function toLevel(printed: string): number | null {
 
 /** The general level of significance that a sentence states; null where it states none or only a divided one. */
 export function findAlpha(text: string): number | null {
-  if (NO_LEVEL.test(text)) return null
+  if (!HAS_LEVEL.test(text) || NO_LEVEL.test(text)) return null
   const division = findDivision(text)
   if (division) return division.alpha
   for (const form of GENERAL) {
@@ -99,6 +102,7 @@ export function findThreshold(text: string): number | null {
     if (level !== null) return level
     return division.alpha === null ? null : division.alpha / division.m
   }
+  if (!HAS_LEVEL.test(text)) return null
   for (const form of LOWERED) {
     const level = toLevel(form.exec(text)?.groups?.level ?? '')
     if (level !== null) return level
