@@ -2,6 +2,7 @@ import { eq, sql } from 'drizzle-orm'
 import { createTransport } from 'nodemailer'
 import { transact, type Db, type Tx } from '@/db/client'
 import { mails } from '@/db/schema'
+import { setAsMail } from '@/lib/letters/set-as-mail'
 import { hopeless, type JobCall, type Write } from '@/lib/jobs/kind'
 import { recordEvent } from '@/lib/record/record-event'
 import { systemActor } from '@/lib/rules/roles'
@@ -26,7 +27,7 @@ export async function sendMail({ db, settings, subjectId }: JobCall): Promise<Wr
       to: mail.recipient,
       subject: mail.subject,
       text: mail.text,
-      html: mail.html,
+      html: setAsMail(mail.subject, mail.html),
       messageId: mail.messageId,
       date: new Date(mail.createdAt),
       headers: { 'Auto-Submitted': 'auto-generated' },
