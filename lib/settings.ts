@@ -53,7 +53,7 @@ export function getSettings(env: Record<string, string | undefined> = process.en
   return {
     database: e.ASSIZE_DATABASE === ':memory:' ? e.ASSIZE_DATABASE : resolve(e.ASSIZE_DATABASE),
     uploads: resolve(e.ASSIZE_UPLOADS),
-    uploadLimitBytes: Math.round(e.ASSIZE_UPLOAD_LIMIT_MB * 1024 * 1024),
+    uploadLimitBytes: Math.round(e.ASSIZE_UPLOAD_LIMIT_MB * 1_000_000),
     url: e.ASSIZE_URL.replace(/\/+$/, ''),
     secret: e.ASSIZE_SECRET ?? null,
     smtpUrl: e.ASSIZE_SMTP_URL,

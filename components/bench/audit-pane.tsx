@@ -7,6 +7,7 @@ import { CommentsSection } from '../comments/comments-section'
 import { useComments, type CommentSubject } from '../comments/use-comments'
 import { FamiliesSection } from '../families/families-section'
 import { FindingsSection } from '../findings/findings-section'
+import { Cautions } from './cautions'
 import { useBench } from './bench-state'
 import { ClaimsSection } from './claims-section'
 import { NumbersSection } from './numbers-section'
@@ -50,9 +51,11 @@ export function AuditPane(props: AuditPaneProps) {
       </Tabs.List>
       <Pane value="families" title="Families">
         <FamiliesSection />
+        <Cautions />
       </Pane>
       <Pane value="findings" title="Findings">
         <FindingsSection />
+        <Cautions />
       </Pane>
       <Pane value="numbers" title="Numbers">
         <NumbersSection />
