@@ -69,6 +69,7 @@ export function environment(folder, port, mailPort) {
           ASSIZE_MAILBOX: join(folder, 'mailbox'),
           ASSIZE_MAILBOX_PORT: String(mailPort),
         }),
+    ASSIZE_LOG_LEVEL: process.env.ASSIZE_LOG_LEVEL ?? 'warn',
     NEXT_TELEMETRY_DISABLED: '1',
   }
 }
