@@ -172,13 +172,22 @@ function settleCalls(
     if (worded) last = worded
     if (p.markOnly) return 'not significant'
     // the value heads its clause: 'p = .02 for A', or the verb follows: '(p = .02) differed'
-    const following: WordedCall = worded ? null : findCall(clause?.after.split(/[,;(]/)[0] ?? '', hidden)
+    const next = clause?.after.split(/[,;(]/)[0] ?? ''
+    const following: WordedCall = worded && !PREDICATE.test(next) ? null : findCall(next, hidden)
     if (worded?.strength === 'strong') return worded.call
+    // 'The difference between A and B (p = .012) was not significant': the verb decides, not the noun before it
+    if (worded && following?.strength === 'strong') {
+      last = following
+      return following.call
+    }
     const candidates = worded ? [worded] : [following, earlier, tail]
     const call = candidates.find((other) => other !== null && !isAgainst(other.call, p, alpha))
     return call?.call ?? null
   })
 }
+
+/** The verb of the clause follows the bracket with the value: ') was not significant', ') did not reach'. */
+const PREDICATE = /^\s*\)\s*(?:was|were|is|are|did|does|do|failed|fails|remained|reached|missed)\b/
 
 /** Whether the printed value itself contradicts the call. */
 function isAgainst(call: 'significant' | 'not significant', p: PrintedP, alpha: number): boolean {
@@ -212,11 +221,12 @@ function findComparison(
       return joinFurther(previous, further, before)
   }
   const [a, b, more] = findKnown(text, names.groups)
-  if (a && b && !more) return [a, b]
+  const isControl = (name: string) => name.toLowerCase() === names.control?.toLowerCase()
   // one treatment alone, where all are compared with one control
-  return only && !other && names.control && only.toLowerCase() !== names.control.toLowerCase()
-    ? [only, names.control]
-    : null
+  const alone: [string, string] | null =
+    only && !other && names.control && !isControl(only) ? [only, names.control] : null
+  // '… for brick (p = .37), nor for turf (p = .70)': two treatments of one sentence are no pair there
+  return a && b && !more && (!alone || isControl(a) || isControl(b)) ? [a, b] : alone
 }
 
 /** A further group stands against the control of the pair before, or, after 'than' or 'from', against its first. */
