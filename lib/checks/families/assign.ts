@@ -79,6 +79,20 @@ const general =
 /** Among several clusters a claim needs more than its mere presence to be about one of them. */
 const leastFit = 0.5
 
+/** "p-values are uncorrected", "uncorrected P values": said of the values printed, not of what was done with them. */
+const scaleOnly =
+  /\bp[\s-]?values?\s(?:are|were)\s(?:\w+\s){0,2}?(?:unadjusted|uncorrected|not (?:adjusted|corrected))|\b(?:unadjusted|uncorrected)\sp[\s-]?values?\b/i
+
+function saysScaleOnly({ procedure, all }: ClaimView): boolean {
+  return procedure === 'none' && all.every(({ sentence }) => scaleOnly.test(sentence))
+}
+
+/** Whether the claim lowers the level for as many tests as the cluster has. */
+function isLoweredFor({ procedure, threshold, m }: ClaimView, cluster: Cluster): boolean {
+  const { shown, pairs } = countsOf(cluster)
+  return procedure !== 'none' && threshold !== null && m !== null && m >= 2 && (m === shown || m === pairs)
+}
+
 /** For each cluster the claim that speaks for it, or null. */
 export function assignClaims(clusters: readonly Cluster[], views: readonly ClaimView[]): Assigned[] {
   const words = clusters.map(wordsOfCluster)
@@ -87,6 +101,9 @@ export function assignClaims(clusters: readonly Cluster[], views: readonly Claim
     clusters.map((cluster, i) => score(view, cluster, words[i] ?? new Set(), rarity)),
   )
   const assigned: Assigned[] = clusters.map(() => null)
+  // that the printed p-values are the raw ones is no denial where the level was lowered for just these tests
+  const describes = (view: ClaimView, cluster: Cluster) =>
+    saysScaleOnly(view) && views.some((other) => isLoweredFor(other, cluster))
   const claimsLeft = new Set(views.keys())
   // each claim goes to the cluster it fits best, the clearest fit first; a cluster keeps the claim that fits it best
   const all = table.flatMap((row, v) => row.map((points, c) => ({ v, c, points })))
@@ -94,6 +111,7 @@ export function assignClaims(clusters: readonly Cluster[], views: readonly Claim
     const view = views[v]
     if (!view || assigned[c] || !claimsLeft.has(v)) continue
     if (clusters.length > 1 && points < leastFit) continue
+    if (clusters.some((cluster, i) => i === c && describes(view, cluster))) continue
     assigned[c] = { view, own: true }
     claimsLeft.delete(v)
   }

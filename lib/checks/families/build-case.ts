@@ -41,6 +41,7 @@ export function buildCase(draft: FamilyDraft, setting: Setting, number: number):
   const exemption = findExemption(cluster, design, effective, setting)
   const given = 2 * printed.filter((range) => range !== null).length > printed.length
   const procedure = !effective && !exemption && given && !assigned ? 'any' : yardstickOf(effective, exemption)
+  const instead = procedure === 'holm' && claimed === 'bh' ? claimed : null
   const trusted = claimed !== null && found.some((fit) => fit.procedure === claimed && fit.m === design.due)
 
   const judgeAt = (m: number) => {
@@ -88,7 +89,7 @@ export function buildCase(draft: FamilyDraft, setting: Setting, number: number):
         why: design.why,
       },
       outcome,
-      why: whyOf(comparisons, outcome, { procedure, design, alpha, exemption, under }),
+      why: whyOf(comparisons, outcome, { procedure, design, alpha, exemption, instead, under }),
       decisions: comparisons.map(({ items, called, due, significant, survivesUpTo: upTo }) => ({
         report: leadOf({ items })?.id ?? '',
         called,

@@ -1,5 +1,5 @@
 import { agreement, isIdentified, isSamePrint } from './agreement'
-import type { Cluster, Comparison, Item } from './comparison'
+import type { Cluster, Comparison, Item, Shown } from './comparison'
 import { isSameName } from './names'
 
 /**
@@ -121,12 +121,15 @@ function addTo(comparisons: Comparison[], kind: Cluster['kind'], item: Item) {
     found.items.push(item)
     return
   }
-  const name = kind === 'pairs' || item.outcome === null ? (item.pair?.join(' – ') ?? null) : item.outcome
-  const label = name ?? item.report.place.quote
-  const key = comparisons.some((comparison) => comparison.key === label)
-    ? `${label} ${item.report.id}`
-    : label
-  comparisons.push({ key, label, pair: item.pair, outcome: item.outcome, items: [item] })
+  const { pair, outcome, shown, report } = item
+  const name = nameTest(kind, item) ?? report.place.quote
+  const label = nameTest(kind, shown) ?? report.place.quote
+  const key = comparisons.some((comparison) => comparison.key === name) ? `${name} ${report.id}` : name
+  comparisons.push({ key, label, shown, pair, outcome, items: [item] })
+}
+
+function nameTest(kind: Cluster['kind'], { pair, outcome }: Shown): string | null {
+  return kind === 'pairs' || outcome === null ? (pair?.join(' – ') ?? null) : outcome
 }
 
 function isSameTest(kind: Cluster['kind'], comparison: Comparison, item: Item): boolean {

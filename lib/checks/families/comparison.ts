@@ -1,6 +1,9 @@
 import type { PdfTable, ReadReport, ReadStatistic } from '../types'
 import type { Interval } from './interval'
 
+/** What a test is of, for people: its pair (in the order of the canonical pair) and its outcome as printed. */
+export type Shown = { pair: [string, string] | null; outcome: string | null }
+
 /**
  * One reported p-value as the judgement handles it. `pair` holds canonical names in alphabetical order; `block` is
  * the place it stands in (a heading, a table), in which neighbours are taken to belong together.
@@ -10,13 +13,18 @@ export type Item = {
   statistic: ReadStatistic | null
   pair: [string, string] | null
   outcome: string | null
+  shown: Shown
   block: string
 }
 
-/** All that is reported on one null hypothesis: duplicates in abstract, text, tables and results file. */
+/**
+ * All that is reported on one null hypothesis: duplicates in abstract, text, tables and results file. `key` tells it
+ * from the others of its family; `label` is the same for people, with names as the manuscript prints them.
+ */
 export type Comparison = {
   key: string
   label: string
+  shown: Shown
   pair: [string, string] | null
   outcome: string | null
   items: Item[]

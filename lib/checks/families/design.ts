@@ -21,6 +21,11 @@ export function inWords(n: number): string {
   return numberWords[n] ?? String(n)
 }
 
+/** "one test is", "six tests are" */
+export function count(n: number, one: string, several: string): string {
+  return `${inWords(n)} ${n === 1 ? one : several}`
+}
+
 /**
  * The design of a family. `alternatives`: numbers of tests between which the text leaves the choice, from joining the
  * same pairs for several outcomes; empty where it does not.
@@ -66,14 +71,29 @@ function ofPairs(cluster: Cluster, view: ClaimView | null, remarks: Remarks): De
   if (star && (manyToOne || !saysAll)) {
     const due = Math.max(k - 1, view?.m ?? 0)
     const more = due > k - 1 ? `, and the manuscript counts ${due}` : ''
-    return settled('many-to-one', groups, due, `${inWords(k - 1)} groups compared with ${center}${more}`)
+    return settled(
+      'many-to-one',
+      groups,
+      due,
+      `${count(k - 1, 'group', 'groups')} compared with ${printedName(cluster, center)}${more}`,
+    )
   }
   if (saysAll && isNumberOfGroups(k, view, remarks)) {
     return everyPair(groups, k, ', and the manuscript says that all were compared')
   }
   const due = Math.max(pairs.length, view?.m ?? 0)
   const counted = due > pairs.length ? `; the manuscript counts ${due}` : ''
-  return settled('contrasts', groups, due, `${inWords(pairs.length)} comparisons are reported${counted}`)
+  return settled(
+    'contrasts',
+    groups,
+    due,
+    `${count(pairs.length, 'comparison is', 'comparisons are')} reported${counted}`,
+  )
+}
+
+function printedName({ comparisons }: Cluster, group: string): string {
+  const found = comparisons.find(({ pair }) => pair?.includes(group))
+  return found?.shown.pair?.[found.pair?.indexOf(group) ?? 0] ?? group
 }
 
 function everyPair(groups: string[], k: number, more = ''): Design {
@@ -108,15 +128,20 @@ function isNumberOfGroups(k: number, view: ClaimView | null, { text, tables }: R
 function ofOutcomes(cluster: Cluster, view: ClaimView | null): Design {
   const shown = cluster.comparisons.length
   const m = view?.m ?? null
-  const counted = `${inWords(shown)} tests are reported`
+  const counted = `${count(shown, 'test is', 'tests are')} reported`
   if (m === null || m === shown) return settled('outcomes', [], shown, counted)
   if (m > shown)
-    return settled('outcomes', [], m, `the manuscript counts ${m} tests, of which ${shown} are shown`)
+    return settled(
+      'outcomes',
+      [],
+      m,
+      `the manuscript counts ${m} tests, of which ${shown} ${shown === 1 ? 'is' : 'are'} shown`,
+    )
   return {
     kind: 'outcomes',
     groups: [],
     due: null,
     alternatives: [m, shown],
-    why: `the manuscript counts ${m} tests; ${shown} are reported together`,
+    why: `the manuscript counts ${m} ${m === 1 ? 'test' : 'tests'}; ${shown} are reported together`,
   }
 }

@@ -1,6 +1,7 @@
-import type { PdfTable, ReadReport, ReadStatistic, Reading } from '../types'
+import type { LaidOut, PdfTable, ReadReport, ReadStatistic, Reading } from '../types'
 import type { Item } from './comparison'
 import { canonicalNames, normaliseName } from './names'
+import { findPrintedNames } from './printed-names'
 
 /** Sections whose p-values are never results of this manuscript. */
 const foreign = new Set(['introduction', 'references'])
@@ -23,7 +24,7 @@ export function findReasonApart(report: ReadReport, statistic: ReadStatistic | n
 }
 
 /** Reports that can be members of a family, with their statistic and with names brought to one form. */
-export function listItems(reading: Reading, tables: readonly PdfTable[]): Item[] {
+export function listItems(reading: Reading, { tables, prose }: LaidOut): Item[] {
   const statisticOf = new Map(reading.statistics.map((statistic) => [statistic.id, statistic] as const))
   const members = reading.reports
     .map((report) => ({ report, statistic: statisticOf.get(report.statistic ?? '') ?? null }))
@@ -34,13 +35,26 @@ export function listItems(reading: Reading, tables: readonly PdfTable[]): Item[]
     pairsOf(members),
     pairsOf(members.filter(({ report }) => report.place.source !== 'text')),
   )
-  return members.map(({ report, statistic }) => ({
-    report,
-    statistic,
-    pair: toPair(report.comparison, canon),
-    outcome: report.outcome === null ? null : normaliseName(report.outcome) || null,
-    block: toBlock(report, tables),
-  }))
+  const names = members.flatMap(({ report }) => [...(report.comparison ?? []), report.outcome ?? ''])
+  const print = findPrintedNames(
+    names.filter((name) => name !== ''),
+    prose.text,
+  )
+  return members.map(({ report, statistic }) => {
+    const pair = toPair(report.comparison, canon)
+    const outcome = report.outcome === null ? null : normaliseName(report.outcome) || null
+    return {
+      report,
+      statistic,
+      pair,
+      outcome,
+      shown: {
+        pair: pair ? [print(pair[0]), print(pair[1])] : null,
+        outcome: outcome === null ? null : print(outcome),
+      },
+      block: toBlock(report, tables),
+    }
+  })
 }
 
 function toPair(comparison: [string, string] | null, canon: (name: string) => string) {

@@ -21,7 +21,7 @@ export function judge(
   laidOut: LaidOut,
   rules: HouseRules,
 ): { families: Family[]; findings: Finding[]; called: Map<string, Call> } {
-  const clusters = clusterItems(listItems(reading, laidOut.tables)).filter(isOfThisManuscript)
+  const clusters = clusterItems(listItems(reading, laidOut)).filter(isOfThisManuscript)
   const views = groupClaims(reading.claims)
   const said = readRemarks(laidOut)
   // with several sets of pairs such a sentence is tied to none of them

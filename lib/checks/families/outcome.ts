@@ -1,7 +1,7 @@
 import { procedureTable } from '../procedures/table'
 import type { Outcome, Procedure } from '../vocabulary'
 import type { Exemption, Judged } from './case'
-import type { Design } from './design'
+import { inWords, type Design } from './design'
 
 /** Calls that are certainly other than the judgement, and calls that it cannot decide. */
 export function countCalls(comparisons: readonly Judged[]): { stated: number; wrong: number; open: number } {
@@ -26,6 +26,8 @@ type Grounds = {
   design: Design
   alpha: number
   exemption: Exemption | null
+  /** The procedure that the manuscript names where the calls are judged by another, as it claims another error rate. */
+  instead: Procedure | null
   under: readonly { m: number; outcome: Outcome }[]
 }
 
@@ -33,6 +35,14 @@ type Grounds = {
 export function nameOf(procedure: Procedure | 'raw' | 'any'): string {
   if (procedure === 'raw') return 'the unadjusted values'
   return procedure === 'any' ? 'any of the common procedures' : procedureTable[procedure].label
+}
+
+/** What an outcome means for the stated calls. */
+export const standing: Record<Outcome, string> = {
+  holds: 'all stated calls stand',
+  fails: 'at least one stated call does not stand',
+  undecidable: 'at least one stated call cannot be decided',
+  uncorrected: 'nothing was corrected',
 }
 
 const exempt: Record<Exemption, string> = {
@@ -47,22 +57,33 @@ const exempt: Record<Exemption, string> = {
 /** One sentence on the outcome. */
 export function whyOf(comparisons: readonly Judged[], outcome: Outcome, grounds: Grounds): string {
   const { stated, wrong, open } = countCalls(comparisons)
-  const { procedure, design, alpha, exemption, under } = grounds
+  const { procedure, design, alpha, exemption, instead, under } = grounds
   const name = nameOf(procedure)
   const by = design.due === null ? name : `${name} with m = ${design.due}`
-  const calls = `${stated} stated ${stated === 1 ? 'call' : 'calls'}`
+  const calls = stated === 1 ? 'the one stated call' : `the ${stated} stated calls`
+  const some = (n: number) => (stated === 1 ? calls : `${inWords(n)} of ${calls}`)
   if (under.length > 0) {
-    const each = under.map(({ m, outcome: found }) => `${found} with m = ${m}`).join(', ')
+    const each = under.map(({ m, outcome: found }) => `with m = ${m} ${standing[found]}`).join(', ')
     return `The text allows more than one family: ${each}.`
   }
   if (outcome === 'uncorrected') {
-    return `${comparisons.length} tests and no correction; by ${by} ${wrong} of ${calls} would not stand.`
+    const start = `${comparisons.length} tests, and no correction was found`
+    if (stated === 0) return `${start}; no call of significance is stated.`
+    if (wrong > 0) return `${start}; by ${by}, ${some(wrong)} at ${alpha} would not stand.`
+    if (open > 0)
+      return `${start}; by ${by}, ${some(open)} could not be decided, and none would certainly fall.`
+    return `${start}; by ${by}, ${stated === 1 ? calls : `all ${stated} stated calls`} would stand all the same.`
   }
-  const reason = exemption ? ` (${exempt[exemption]})` : ''
+  const reason =
+    instead !== null
+      ? ` (${nameOf(instead)} is named, but control of the family-wise error rate is claimed)`
+      : exemption
+        ? ` (${exempt[exemption]})`
+        : ''
   if (outcome === 'fails')
-    return `By ${by}${reason} ${wrong} of ${calls} at ${alpha} ${wrong === 1 ? 'does' : 'do'} not agree.`
+    return `By ${by}${reason}, ${some(wrong)} at ${alpha} ${wrong === 1 ? 'does' : 'do'} not agree.`
   if (outcome === 'undecidable')
-    return `By ${by}${reason} ${open} of ${calls} cannot be decided from what is printed.`
+    return `By ${by}${reason}, ${some(open)} at ${alpha} cannot be decided from what is printed.`
   if (stated === 0) return `No call of significance is stated that could be held against ${by}${reason}.`
-  return `By ${by}${reason} all ${calls} at ${alpha} agree.`
+  return `By ${by}${reason}, ${stated === 1 ? `${calls} at ${alpha} agrees` : `all ${stated} stated calls at ${alpha} agree`}.`
 }

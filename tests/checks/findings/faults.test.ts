@@ -14,7 +14,7 @@ test('raw values held against .05 under a Bonferroni claim are not upheld', () =
   expect(listOutcomes(told)).toEqual(['fails'])
   expect(listFindings(told)).toContain('major call-not-upheld')
   const finding = told.findings.find(({ rule }) => rule === 'call-not-upheld')
-  expect(finding?.says).toContain('concrete – granite (p = .020): 0.12 to 0.123')
+  expect(finding?.says).toContain('concrete – granite (printed p = .020): 0.12 to 0.123')
   expect(finding?.says).not.toContain('0.0128')
 })
 

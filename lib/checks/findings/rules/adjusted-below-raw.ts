@@ -16,7 +16,7 @@ function find({ cases }: Bench): Found[] {
     )
     const entries = below.map(
       ({ comparison, report }) =>
-        `${comparison.label}: adjusted ${showReport(report)}, unadjusted ${comparison.raw ? showRange(comparison.raw) : '?'}`,
+        `${comparison.label}: printed ${showReport(report)}${comparison.raw ? `, unadjusted ${showRange(comparison.raw)}` : ''}`,
     )
     return [
       {
@@ -24,8 +24,8 @@ function find({ cases }: Bench): Found[] {
         family: judged.family.id,
         reports: reportsOf(below.map(({ comparison }) => comparison)),
         place: first.report.place,
-        says: `An adjusted p-value is never smaller than the unadjusted one. ${listSome(entries)}.`,
-        asks: 'Please check these values and give the adjusted ones.',
+        says: `An adjusted p-value is never smaller than the unadjusted one; here it is: ${listSome(entries)}.`,
+        asks: 'Please check these values and give the adjusted p-values.',
         cites: ['dunn'],
       },
     ]

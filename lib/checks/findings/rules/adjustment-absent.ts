@@ -43,7 +43,7 @@ function inFamily(judgedCase: Case): Found[] {
       family: family.id,
       reports: reportsOf(concerned),
       place: (first && leadOf(first)?.place) ?? view.lead.place,
-      says: `The values are given as corrected${named ? ` (${nameOf(named)})` : ''}; ${found.agreeing} of ${found.checked} that can be checked equal the unadjusted p: ${listSome(values)}.`,
+      says: `The values are given as corrected${named ? ` (${nameOf(named)})` : ''}; ${found.agreeing} of the ${found.checked} printed values that can be checked ${found.agreeing === 1 ? 'equals' : 'equal'} the unadjusted p-value: ${listSome(values)}.`,
       asks: `Please give the adjusted values, or label the printed ones as unadjusted and say how the correction was applied.`,
       cites: ['sampl', 'jars-quant'],
     },

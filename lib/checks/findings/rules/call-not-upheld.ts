@@ -13,7 +13,7 @@ function inFamily(judgedCase: Case): Found[] {
   const [first] = wrong
   if (!first) return []
   const values = listSome(wrong.map(showDecision))
-  const implied = wrong.every((comparison) => comparison.implied) ? ' by the level that is stated' : ''
+  const implied = wrong.every((comparison) => comparison.implied) ? ' by the stated level' : ''
   return [
     {
       severity: 'major',
@@ -22,8 +22,8 @@ function inFamily(judgedCase: Case): Found[] {
       place: leadOf(first)?.place ?? null,
       says:
         procedure === 'raw'
-          ? `${count(wrong.length)} called significant${implied} with a printed p at or above ${alpha}: ${values}.`
-          : `${count(wrong.length)} called significant${implied}, and not below ${alpha} by ${showYardstick(judgedCase)}. Adjusted: ${values}.`,
+          ? `${count(wrong.length)} called significant${implied} with a p-value at or above ${alpha}: ${values}.`
+          : `${count(wrong.length)} called significant${implied}, but the adjusted p-value by ${showYardstick(judgedCase)} is not below ${alpha}: ${values}.`,
       asks: `Please align the statements on ${names(wrong.map(({ label }) => label))} with the adjusted values in text, tables and abstract, or describe the correction by which they stand.`,
       cites: ['sampl', ...citeFor(procedure)],
     },

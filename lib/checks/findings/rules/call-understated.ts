@@ -22,8 +22,8 @@ function inFamily(judgedCase: Case): Found[] {
       family: family.id,
       reports: reportsOf(kept),
       place: leadOf(first)?.place ?? null,
-      says: `${kept.length === 1 ? 'One comparison is' : `${kept.length} comparisons are`} called not significant, and below ${alpha} by ${showYardstick(judgedCase)}. Adjusted: ${listSome(kept.map(showDecision))}.`,
-      asks: `Please check the statement on ${kept.length > 4 ? 'these comparisons' : kept.map(({ label }) => label).join(', ')}, or state the level against which it was made.`,
+      says: `${kept.length === 1 ? 'One comparison is' : `${kept.length} comparisons are`} called not significant, but the adjusted p-value by ${showYardstick(judgedCase)} is below ${alpha}: ${listSome(kept.map(showDecision))}.`,
+      asks: `Please check what is said of ${kept.length > 4 ? 'these comparisons' : kept.map(({ label }) => label).join(', ')}, or state the level against which it was made.`,
       cites: ['sampl'],
     },
   ]

@@ -1,7 +1,7 @@
 import type { Bench, Case } from '../../families/case'
-import { inWords } from '../../families/design'
+import { count } from '../../families/design'
 import type { Found, RuleRow } from '../finding'
-import { leadOf, reportsOf } from '../wording'
+import { capitalise, leadOf, reportsOf } from '../wording'
 
 /** A question; a note where the correction counts the missing ones anyway. */
 function find({ cases }: Bench): Found[] {
@@ -19,8 +19,8 @@ function inFamily({ comparisons, design, family, assigned, procedure }: Case): F
       family: family.id,
       reports: reportsOf(comparisons),
       place: (first && leadOf(first)?.place) ?? null,
-      says: `${inWords(comparisons.length)} comparisons are reported; ${design.why}.`.replace(/^./, (c) =>
-        c.toUpperCase(),
+      says: capitalise(
+        `${count(comparisons.length, 'comparison is', 'comparisons are')} reported; ${design.why}.`,
       ),
       asks: `Please report all ${design.due} comparisons with their p-values, or the planned set and where it was fixed.`,
       cites: ['sampl', 'asa-2016'],

@@ -1,6 +1,6 @@
 import type { Bench, Case } from '../../families/case'
 import type { Found, RuleRow } from '../finding'
-import { listSome, leadOf, reportsOf, showReport } from '../wording'
+import { listSome, leadOf, reportsOf, showLevel, showReport } from '../wording'
 
 /** Minor: the double correction is conservative; a call that it changes is found as `call-understated`. */
 function find({ cases }: Bench): Found[] {
@@ -30,7 +30,7 @@ function inFamily({ assigned, alpha, comparisons, series, family }: Case): Found
       family: family.id,
       reports: reportsOf(between),
       place: assigned.view.lead.place,
-      says: `The p-values are already adjusted, and they are held against the lowered level ${threshold} too. Between ${threshold} and ${alpha} and called not significant: ${listSome(values)}.`,
+      says: `The p-values are already adjusted, and they are held against the lowered level ${showLevel(threshold)} too. These lie between ${showLevel(threshold)} and ${alpha} and are called not significant: ${listSome(values)}.`,
       asks: `Please hold adjusted p-values against ${alpha}, or give unadjusted ones with the lowered level.`,
       cites: ['sampl'],
     },

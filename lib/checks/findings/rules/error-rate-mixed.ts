@@ -3,7 +3,7 @@ import { countCalls } from '../../families/outcome'
 import { procedureTable } from '../../procedures/table'
 import type { Procedure } from '../../vocabulary'
 import type { Found, RuleRow } from '../finding'
-import { listSome, reportsOf, showDecision } from '../wording'
+import { capitalise, listSome, reportsOf, showDecision } from '../wording'
 
 /** Major where calls do not stand under control of the rate that is claimed, else minor; a note for the reverse. */
 function find({ cases }: Bench): Found[] {
@@ -26,7 +26,9 @@ function inFamily({ assigned, comparisons, family }: Case): Found[] {
   const { wrong } = countCalls(comparisons)
   const changed = comparisons.filter(({ called, significant }) => called === true && significant === false)
   const effect =
-    lax && wrong > 0 ? ` By Holm these would not stand: ${listSome(changed.map(showDecision))}.` : ''
+    lax && changed.length > 0
+      ? ` By Holm these calls would not stand: ${listSome(changed.map(showDecision))}.`
+      : ''
   return [
     {
       severity: !lax ? 'note' : wrong > 0 ? 'major' : 'minor',
@@ -34,8 +36,8 @@ function inFamily({ assigned, comparisons, family }: Case): Found[] {
       reports: reportsOf(changed),
       place: view.lead.place,
       says: lax
-        ? `${label} controls the false discovery rate; the manuscript speaks of the family-wise error rate.${effect}`
-        : `${label} controls the family-wise error rate; the manuscript speaks of the false discovery rate.`,
+        ? `${capitalise(label)} controls the false discovery rate; the manuscript speaks of the family-wise error rate.${effect}`
+        : `${capitalise(label)} controls the family-wise error rate; the manuscript speaks of the false discovery rate.`,
       asks: lax
         ? 'Please say which error rate is meant: describe the results as controlled for the false discovery rate, or use a procedure for the family-wise rate.'
         : 'Please name the error rate that the procedure controls.',

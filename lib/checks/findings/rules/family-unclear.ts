@@ -1,6 +1,6 @@
 import type { Bench, Case } from '../../families/case'
 import type { ClaimView } from '../../families/claims'
-import type { Outcome } from '../../vocabulary'
+import { standing } from '../../families/outcome'
 import type { Found, RuleRow } from '../finding'
 import { leadOf, listSome, reportsOf, showDecision } from '../wording'
 
@@ -16,19 +16,12 @@ function find({ cases }: Bench): Found[] {
   return [...open.map((each) => ofAlternatives(each)), ...outside]
 }
 
-const words: Record<Outcome, string> = {
-  holds: 'all calls stand',
-  fails: 'at least one call does not stand',
-  undecidable: 'a call cannot be decided',
-  uncorrected: 'nothing was corrected',
-}
-
 function ofAlternatives({ under, family, assigned, comparisons, design }: Case): Found {
   const depends = new Set(under.map(({ outcome }) => outcome)).size > 1
   const open = comparisons.filter(({ called, significant }) => called !== null && significant === null)
-  const each = under.map(({ m, outcome }) => `with m = ${m} ${words[outcome]}`)
+  const each = under.map(({ m, outcome }) => `with m = ${m} ${standing[outcome]}`)
   const effect =
-    open.length > 0 ? ` Adjusted over the admissible m: ${listSome(open.map(showDecision))}.` : ''
+    open.length > 0 ? ` Adjusted p-values over these m: ${listSome(open.map(showDecision))}.` : ''
   const [first] = comparisons
   return {
     severity: depends || family.outcome === 'undecidable' ? 'question' : 'note',
@@ -52,14 +45,16 @@ function standsOutside({ family, assigned, comparisons, design }: Case, view: Cl
     ({ called, significant }) => called !== null && significant !== null && called !== significant,
   )
   const effect =
-    wrong.length > 0 ? ` As a family of their own, by Holm: ${listSome(wrong.map(showDecision))}.` : ''
+    wrong.length > 0
+      ? ` Adjusted by Holm as a family of their own: ${listSome(wrong.map(showDecision))}.`
+      : ''
   return [
     {
       severity: assigned !== null && wrong.length > 0 ? 'question' : 'note',
       family: family.id,
       reports: reportsOf(comparisons),
       place: (first && leadOf(first)?.place) ?? view.lead.place,
-      says: `The correction counts ${view.m} tests; ${family.label} are ${comparisons.length} further tests that this number does not include.${effect}`,
+      says: `The correction counts ${view.m} ${view.m === 1 ? 'test' : 'tests'}, which does not include these ${comparisons.length} (${family.label}).${effect}`,
       asks: 'Please say whether these tests belong to the corrected family, form one of their own, or are to be read one by one.',
       cites: ['sampl', 'ich-e9'],
     },

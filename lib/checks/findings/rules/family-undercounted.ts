@@ -1,7 +1,7 @@
 import type { Bench, Case } from '../../families/case'
 import { countCalls } from '../../families/outcome'
 import type { Found, RuleRow } from '../finding'
-import { listSome, reportsOf, showDecision } from '../wording'
+import { listSome, reportsOf, showDecision, showLevel } from '../wording'
 
 /** Major where a call depends on the number of tests, else minor. */
 function find({ cases }: Bench): Found[] {
@@ -28,15 +28,19 @@ function inFamily(judgedCase: Case): Found[] {
   )
   const effect =
     wrong > 0
-      ? ` With ${design.due}: ${listSome(changed.map(showDecision))}.`
+      ? ` Adjusted for ${design.due}, these calls do not agree: ${listSome(changed.map(showDecision))}.`
       : ' No stated call depends on it.'
+  const level =
+    judgedCase.procedure === 'bonferroni'
+      ? `, so that the level would be ${alpha} / ${design.due} = ${showLevel(alpha / design.due)}`
+      : ''
   return [
     {
       severity: wrong > 0 ? 'major' : 'minor',
       family: family.id,
       reports: reportsOf(changed.length > 0 ? changed : comparisons),
       place: assigned?.view.lead.place ?? null,
-      says: `The correction is for ${used} tests; ${design.why}, so that ${alpha} / ${design.due} = ${Number((alpha / design.due).toPrecision(3))} would apply.${effect}`,
+      says: `The correction is for ${used} ${used === 1 ? 'test' : 'tests'}; ${design.why}${level}.${effect}`,
       asks: `Please correct for all ${design.due} comparisons, or list the ${used} that the correction was meant for and say when they were chosen.`,
       cites: ['sampl', 'dunn'],
     },

@@ -29,14 +29,16 @@ function inFamily(judgedCase: Case, saysFamilyWise: boolean): Found {
   const changed = comparisons.filter(({ called, significant }) => called === true && significant === false)
   const [first] = changed.length > 0 ? changed : comparisons
   const effect =
-    wrong > 0 ? ` By Holm with m = ${m} these would not stand: ${listSome(changed.map(showDecision))}.` : ''
-  const declared = view ? ' The manuscript says that none was made.' : ''
+    changed.length > 0
+      ? ` By Holm with m = ${m} these calls would not stand: ${listSome(changed.map(showDecision))}.`
+      : ''
+  const declared = view ? 'the manuscript says that none was corrected' : 'no correction was found'
   return {
     severity: claimsControl && wrong > 0 ? 'major' : wrong > 0 ? 'question' : 'note',
     family: family.id,
     reports: reportsOf(changed.length > 0 ? changed : comparisons),
     place: view?.lead.place ?? (first && leadOf(first)?.place) ?? null,
-    says: `${m} tests at ${alpha} each and no correction for them was found.${declared} ${claimsControl ? 'Control of the error rate over all tests is claimed. ' : ''}With ${m} independent true null hypotheses at least one would be called significant with probability ${rate}.${effect}`,
+    says: `${m} tests at ${alpha} each; ${declared}.${claimsControl ? ' Control of the error rate over all tests is claimed.' : ''} If all ${m} null hypotheses were true and the tests independent, at least one would be called significant with probability ${rate}.${effect}`,
     asks: 'Please state which tests form the family and how the error rate was handled, or explain why no adjustment is needed and word the conclusions test by test.',
     cites: ['sampl', 'bender-lange', 'cook-farewell'],
   }

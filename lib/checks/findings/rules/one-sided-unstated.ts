@@ -32,7 +32,7 @@ function toFound(half: readonly Checked[], family: string | null, { cases }: Ben
     family,
     reports: [...ids],
     place: half[0]?.report.place ?? null,
-    says: `${half.length === 1 ? 'One value follows' : `${half.length} values follow`} only as one-sided p, and one-sided tests are not mentioned: ${listSome(entries)}.`,
+    says: `${half.length === 1 ? 'One p-value follows from its statistic' : `${half.length} p-values follow from their statistics`} only as one-sided, and one-sided tests are not mentioned: ${listSome(entries)}.`,
     asks: 'Please state whether the tests were one-sided and why, or give two-sided p-values.',
     cites: ['sampl'],
   }

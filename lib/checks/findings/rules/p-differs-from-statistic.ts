@@ -23,10 +23,15 @@ function toFound({ report, statistic, computed, family }: Checked, { reading }: 
     family,
     reports: [report.id],
     place: report.place,
-    says: `${showStatistic(statistic)} corresponds to p = ${showRange(computed)}, two-sided; the text gives ${showReport(report)}.${crosses ? ` The two lie on different sides of ${alpha}.` : ''}`,
+    says: `${showStatistic(statistic)} corresponds to a ${hasSides(statistic) ? 'two-sided ' : ''}p-value of ${showRange(computed)}; printed is ${showReport(report)}.${crosses ? ` The two lie on different sides of ${alpha}.` : ''}`,
     asks: 'Please check the statistic, its degrees of freedom and the p-value, and say how the p-value was obtained if not from them.',
     cites: ['sampl', 'apa-7'],
   }
+}
+
+/** F and χ² have an upper tail alone. */
+function hasSides({ test }: Checked['statistic']): boolean {
+  return test !== 'F' && test !== 'chi2'
 }
 
 function asQuestion(off: readonly Checked[], of: number): Found {

@@ -17,11 +17,11 @@ function find(bench: Bench): Found[] {
       family: null,
       reports: [report.id],
       place: report.place,
-      says: `A p-value is printed as ${showReport(report)}; it lies between 0 and 1, and is never 0.`,
+      says: `A p-value is printed as ${showReport(report)}; p-values lie between 0 and 1 and are never exactly 0.`,
       asks:
         report.value === 0
           ? `Please give the value as below the smallest number that can be shown, such as p < ${smallest(report.decimals)}.`
-          : 'Please check the value.',
+          : 'Please check this p-value.',
       cites: ['apa-7'],
     }))
 }

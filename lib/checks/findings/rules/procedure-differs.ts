@@ -7,7 +7,7 @@ import { fits } from '../../recover/fits'
 import type { Fit } from '../../types'
 import { PROCEDURES, type Procedure } from '../../vocabulary'
 import type { Found, RuleRow } from '../finding'
-import { leadOf, listSome, reportsOf, showRange, showReport } from '../wording'
+import { capitalise, leadOf, listSome, reportsOf, showRange, showReport } from '../wording'
 import { listBelowRaw } from './adjusted-below-raw'
 
 /** Major where a call depends on it, else minor where another procedure fits, else a question. */
@@ -66,7 +66,7 @@ function inFamily(judged: Case): Found[] {
       place:
         (first && comparisons[first.at] && leadOf(comparisons[first.at] ?? { items: [] })?.place) ??
         assigned.view.lead.place,
-      says: `${nameOf(claimed)} is named; ${off.length} of ${pairs.length} adjusted values that can be checked do not follow from it: ${listSome(entries, 4)}.${follows}`,
+      says: `${capitalise(nameOf(claimed))} is named; ${off.length} of the ${pairs.length} adjusted values that can be checked ${off.length === 1 ? 'does' : 'do'} not follow from it: ${listSome(entries, 4)}.${follows}`,
       asks: 'Please check the adjusted values or name the procedure and the number of tests that were used.',
       cites: ['sampl', 'jars-quant'],
     },

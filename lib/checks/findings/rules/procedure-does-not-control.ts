@@ -1,7 +1,7 @@
 import type { Bench, Case } from '../../families/case'
 import { procedureTable } from '../../procedures/table'
 import type { Found, RuleRow } from '../finding'
-import { reportsOf } from '../wording'
+import { capitalise, reportsOf } from '../wording'
 
 /** Minor where control is claimed in words, else a question. Silent up to the number of groups for which it holds. */
 function find({ cases, remarks }: Bench): Found[] {
@@ -22,7 +22,7 @@ function inFamily({ assigned, comparisons, family, design, kind }: Case, saysFam
       family: family.id,
       reports: reportsOf(comparisons),
       place: view.lead.place,
-      says: `${label} holds the family-wise error rate for up to ${upToGroups ?? 2} groups; here there are ${groups}.${claimed ? ' Control of this rate is claimed.' : ''}`,
+      says: `${capitalise(label)} holds the family-wise error rate for up to ${upToGroups ?? 2} groups; here there are ${groups}.${claimed ? ' Control of this rate is claimed.' : ''}`,
       asks: 'Please use a procedure that controls the family-wise rate for this many groups, such as Tukey or Holm, or say which error rate is meant.',
       cites: ['hayter'],
     },

@@ -15,7 +15,7 @@ function find({ views, cases }: Bench): Found[] {
         family: concerned?.family.id ?? null,
         reports: concerned ? reportsOf(concerned.comparisons) : [],
         place: view.lead.place,
-        says: `A correction is stated without the procedure: "${view.lead.place.quote.slice(0, 200)}".`,
+        says: `A correction is stated without naming the procedure: "${view.lead.place.quote.slice(0, 200)}".`,
         asks: 'Please name the procedure and the number of tests to which it was applied.',
         cites: ['sampl'],
       }

@@ -79,7 +79,7 @@ function toFound(label: string, a: Item, b: Item, said: string, { family, alpha 
     family: family.id,
     reports: [a.report.id, b.report.id],
     place: a.report.place,
-    says: `${label}: ${said} are printed for the same comparison (${where(a)}, ${where(b)}).`,
+    says: `${label}: ${said} are printed for the same comparison (${where(a)}; ${where(b)}).`,
     asks: `Please check ${label} and give the same value in both places.`,
     cites: ['sampl'],
   }
@@ -87,7 +87,7 @@ function toFound(label: string, a: Item, b: Item, said: string, { family, alpha 
 
 function where({ report: { place } }: Item): string {
   if (place.source === 'results-table') return `results table, row ${place.row ?? '?'}`
-  return `${place.source === 'text' ? 'text' : 'table'}, page ${place.page ?? '?'}`
+  return `${place.source === 'text' ? 'text' : 'table'} on page ${place.page ?? '?'}`
 }
 
 export const textTableDiffer: RuleRow = {

@@ -1,6 +1,6 @@
-import type { Bench, Case } from '../../families/case'
+import type { Bench, Case, Judged } from '../../families/case'
 import type { Found, RuleRow } from '../finding'
-import { listSome, reportsOf, showDecision } from '../wording'
+import { leadOf, listSome, reportsOf, showLevel, showReport } from '../wording'
 
 /** Ordinary rounding of a quotient (0.0167 for 0.05/3, 0.013 for 0.05/4) stays within this. */
 const ordinary = 0.05
@@ -23,18 +23,27 @@ function inFamily({ assigned, alpha, comparisons, family, design }: Case): Found
   if (excess <= 1e-9 || (excess <= ordinary && between.length === 0)) return []
   // a level far above the quotient is no rounding; another number of tests is behind it
   if (excess > 0.6) return []
-  const effect = between.length > 0 ? ` Between the two lies ${listSome(between.map(showDecision))}.` : ''
+  const effect =
+    between.length > 0
+      ? ` Between the two ${between.length === 1 ? 'lies' : 'lie'} ${listSome(between.map(showRaw))}.`
+      : ''
   return [
     {
       severity: between.length > 0 ? 'major' : 'minor',
       family: family.id,
       reports: reportsOf(between),
       place: view.lead.place,
-      says: `The level is given as ${threshold}; ${alpha} / ${m} is ${Number(exact.toPrecision(3))}.${effect}`,
-      asks: `Please confirm which level was used, and hold the p-values against ${Number(exact.toPrecision(3))} or against a level rounded down from it.`,
+      says: `The level is given as ${showLevel(threshold)}; ${alpha} / ${m} is ${showLevel(exact)}.${effect}`,
+      asks: `Please confirm which level was used, and hold the p-values against ${showLevel(exact)} or against a level rounded down from it.`,
       cites: ['sampl'],
     },
   ]
+}
+
+/** "16 °C – 20 °C (p = .0092)" */
+function showRaw(judged: Judged): string {
+  const lead = leadOf(judged)
+  return lead ? `${judged.label} (${showReport(lead)})` : judged.label
 }
 
 export const thresholdRoundedUp: RuleRow = {

@@ -27,7 +27,7 @@ function inFamily(judgedCase: Case): Found[] {
       reports: reportsOf(open),
       place: leadOf(first)?.place ?? null,
       says: `By ${showYardstick(judgedCase)} the printed precision leaves open on which side of ${alpha} the adjusted value lies: ${listSome(open.map(showDecision))}. ${digitFor(first)}`,
-      asks: `Please give ${open.length > 3 ? 'these p-values' : `the p-value of ${open.map(({ label }) => label).join(', ')}`} with one more digit, or the test statistic with its degrees of freedom.`,
+      asks: `Please give ${open.length > 3 ? 'these p-values' : `the p-value${open.length > 1 ? 's' : ''} of ${open.map(({ label }) => label).join(', ')}`} with one more digit, or the test statistic with its degrees of freedom.`,
       cites: ['apa-7'],
     },
   ]
@@ -41,8 +41,8 @@ function isRounded(raw: Judged['raw']): boolean {
 /** Which digit would decide, for the number that is quoted. */
 function digitFor(comparison: Judged): string {
   const lead = leadOf(comparison)
-  if (!lead || lead.relation !== '=' || lead.decimals < 1) return 'The exact p-value would decide.'
-  return `A decimal more than the ${lead.decimals} printed would most likely decide.`
+  if (!lead || lead.relation !== '=' || lead.decimals < 1) return 'The exact p-value would decide it.'
+  return `One more decimal than the ${lead.decimals} printed would most likely decide it.`
 }
 
 export const undecidedByRounding: RuleRow = {

@@ -8,7 +8,7 @@ function find({ laidOut }: Bench): Found[] {
     family: null,
     reports: [],
     place,
-    says: `A region on page ${place.page ?? '?'} looks like numbers and was not read${place.quote ? `: "${place.quote.slice(0, 120)}"` : ''}.`,
+    says: `A region on page ${place.page ?? '?'} that looks like numbers could not be read${place.quote ? `: "${place.quote.slice(0, 120)}"` : ''}.`,
     asks: 'Please supply the numbers of this region as text or as a results table.',
     cites: [],
   }))
