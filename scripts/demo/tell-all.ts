@@ -123,5 +123,5 @@ export async function tellAll(stage: Stage, who: Record<PersonKey, Actor>, now: 
 
   // a draft, and one that is audited when the demonstration starts
   await begin(stories.barnacleSettlement, who.secondSubmitter, 1)
-  await handOver(stage, await begin(stories.sandEelBurrowing, who.submitter, 0), { audited: false })
+  await handOver(stage, await begin(stories.sandEelBurrowing, who.submitter, 0.02), { audited: false })
 }

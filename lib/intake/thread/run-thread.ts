@@ -1,5 +1,6 @@
 import { Worker } from 'node:worker_threads'
 import { refuse } from '@/lib/rules/refusal'
+import { getThreadFile } from './bundle-thread'
 import type { ThreadMessage, ThreadTask } from './messages'
 import { describeTrouble, troubles } from './troubles'
 
@@ -20,9 +21,13 @@ type Told<T> = {
  * refusal of the reader) whose message says what is wrong and what to do, and with a plain error where the
  * fault is not the file's.
  */
-export function runThread<T extends object>({ task, limits, signal, onMessage }: Told<T>): Promise<T> {
+export async function runThread<T extends object>(told: Told<T>): Promise<T> {
+  return runFile(await getThreadFile(), told)
+}
+
+function runFile<T extends object>(file: string, { task, limits, signal, onMessage }: Told<T>): Promise<T> {
   return new Promise((resolve, reject) => {
-    const worker = new Worker(new URL('./start.mjs', import.meta.url), {
+    const worker = new Worker(file, {
       workerData: task,
       execArgv: [],
       resourceLimits: { maxOldGenerationSizeMb: limits.megabytes },
