@@ -19,8 +19,8 @@ function headLines({ document, table, alpha, reports, statistics, claims, engine
   const stated = alpha.quote === null ? 'not stated, default' : `"${alpha.quote}"${onPage(alpha.page)}`
   return [
     ...wrap(document.title ?? 'Untitled manuscript', ''),
-    `${document.pages} pages; ${reports.length} p-values, ${statistics.length} test statistics; engine ${engine}`,
-    ...(table ? wrap(`Results table: ${table.file}, ${table.rows} rows`, '') : []),
+    `${count(document.pages, 'page')}; ${count(reports.length, 'p-value')}, ${count(statistics.length, 'test statistic')}; engine ${engine}`,
+    ...(table ? wrap(`Results table: ${table.file}, ${count(table.rows, 'row')}`, '') : []),
     ...wrap(`Level: ${alpha.value} (${stated})`, ''),
     ...(claims.length === 0 ? ['No statement on a correction was found.'] : []),
     ...claims.flatMap((claim) => wrap(`Claim: ${describeClaim(claim)}`, '  ')),
@@ -138,4 +138,8 @@ function wrap(text: string, indent: string, first = ''): string[] {
     }
   }
   return [...lines, line]
+}
+
+function count(n: number, thing: string): string {
+  return `${n} ${thing}${n === 1 ? '' : 's'}`
 }
