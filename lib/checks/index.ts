@@ -1,3 +1,4 @@
+export { audit, ENGINE, STAGES, type Stage } from './audit'
 export { dunnettUpper } from './distributions/dunnett'
 export { studentizedRangeUpper } from './distributions/studentized-range'
 export { logTail, tail, type TailTest } from './distributions/tail'

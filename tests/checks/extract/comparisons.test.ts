@@ -75,6 +75,23 @@ test('groups of a table of means are known in the sentences', () => {
   expect(reports[0]?.comparison).toEqual(['Static stretching', 'No warm-up'])
 })
 
+test('two treatments of one sentence, each with its value, stand against the control of the table', () => {
+  const table = makePdfTable([
+    ['Comparison', 't', 'df', 'p'],
+    ['pipe vs flat stone', '3.01', '48', '0.0042'],
+    ['brick vs flat stone', '1.57', '48', '0.1230'],
+    ['turf vs flat stone', '0.39', '48', '0.6971'],
+  ])
+  const text =
+    'For bricks the difference was not significant after correction (t(48) = 1.57, p = .123), nor was it for turf (t(48) = 0.39, p = .697).'
+  const { reports } = read(makeLaidOut(text, [table]), null, defaultHouseRules)
+  const inText = reports.filter(({ place }) => place.source === 'text')
+  expect(inText.map(({ comparison, called }) => [comparison?.join(' | '), called])).toEqual([
+    ['brick | flat stone', 'not significant'],
+    ['turf | flat stone', 'not significant'],
+  ])
+})
+
 test('a result of an assumption, a baseline or an overall test is no member of a family', () => {
   const text =
     'Residuals did not depart from the normal distribution (W = 0.969, p = 0.50). ' +

@@ -133,6 +133,17 @@ export const REPORT_PASSAGES: readonly ReportPassage[] = [
     '= 0.01/2 significant',
     '= 0.4/2 not significant',
   ),
+  results(
+    'The difference between A and B (t(36) = 2.64, p = .0117) was not significant, nor were those between A and C (p = .42) and between B and C (p = .37).',
+    '= 0.0117/4 not significant',
+    '= 0.42/2 not significant',
+    '= 0.37/2 not significant',
+  ),
+  results(
+    'Length was greater in A than in B (p = .02) and was not different from C (p = .40).',
+    '= 0.02/2 significant',
+    '= 0.4/2 not significant',
+  ),
   results('The mean was 4.1 (p = .02).', '= 0.02/2 null'),
   // levels, legends and other things that are no results
   within('methods', 'P < 0.05 was considered significant.'),

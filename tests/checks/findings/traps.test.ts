@@ -318,3 +318,14 @@ test('the order of two groups and the sign of the statistic do not tell tests ap
   expect(told.families[0]?.m.printed).toBe(6)
   expect(graver(told)).toEqual([])
 })
+
+test('that printed values are uncorrected is no denial of the lowered level they are held against', () => {
+  const told = judgeManuscript(
+    kelp(
+      `${level} Uncorrected P values of attachment strength on granite, slate, concrete and plastic are given.`,
+      tellPairs({ print: 'raw', called: [2, 4] }),
+    ),
+  )
+  expect(listOutcomes(told)).toEqual(['holds'])
+  expect(graver(told)).toEqual([])
+})
