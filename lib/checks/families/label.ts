@@ -7,7 +7,7 @@ export function labelOf(cluster: Cluster, design: Design): string {
   const heading = items.map(({ report }) => toSubject(report.heading)).find((text) => text !== '')
   const outcomes = [...new Set(items.flatMap(({ shown }) => shown.outcome ?? []))]
   const outcome = cluster.kind === 'pairs' ? outcomes[0] : undefined
-  const subject = outcome === undefined ? (heading ?? 'Results') : withCapital(outcome)
+  const subject = withCapital(outcome ?? heading ?? 'Results')
   const names = {
     'all-pairs': 'all pairs of',
     'many-to-one': 'comparisons with a control among',

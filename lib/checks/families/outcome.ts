@@ -59,9 +59,10 @@ export function whyOf(comparisons: readonly Judged[], outcome: Outcome, grounds:
   const { stated, wrong, open } = countCalls(comparisons)
   const { procedure, design, alpha, exemption, instead, under } = grounds
   const name = nameOf(procedure)
-  const by = design.due === null ? name : `${name} with m = ${design.due}`
+  const by = design.due === null || procedure === 'raw' ? name : `${name} with m = ${design.due}`
   const calls = stated === 1 ? 'the one stated call' : `the ${stated} stated calls`
-  const some = (n: number) => (stated === 1 ? calls : `${inWords(n)} of ${calls}`)
+  const every = stated === 1 ? calls : stated === 2 ? 'both stated calls' : `all ${stated} stated calls`
+  const some = (n: number) => (n === stated ? every : `${inWords(n)} of ${calls}`)
   if (under.length > 0) {
     const each = under.map(({ m, outcome: found }) => `with m = ${m} ${standing[found]}`).join(', ')
     return `The text allows more than one family: ${each}.`
@@ -72,7 +73,7 @@ export function whyOf(comparisons: readonly Judged[], outcome: Outcome, grounds:
     if (wrong > 0) return `${start}; by ${by}, ${some(wrong)} at ${alpha} would not stand.`
     if (open > 0)
       return `${start}; by ${by}, ${some(open)} could not be decided, and none would certainly fall.`
-    return `${start}; by ${by}, ${stated === 1 ? calls : `all ${stated} stated calls`} would stand all the same.`
+    return `${start}; by ${by}, ${every} would stand all the same.`
   }
   const reason =
     instead !== null
@@ -85,5 +86,5 @@ export function whyOf(comparisons: readonly Judged[], outcome: Outcome, grounds:
   if (outcome === 'undecidable')
     return `By ${by}${reason}, ${some(open)} at ${alpha} cannot be decided from what is printed.`
   if (stated === 0) return `No call of significance is stated that could be held against ${by}${reason}.`
-  return `By ${by}${reason}, ${stated === 1 ? `${calls} at ${alpha} agrees` : `all ${stated} stated calls at ${alpha} agree`}.`
+  return `By ${by}${reason}, ${every} at ${alpha} ${stated === 1 ? 'agrees' : 'agree'}.`
 }

@@ -37,8 +37,8 @@ function trimName(name: string): string {
 }
 
 function withoutCapital(name: string, all: readonly string[], prose: string): string {
-  // a capital before small letters: "Dense meadow", and neither "A10" nor "pH" nor "UV"
-  if (!/^\p{Lu}\p{Ll}{2,}/u.test(name)) return name
+  // a capital before small letters: "Dense meadow", "No cue", and neither "A10" nor "UV" nor "Mg"
+  if (!/^\p{Lu}\p{Ll}(?:\p{Ll}|\s)/u.test(name)) return name
   const lowered = `${name.charAt(0).toLowerCase()}${name.slice(1)}`
   return all.includes(lowered) || holdsWord(prose, lowered) ? lowered : name
 }

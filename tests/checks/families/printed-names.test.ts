@@ -17,13 +17,18 @@ test('a name is shown as it is printed first', () => {
 })
 
 test('a capital that only begins a sentence goes, one that belongs to the name stays', () => {
-  const names = ['Dense meadow', 'dense meadow', 'Arlen', 'Dunja', 'Slate']
-  const print = findPrintedNames(names, 'Ropes from Arlen were hung beside slate and Dunja.')
-  expect(['dense meadow', 'arlen', 'dunja', 'slate'].map(print)).toEqual([
+  const names = ['Dense meadow', 'dense meadow', 'Arlen', 'Dunja', 'Slate', 'No cue', 'Mg']
+  const print = findPrintedNames(
+    names,
+    'Ropes from Arlen were hung beside slate and Dunja with no cue, 3 mg.',
+  )
+  expect(['dense meadow', 'arlen', 'dunja', 'slate', 'no cue', 'mg'].map(print)).toEqual([
     'dense meadow',
     'Arlen',
     'Dunja',
     'slate',
+    'no cue',
+    'Mg',
   ])
 })
 
