@@ -128,7 +128,7 @@ test('a manuscript goes from hand-in to the letter that its submitter reads', as
     await administrator.waitForURL(/\/mailbox\/.+/)
     await expect(administrator.getByText(personOf('submitter').email)).toBeVisible()
     await administrator.getByRole('tab', { name: 'Text' }).click()
-    await expect(administrator.getByText(/not supported/).first()).toBeVisible()
+    await expect(administrator.getByText(/Verdict: Not supported/)).toBeVisible()
     expect(await statusOf(administrator, `/manuscripts/${id}`)).toBe(404)
   })
 
