@@ -100,7 +100,7 @@ test('an audit that was asked for again counts instead of the one before', () =>
   const second = getNewestAudit(world.db, id)
   expect(second).not.toBe(first)
   const queued = world.db.select({ s: jobs.subjectId }).from(jobs).where(eq(jobs.kind, 'run-audit')).all()
-  expect(queued.map(({ s }) => s)).toEqual([first, second])
+  expect(new Set(queued.map(({ s }) => s))).toEqual(new Set([first, second]))
   finishAudit(world, id)
   expect(getAudit(world.db, world.editor, id)?.auditId).toBe(second)
   expect(listPointIds(world.db, id)).toHaveLength(4)
