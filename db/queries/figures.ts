@@ -4,7 +4,7 @@ import type { Reader } from '@/db/client'
 import { manuscripts, points, rounds, verdicts } from '@/db/schema'
 import { RULES, type Rule } from '@/lib/checks/vocabulary'
 import { may } from '@/lib/rules/permissions'
-import { refuse } from '@/lib/rules/refusal'
+import { refuseUnknown } from '@/lib/rules/refusal'
 import type { Actor } from '@/lib/rules/roles'
 import { STATES, type State } from '@/lib/rules/states'
 import type { PointStatus } from '@/lib/rules/words'
@@ -27,7 +27,7 @@ export type Figures = {
 
 /** The desk in numbers. For editors; counts only, so nothing of one manuscript can be read from it. */
 export function getFigures(db: Reader, actor: Actor, now: number): Figures {
-  if (!may(actor, 'figures.read')) throw refuse('not-found', 'There is nothing here that you can open.')
+  if (!may(actor, 'figures.read')) throw refuseUnknown()
   const released = listReleased(db)
   return {
     states: countStates(db),

@@ -6,15 +6,9 @@ import { conflicts, personRoles, points } from '@/db/schema'
 import { composeSteppedAside } from '@/lib/mail/desk-mails'
 import { queueMail } from '@/lib/mail/queue-mail'
 import { recordEvent } from '@/lib/record/record-event'
-import { refuse } from '@/lib/rules/refusal'
+import { refuse, refuseUnknown } from '@/lib/rules/refusal'
 import type { Actor } from '@/lib/rules/roles'
-import {
-  closeAssignment,
-  findOpenAssignment,
-  getRecipient,
-  loadManuscript,
-  refuseUnknown,
-} from './load-manuscript'
+import { closeAssignment, findOpenAssignment, getRecipient, loadManuscript } from './load-manuscript'
 import { moveManuscript } from './move-manuscript'
 
 export const declareConflictInput = z.object({

@@ -3,9 +3,9 @@ import { z } from 'zod'
 import { transact, type Db } from '@/db/client'
 import { conflicts } from '@/db/schema'
 import { recordEvent } from '@/lib/record/record-event'
-import { refuse } from '@/lib/rules/refusal'
+import { refuse, refuseUnknown } from '@/lib/rules/refusal'
 import type { Actor } from '@/lib/rules/roles'
-import { loadManuscript, refuseUnknown } from './load-manuscript'
+import { loadManuscript } from './load-manuscript'
 
 export const liftConflictInput = z.object({ conflictId: z.string() })
 

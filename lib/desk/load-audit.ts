@@ -1,7 +1,7 @@
 import { desc, eq, sql } from 'drizzle-orm'
 import type { Reader } from '@/db/client'
 import { audits, manuscripts, rounds } from '@/db/schema'
-import { refuse } from '@/lib/rules/refusal'
+import { refuse, refuseUnknown } from '@/lib/rules/refusal'
 import type { Actor } from '@/lib/rules/roles'
 
 /**
@@ -9,7 +9,7 @@ import type { Actor } from '@/lib/rules/roles'
  * the manuscript was withdrawn meanwhile, or another audit was asked for.
  */
 export function loadAudit(tx: Reader, actor: Actor, auditId: string) {
-  if (actor.kind !== 'system') throw refuse('not-found', 'There is nothing here that you can open.')
+  if (actor.kind !== 'system') throw refuseUnknown()
   const row = tx
     .select({
       status: audits.status,

@@ -2,7 +2,8 @@ import { eq } from 'drizzle-orm'
 import type { Reader } from '@/db/client'
 import { comments, rounds, verdicts } from '@/db/schema'
 import type { Actor } from '@/lib/rules/roles'
-import { loadManuscript, refuseState, refuseUnknown } from './load-manuscript'
+import { refuseUnknown } from '@/lib/rules/refusal'
+import { loadManuscript, refuseState } from './load-manuscript'
 
 /** A comment that the actor may see and answer; another's private one is not there. */
 export function loadComment(tx: Reader, actor: Actor, commentId: string) {

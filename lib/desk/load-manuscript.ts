@@ -2,14 +2,10 @@ import { and, eq, inArray, isNull } from 'drizzle-orm'
 import type { Reader, Tx } from '@/db/client'
 import { assignments, files, manuscripts, people, rounds } from '@/db/schema'
 import type { Permission } from '@/lib/rules/permissions'
-import { refuse } from '@/lib/rules/refusal'
+import { refuse, refuseUnknown } from '@/lib/rules/refusal'
 import type { Actor } from '@/lib/rules/roles'
 import type { State } from '@/lib/rules/states'
 import { requireOnManuscript } from './permission'
-
-export function refuseUnknown() {
-  return refuse('not-found', 'There is nothing here that you can open.')
-}
 
 /** What fits no state on the way, told by the state it found. */
 export function refuseState(state: State) {

@@ -3,7 +3,8 @@ import { getStanding } from '@/db/queries/standing'
 import { may } from '@/lib/rules/permissions'
 import type { Actor } from '@/lib/rules/roles'
 import { loadDraft } from './load-draft'
-import { getManuscriptRow, getRoundRow, refuseUnknown } from './load-manuscript'
+import { refuseUnknown } from '@/lib/rules/refusal'
+import { getManuscriptRow, getRoundRow } from './load-manuscript'
 
 /** The round whose files the submitter can change: a draft's, a begun revision's, or one that is stuck. */
 export function loadOpenFiles(tx: Reader, actor: Actor, manuscriptId: string) {

@@ -1,9 +1,9 @@
 import { eq } from 'drizzle-orm'
 import type { Reader } from '@/db/client'
 import { points, rounds } from '@/db/schema'
-import { refuse } from '@/lib/rules/refusal'
+import { refuse, refuseUnknown } from '@/lib/rules/refusal'
 import type { Actor } from '@/lib/rules/roles'
-import { loadReview, refuseUnknown } from './load-manuscript'
+import { loadReview } from './load-manuscript'
 
 /** A point of the round that the actor reviews now. */
 export function loadPoint(tx: Reader, actor: Actor, pointId: string) {

@@ -1,7 +1,7 @@
 import { eq } from 'drizzle-orm'
 import type { Tx } from '@/db/client'
 import { manuscripts } from '@/db/schema'
-import { refuse } from '@/lib/rules/refusal'
+import { refuse, refuseUnknown } from '@/lib/rules/refusal'
 import type { Actor } from '@/lib/rules/roles'
 import { canMove, MOVES, type MoveName } from '@/lib/rules/states'
 import { requireOnManuscript } from './permission'
@@ -25,7 +25,7 @@ export function moveManuscript(
     .from(manuscripts)
     .where(eq(manuscripts.id, manuscriptId))
     .get()
-  if (!row) throw refuse('not-found', 'There is nothing here that you can open.')
+  if (!row) throw refuseUnknown()
   if (!canMove(move, row.state)) {
     throw refuse('conflict', `The manuscript is “${row.state}” by now; please reload the page.`)
   }

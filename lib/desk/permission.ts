@@ -1,12 +1,12 @@
 import type { Reader } from '@/db/client'
 import { getStanding } from '@/db/queries/standing'
 import { may, type Permission, type Standing } from '@/lib/rules/permissions'
-import { refuse } from '@/lib/rules/refusal'
+import { refuseUnknown } from '@/lib/rules/refusal'
 import type { Actor } from '@/lib/rules/roles'
 
 /** Refuses as not-found, so that nothing is told about what the actor may not see. */
 export function requirePermission(actor: Actor, permission: Permission): void {
-  if (!may(actor, permission)) throw refuse('not-found', 'There is nothing here that you can open.')
+  if (!may(actor, permission)) throw refuseUnknown()
 }
 
 /** The same for one manuscript; returns the standing for what depends on it further. */
@@ -18,7 +18,7 @@ export function requireOnManuscript(
 ): Standing {
   const standing = getStanding(db, actor, manuscriptId)
   if (!may(actor, permission, standing)) {
-    throw refuse('not-found', 'There is nothing here that you can open.')
+    throw refuseUnknown()
   }
   return standing
 }

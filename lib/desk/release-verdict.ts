@@ -10,7 +10,7 @@ import { renderLetter } from '@/lib/letters/render-letter'
 import { queueMail } from '@/lib/mail/queue-mail'
 import { recordEvent } from '@/lib/record/record-event'
 import { may } from '@/lib/rules/permissions'
-import { refuse } from '@/lib/rules/refusal'
+import { refuse, refuseUnknown } from '@/lib/rules/refusal'
 import type { Actor } from '@/lib/rules/roles'
 import type { MoveName } from '@/lib/rules/states'
 import { getSettings } from '@/lib/settings'
@@ -21,7 +21,6 @@ import {
   getRecipient,
   getRoundRow,
   refuseState,
-  refuseUnknown,
 } from './load-manuscript'
 import { findVerdict } from './load-verdict'
 import { moveManuscript } from './move-manuscript'

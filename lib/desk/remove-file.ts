@@ -3,9 +3,8 @@ import { z } from 'zod'
 import { transact, type Db } from '@/db/client'
 import { files, rounds } from '@/db/schema'
 import { recordEvent } from '@/lib/record/record-event'
-import { refuse } from '@/lib/rules/refusal'
+import { refuse, refuseUnknown } from '@/lib/rules/refusal'
 import type { Actor } from '@/lib/rules/roles'
-import { refuseUnknown } from './load-manuscript'
 import { loadOpenFiles } from './load-open-files'
 
 export const removeFileInput = z.object({ fileId: z.string() })

@@ -5,7 +5,8 @@ import { newId } from '@/db/ids'
 import { answers, points, rounds } from '@/db/schema'
 import { recordEvent } from '@/lib/record/record-event'
 import type { Actor } from '@/lib/rules/roles'
-import { getRoundRow, loadManuscript, refuseState, refuseUnknown } from './load-manuscript'
+import { refuseUnknown } from '@/lib/rules/refusal'
+import { getRoundRow, loadManuscript, refuseState } from './load-manuscript'
 
 export const writeAnswerInput = z.object({
   pointId: z.string(),

@@ -27,3 +27,10 @@ export function refuse(kind: RefusalKind, message: string, fields: Record<string
 export function isRefusal(error: unknown): error is Refusal {
   return error instanceof Error && 'refusal' in error
 }
+
+/** One sentence wherever something is not there or not for the actor, so that the two cannot be told apart. */
+export const nothingHere = 'There is nothing here that you can open.'
+
+export function refuseUnknown(): Refusal {
+  return refuse('not-found', nothingHere)
+}

@@ -1,6 +1,6 @@
 import { randomBytes } from 'node:crypto'
 import { log } from '@/lib/log'
-import { isRefusal, type RefusalKind } from '@/lib/rules/refusal'
+import { isRefusal, type RefusalKind, nothingHere } from '@/lib/rules/refusal'
 
 export type Problem = {
   type: string
@@ -38,7 +38,7 @@ export function toProblem(error: unknown): Problem {
   return makeProblem(
     status === 404 ? 'not-found' : error.refusal,
     status,
-    error.refusal === 'forbidden' ? 'There is nothing here that you can open.' : error.message,
+    error.refusal === 'forbidden' ? nothingHere : error.message,
     { ...error.fields },
   )
 }

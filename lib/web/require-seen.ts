@@ -1,7 +1,7 @@
 import type { Reader } from '@/db/client'
 import { findViewing } from '@/db/queries/viewing'
 import type { Permission } from '@/lib/rules/permissions'
-import { refuse } from '@/lib/rules/refusal'
+import { refuseUnknown } from '@/lib/rules/refusal'
 import type { Actor } from '@/lib/rules/roles'
 
 /** Answers 404 where the manuscript is not for the actor, so that an empty list or null always means "none yet". */
@@ -12,6 +12,6 @@ export function requireSeen(
   permission: Permission = 'manuscript.see',
 ): void {
   if (!findViewing(db, actor, manuscriptId, permission)) {
-    throw refuse('not-found', 'There is nothing here that you can open.')
+    throw refuseUnknown()
   }
 }

@@ -1,6 +1,6 @@
 import type { Db } from '@/db/client'
 import { getDb } from '@/db/current'
-import { refuse } from '@/lib/rules/refusal'
+import { refuseUnknown } from '@/lib/rules/refusal'
 import type { Actor } from '@/lib/rules/roles'
 import { getSettings, type Settings } from '@/lib/settings'
 import { getActor } from './actor'
@@ -53,7 +53,7 @@ export function answerJson(value: unknown): Response {
 }
 
 function toResponse(answer: Answer): Response {
-  if (answer === null) throw refuse('not-found', 'There is nothing here that you can open.')
+  if (answer === null) throw refuseUnknown()
   if (answer instanceof Response) return answer
   if (answer !== undefined) return answerJson(answer)
   return new Response(null, { status: 204, headers: { 'Cache-Control': 'private, no-store' } })
