@@ -54,6 +54,7 @@ export function getAudit(db: Reader, actor: Actor, manuscriptId: string, round?:
 
 const numbers = z.array(z.number())
 const strings = z.array(z.string())
+const ends = z.tuple([z.number(), z.number()])
 const boxes = z.array(z.tuple([z.number(), z.number(), z.number(), z.number()]))
 const placeSchema = z.object({
   source: z.enum(SOURCES),
@@ -67,12 +68,39 @@ const decisionsSchema = z.array(
   z.object({
     report: z.string(),
     called: z.boolean().nullable(),
-    adjusted: z.tuple([z.number(), z.number()]),
+    adjusted: ends,
     significant: z.boolean().nullable(),
     survivesUpTo: z.number().nullable(),
   }),
 )
 const fitsSchema = z.array(z.object({ procedure: z.enum([...PROCEDURES, 'raw']), m: z.number() }))
+
+const workingSchema = z
+  .object({
+    procedure: z.enum([...PROCEDURES, 'raw', 'any']),
+    alpha: z.number(),
+    groups: z.number(),
+    sizes: numbers,
+    parts: numbers,
+    undone: z.object({ procedure: z.enum(PROCEDURES).nullable(), m: z.number() }),
+    trusted: z.boolean(),
+    fitsUpTo: z.number(),
+    tests: z.array(
+      z.object({
+        statistics: strings,
+        witnesses: z.array(
+          z.object({
+            id: z.string(),
+            low: z.number(),
+            high: z.number(),
+            is: z.enum(['raw', 'adjusted', 'open']),
+          }),
+        ),
+        raw: ends.nullable(),
+      }),
+    ),
+  })
+  .nullable()
 
 /** The rows put together again, without asking who wants to know. */
 export function readAudit(db: Reader, auditId: string): Audit {
@@ -183,6 +211,7 @@ function readFamilies(db: Reader, auditId: string): Audit['families'] {
     why: row.why,
     decisions: decisionsSchema.parse(row.decisions),
     fits: fitsSchema.parse(row.fits),
+    working: workingSchema.parse(row.working),
   }))
 }
 

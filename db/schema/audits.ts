@@ -138,6 +138,8 @@ export const families = sqliteTable(
     why: text('why').notNull(),
     decisions: json('decisions').notNull(),
     fits: json('fits').notNull(),
+    /** How the decisions came about; null where the engine of the time did not say. */
+    working: json('working'),
   },
   (t) => [
     primaryKey({ columns: [t.auditId, t.key] }),

@@ -4,7 +4,7 @@ import { layOut } from './text/lay-out'
 import type { Audit, HouseRules, ReadDocument, Reading, ReadReport, ReadTable, Report } from './types'
 
 /** Version of the engine; raised whenever the same input could give another answer. */
-export const ENGINE = '0.1.0'
+export const ENGINE = '0.2.0'
 
 /** Stages of an audit in their order, as the person who waits sees them. */
 export const STAGES = ['opening', 'reading', 'laying out', 'extracting', 'judging', 'keeping'] as const

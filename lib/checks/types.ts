@@ -131,6 +131,32 @@ export type Decision = {
 
 export type Fit = { procedure: Procedure | 'raw'; m: number }
 
+/**
+ * How a family's decisions came about, so that they can be computed again elsewhere. `procedure`: the one judged by,
+ * 'raw' where no correction is called for, 'any' where one is claimed without a name. `groups`: for procedures on
+ * statistics, 0 where not known. `sizes`: the m judged at; with several, a decision stands only where all agree.
+ * `parts`: numbers of tests that an m below the family's size applies to one by one; one number where it is whole.
+ * `undone`: by what printed adjusted values are turned back where nothing else is printed. `trusted`: the printed
+ * adjusted values follow the claim, so that their digits count. `fitsUpTo`: the largest m tried for `fits`.
+ * `tests`: in the order of the decisions; `statistics` are ids, `witnesses` the ranges of p that each print (by its
+ * id) stands for, `raw` the range of the unadjusted p that follows, null where nothing is known.
+ */
+export type Working = {
+  procedure: Procedure | 'raw' | 'any'
+  alpha: number
+  groups: number
+  sizes: number[]
+  parts: number[]
+  undone: { procedure: Procedure | null; m: number }
+  trusted: boolean
+  fitsUpTo: number
+  tests: {
+    statistics: string[]
+    witnesses: { id: string; low: number; high: number; is: 'raw' | 'adjusted' | 'open' }[]
+    raw: [low: number, high: number] | null
+  }[]
+}
+
 export type Family = {
   id: string
   label: string
@@ -142,6 +168,8 @@ export type Family = {
   why: string
   decisions: Decision[]
   fits: Fit[]
+  /** Null for an audit that was kept before this was. */
+  working: Working | null
 }
 
 export type Finding = {

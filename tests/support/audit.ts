@@ -43,6 +43,7 @@ export function makeFamily(reports: readonly Report[], given: Partial<Family> = 
     why: 'Every call holds.',
     decisions: reports.map((report) => makeDecision(report.id)),
     fits: [],
+    working: null,
     ...given,
   }
 }

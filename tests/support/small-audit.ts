@@ -86,6 +86,7 @@ export function makeSmallAudit(): Audit {
           { report: 'r1', called: true, adjusted: [0.069, 0.075], significant: false, survivesUpTo: 4 },
         ],
         fits: [{ procedure: 'raw', m: 1 }],
+        working: null,
       },
       {
         id: 'f2',
@@ -98,6 +99,7 @@ export function makeSmallAudit(): Audit {
         why: 'Every call holds.',
         decisions: [],
         fits: [],
+        working: null,
       },
     ],
     findings: [

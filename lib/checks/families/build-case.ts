@@ -1,17 +1,16 @@
-import { fits } from '../recover/fits'
 import { survivesUpTo } from '../sensitivity/survives-up-to'
-import type { Fit, HouseRules } from '../types'
+import type { HouseRules, Working } from '../types'
 import type { ClaimedProcedure, Outcome, Procedure } from '../vocabulary'
-import { adjustRanges, worksOnP, worksOnT } from './adjusted'
+import { worksOnP, worksOnT } from './adjusted'
 import type { Assigned } from './assign'
 import { impliedCall, statedCall } from './calls'
 import type { Case, Exemption, Judged } from './case'
-import type { Cluster, Evidence, Remarks } from './comparison'
+import type { Cluster, Comparison, Evidence, Remarks } from './comparison'
 import { adjustFamily, isSignificant, type Yardstick } from './decide'
 import { designOf, type Design } from './design'
-import { expectAdjusted, readSeries, type Series } from './evidence'
-import { overlaps } from './interval'
+import { expectAdjusted, readSeries, statisticsOf, type Series } from './evidence'
 import { findExemption } from './exemption'
+import { fitsOf } from './family-fits'
 import type { FamilyDraft } from './join-outcomes'
 import { labelOf } from './label'
 import { leadOf } from './lead'
@@ -42,7 +41,8 @@ export function buildCase(draft: FamilyDraft, setting: Setting, number: number):
   const given = 2 * printed.filter((range) => range !== null).length > printed.length
   const procedure = !effective && !exemption && given && !assigned ? 'any' : yardstickOf(effective, exemption)
   const instead = procedure === 'holm' && claimed === 'bh' ? claimed : null
-  const trusted = claimed !== null && found.some((fit) => fit.procedure === claimed && fit.m === design.due)
+  const trusted =
+    claimed !== null && found.fits.some((fit) => fit.procedure === claimed && fit.m === design.due)
 
   const judgeAt = (m: number) => {
     const yardstick = { procedure, m, groups, alpha }
@@ -97,7 +97,18 @@ export function buildCase(draft: FamilyDraft, setting: Setting, number: number):
         significant,
         survivesUpTo: upTo,
       })),
-      fits: found,
+      fits: found.fits,
+      working: {
+        procedure,
+        alpha,
+        groups,
+        sizes: alternatives.length > 0 ? design.alternatives : [settledM],
+        parts: draft.parts.length > 0 ? draft.parts.map(countOf) : [countOf(draft)],
+        undone: used,
+        trusted,
+        fitsUpTo: found.upTo,
+        tests: cluster.comparisons.map((comparison, i) => showTest(comparison, evidence[i])),
+      },
     },
     kind: cluster.kind,
     comparisons,
@@ -112,13 +123,22 @@ export function buildCase(draft: FamilyDraft, setting: Setting, number: number):
   }
 }
 
+const countOf = ({ cluster }: FamilyDraft) => cluster.comparisons.length
+
+function showTest(comparison: Comparison, evidence: Evidence | undefined): Working['tests'][number] {
+  const { raw = null, witnesses = [] } = evidence ?? {}
+  return {
+    statistics: statisticsOf(comparison).map(({ id }) => id),
+    witnesses: witnesses.map(({ id, range: { low, high }, is }) => ({ id, low, high, is })),
+    raw: raw && [raw.low, raw.high],
+  }
+}
+
 /** The stretches of a joined family that an m below its size corrects one by one; else the whole. */
 function listParts({ cluster, parts }: FamilyDraft, m: number): [from: number, to: number][] {
   const whole = cluster.comparisons.length
   if (parts.length === 0 || m >= whole) return [[0, whole]]
-  const ends = parts.map((_, i) =>
-    parts.slice(0, i + 1).reduce((sum, part) => sum + part.cluster.comparisons.length, 0),
-  )
+  const ends = parts.map((_, i) => parts.slice(0, i + 1).reduce((sum, part) => sum + countOf(part), 0))
   return ends.map((to, i) => [ends[i - 1] ?? 0, to])
 }
 
@@ -161,39 +181,6 @@ function yardstickOf(assigned: Assigned, exemption: Exemption | null): Yardstick
   if (named === 'lsd') return 'raw'
   if (named === 'bh' && errorRate === 'fwer') return 'holm'
   return named ?? 'holm'
-}
-
-/** What reproduces the printed adjusted values; a list that is too long to tell anything is cut to the family's own m. */
-function fitsOf(
-  evidence: readonly Evidence[],
-  printed: readonly Evidence['adjusted'][],
-  design: Design,
-  claimedM: number | null,
-): Fit[] {
-  const direct = evidence.map(({ raw, adjusted }, i) =>
-    adjusted && raw ? { raw, printed: printed[i] } : null,
-  )
-  const pairs = direct.flatMap((pair) => (pair?.printed ? [{ raw: pair.raw, printed: pair.printed }] : []))
-  if (pairs.length === 0) return []
-  const largest = Math.max(design.due ?? 0, ...design.alternatives, pairs.length)
-  const below = [claimedM ?? 0, ...design.alternatives].filter((m) => m >= 2 && m < pairs.length)
-  const single = (['bonferroni', 'sidak'] as const).flatMap((procedure) =>
-    below
-      .filter((m) =>
-        pairs.every((pair) =>
-          adjustRanges(procedure, [pair.raw], m, 0.05).some((range) => overlaps(range, pair.printed)),
-        ),
-      )
-      .map((m) => ({ procedure, m })),
-  )
-  return [
-    ...single,
-    ...fits(
-      pairs.map((pair) => pair.printed),
-      pairs.map((pair) => pair.raw),
-      { mMax: Math.max(largest, Math.min(60, 2 * largest)) },
-    ),
-  ]
 }
 
 /** One judgement out of several admissible ones: a decision stands only where all agree. */

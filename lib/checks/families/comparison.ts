@@ -52,13 +52,17 @@ export type Remarks = {
   familyWise: { sentence: string; offset: number } | null
 }
 
+/** One print that speaks of a comparison: its id, the range of p it stands for, and what that p is taken for. */
+export type Witness = { id: string; range: Interval; is: 'raw' | 'adjusted' | 'open' }
+
 /**
  * A comparison with its evidence. `raw`: two-sided unadjusted p; `direct`: from statistics or raw values, not only
- * inferred from an adjusted one; `adjusted`: printed adjusted p.
+ * inferred from an adjusted one; `adjusted`: printed adjusted p; `witnesses`: the prints that all this rests on.
  */
 export type Evidence = {
   raw: Interval | null
   direct: boolean
   conflict: boolean
   adjusted: Interval | null
+  witnesses: Witness[]
 }

@@ -1,6 +1,6 @@
 import type { Procedure } from '../vocabulary'
 import { invert } from './adjusted'
-import type { Comparison, Evidence, Item } from './comparison'
+import type { Comparison, Evidence, Witness } from './comparison'
 import { rangeOfP, rangeOfReport, statisticsOf, type Series } from './evidence'
 import { clip, combine, join, type Interval } from './interval'
 
@@ -13,43 +13,51 @@ export function weighEvidence(
   series: readonly Series[],
   used: { procedure: Procedure | null; m: number },
 ): Evidence {
-  const isOf = (item: Item) =>
-    series.find(
-      ({ source, presented }) => source === item.report.place.source && presented === item.report.scale,
-    )
-  const adjusted: Interval[] = []
-  const open: Interval[] = []
-  const raw: Interval[] = statisticsOf(comparison).flatMap((statistic) => rangeOfP(statistic) ?? [])
-  const sides = comparison.items.some(({ report }) => report.oneSided) ? 1 : 2
-  if (sides === 1) raw.forEach((range, i) => (raw[i] = { low: range.low / 2, high: range.high / 2 }))
-  for (const item of comparison.items) {
-    const is = isOf(item)
-    const range = rangeOfReport(item.report)
-    if (is?.is === 'one-sided' || item.report.markOnly) continue
-    const isRaw = is?.is === 'raw' || (item.report.scale === 'raw' && is?.is !== 'adjusted')
-    const isAdjusted = is?.is === 'adjusted' || item.report.scale === 'adjusted'
-    if (isRaw) raw.push(range)
-    else if (isAdjusted) adjusted.push(range)
-    else open.push(range)
-  }
-  const known = combine(raw)
-  const printed = combine(adjusted)?.range ?? null
+  const witnesses = listWitnesses(comparison, series)
+  const rangesOf = (is: Witness['is']) => witnesses.filter((each) => each.is === is).map(({ range }) => range)
+  const known = combine(rangesOf('raw'))
+  const printed = combine(rangesOf('adjusted'))?.range ?? null
   if (known && printed && isOutOfReach(printed, known.range, used.m)) {
-    const range = clip(join(known.range, invert(used.procedure, printed, used.m)))
-    return { raw: range, direct: true, conflict: true, adjusted: printed }
+    const raw = clip(join(known.range, invert(used.procedure, printed, used.m)))
+    return { raw, direct: true, conflict: true, adjusted: printed, witnesses }
   }
-  if (known) return { raw: clip(known.range), direct: true, conflict: known.conflict, adjusted: printed }
+  if (known) {
+    return { raw: clip(known.range), direct: true, conflict: known.conflict, adjusted: printed, witnesses }
+  }
   if (printed) {
-    const range = invert(used.procedure, printed, used.m)
-    return { raw: range, direct: false, conflict: false, adjusted: printed }
+    const raw = invert(used.procedure, printed, used.m)
+    return { raw, direct: false, conflict: false, adjusted: printed, witnesses }
   }
-  const either = combine(open)
+  const either = combine(rangesOf('open'))
   return {
     raw: either?.range ?? null,
     direct: either !== null,
     conflict: either?.conflict ?? false,
     adjusted: null,
+    witnesses,
   }
+}
+
+/** Statistics first, then printed p-values; of a test stated as one-sided half of the statistic's two-sided p. */
+function listWitnesses(comparison: Comparison, series: readonly Series[]): Witness[] {
+  const oneSided = comparison.items.some(({ report }) => report.oneSided)
+  const byStatistic = statisticsOf(comparison).flatMap((statistic): Witness[] => {
+    const range = rangeOfP(statistic)
+    if (!range) return []
+    const own = oneSided ? { low: range.low / 2, high: range.high / 2 } : range
+    return [{ id: statistic.id, range: own, is: 'raw' }]
+  })
+  const byPrint = comparison.items.flatMap(({ report }): Witness[] => {
+    const found = series.find(
+      ({ source, presented }) => source === report.place.source && presented === report.scale,
+    )
+    if (found?.is === 'one-sided' || report.markOnly) return []
+    const isRaw = found?.is === 'raw' || (report.scale === 'raw' && found?.is !== 'adjusted')
+    const isAdjusted = found?.is === 'adjusted' || report.scale === 'adjusted'
+    const is = isRaw ? 'raw' : isAdjusted ? 'adjusted' : 'open'
+    return [{ id: report.id, range: rangeOfReport(report), is }]
+  })
+  return [...byStatistic, ...byPrint]
 }
 
 /** No common procedure multiplies a p by more than m times the harmonic sum (Benjamini and Yekutieli 2001). */
