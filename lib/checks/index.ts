@@ -25,5 +25,18 @@ export { thresholdFits, type ThresholdFit } from './recover/threshold-fits'
 export { familyWiseError, type DependenceOptions } from './sensitivity/family-wise-error'
 export { powerCost, powerOfTTest, sampleSizeOfTTest, type PowerDesign } from './sensitivity/power'
 export { survivesUpTo, survivesUpToByBh, survivesUpToByHolm } from './sensitivity/survives-up-to'
+export type { SummaryGroup, GroupMoments } from './summary/groups'
+export type { ComparisonBounds } from './summary/bound-comparisons'
+export type { OmnibusBounds } from './summary/bound-omnibus'
+export type { Anova, WelchAnova } from './summary/omnibus'
+export type { TTest } from './summary/pairs'
+export { SUMMARY_PROCEDURES, type SummaryProcedure } from './summary/simultaneous'
+export {
+  summarize,
+  type AdjustedComparison,
+  type Summary,
+  type SummaryComparison,
+  type SummaryOptions,
+} from './summary/summarize'
 export * from './types'
 export * from './vocabulary'

@@ -1,0 +1,49 @@
+/**
+ * What is printed of one group: its size (an integer >= 2), mean, and standard deviation or standard error (>= 0).
+ * `meanDecimals` and `spreadDecimals`: digits after the point that the mean and the sd or se were printed with; where
+ * they are missing the number counts as exact.
+ */
+export type SummaryGroup = {
+  group: string
+  n: number
+  mean: number
+  meanDecimals?: number
+  spreadDecimals?: number
+} & ({ sd: number; se?: undefined } | { se: number; sd?: undefined })
+
+/** `sd` is the standard deviation with divisor n − 1; `se` = sd / √n. */
+export type GroupMoments = { group: string; n: number; mean: number; sd: number; se: number }
+
+/**
+ * The groups with both sd and se, in input order. Throws RangeError with the group's name for fewer than two groups,
+ * a name that occurs twice, n that is no integer or below 2, a mean or spread that is no finite number, a spread below
+ * 0, both or neither of sd and se, and where every spread is 0, as nothing can be tested then.
+ */
+export function getMoments(groups: readonly SummaryGroup[]): GroupMoments[] {
+  if (groups.length < 2) throw new RangeError(`a comparison takes at least two groups, not ${groups.length}`)
+  const names = new Set<string>()
+  const moments = groups.map((each) => {
+    if (names.has(each.group)) throw new RangeError(`two groups are called '${each.group}'`)
+    names.add(each.group)
+    return getMomentsOf(each)
+  })
+  if (moments.every(({ sd }) => sd === 0)) {
+    throw new RangeError('the spread of every group is 0: there is no error to compare the means with')
+  }
+  return moments
+}
+
+function getMomentsOf({ group, n, mean, sd, se }: SummaryGroup): GroupMoments {
+  const refuse = (what: string) => new RangeError(`group '${group}': ${what}`)
+  if (!(Number.isSafeInteger(n) && n >= 2)) throw refuse(`n is an integer of at least 2, not ${n}`)
+  if (!Number.isFinite(mean)) throw refuse(`the mean is a finite number, not ${mean}`)
+  if ((sd === undefined) === (se === undefined)) throw refuse('give either the sd or the se')
+  const spread = sd ?? se ?? NaN
+  if (!(spread >= 0 && spread < Infinity)) {
+    throw refuse(`the ${sd === undefined ? 'se' : 'sd'} is a finite number of at least 0, not ${spread}`)
+  }
+  const root = Math.sqrt(n)
+  return { group, n, mean, sd: sd ?? spread * root, se: se ?? spread / root }
+}
+
+export const sum = (values: readonly number[]): number => values.reduce((total, value) => total + value, 0)
