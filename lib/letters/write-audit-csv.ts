@@ -1,17 +1,16 @@
+import { writeCsv, type CsvCell } from '@/lib/checks/table/write-csv'
 import type { Audit, Report } from '@/lib/checks/types'
-
-type Cell = string | number | boolean | null
 
 /** An audit's reports as CSV (RFC 4180), one a row, each with its family, the decision on it and its statistic. */
 export function writeAuditCsv(audit: Audit): string {
   const rows = audit.reports.map((report) => Object.values(toRow(audit, report)))
   const header = audit.reports[0] ? Object.keys(toRow(audit, audit.reports[0])) : noReports
-  return [header, ...rows].map((row) => `${row.map(writeCell).join(',')}\r\n`).join('')
+  return writeCsv([header, ...rows])
 }
 
 const noReports = ['report']
 
-function toRow(audit: Audit, report: Report): Record<string, Cell> {
+function toRow(audit: Audit, report: Report): Record<string, CsvCell> {
   const family = audit.families.find((one) => one.id === report.family)
   const decision = family?.decisions.find((one) => one.report === report.id)
   const claim = audit.claims.find((one) => one.id === family?.claim)
@@ -49,12 +48,4 @@ function toRow(audit: Audit, report: Report): Record<string, Cell> {
     p_low: statistic?.pLow ?? null,
     p_high: statistic?.pHigh ?? null,
   }
-}
-
-/** Text that a spreadsheet would take for a formula is led by an apostrophe; numbers stay numbers. */
-function writeCell(cell: Cell): string {
-  if (cell === null) return ''
-  if (typeof cell !== 'string') return String(cell)
-  const text = /^[=+\-@\t\r]/.test(cell) ? `'${cell}` : cell
-  return /[",\r\n]/.test(text) ? `"${text.replaceAll('"', '""')}"` : text
 }
