@@ -24,6 +24,22 @@ export const PROCEDURES = [
 ] as const
 export type Procedure = (typeof PROCEDURES)[number]
 
+/** Procedures that the engine computes but that no claim is read as. */
+export const FURTHER_PROCEDURES = [
+  'weighted-bonferroni',
+  'weighted-holm',
+  'shaffer',
+  'fixed-sequence',
+  'fallback',
+  'graphical',
+  'bky-unscaled',
+  'tsbh',
+  'fisher-hayter',
+  'steel-dwass',
+] as const
+export const CATALOGUE = [...PROCEDURES, ...FURTHER_PROCEDURES] as const
+export type CatalogueProcedure = (typeof CATALOGUE)[number]
+
 export const CLAIMED_PROCEDURES = [...PROCEDURES, 'fdr', 'unspecified', 'none'] as const
 export type ClaimedProcedure = (typeof CLAIMED_PROCEDURES)[number]
 

@@ -1,26 +1,26 @@
-import type { Procedure } from '../vocabulary'
-import { adjust, type AdjustOptions } from './adjust'
-import { firstStageLevel } from './bky'
+import type { CatalogueProcedure } from '../vocabulary'
+import { adjust, findRow, type AdjustOptions } from './adjust'
 
 export type Bounds = { low: number[]; high: number[] }
 
 /**
  * The exact bounds of each adjusted p-value when every p[i] ranges over [low[i], high[i]] on its own. Shapes,
  * ranges and errors as in `adjust`; RangeError also where `low` and `high` differ in length, in what is NaN, or in
- * order. Every procedure but the two-stage one is monotone in each p-value, so that the ends of the box give the
- * bounds. For 'bky' a lower bound may be an infimum that is not attained (the last p just above the level of the
- * first stage); it is then right to 1e-13.
+ * order. Every procedure but the two-stage ones is monotone in each p-value, so that the ends of the box give the
+ * bounds. For the two-stage ones ('bky', 'bky-unscaled', 'tsbh') a lower bound may be an infimum that is not attained
+ * (the last p just above the level of the first stage); it is then right to 1e-13.
  */
 export function adjustBounds(
-  procedure: Procedure,
+  procedure: CatalogueProcedure,
   low: readonly number[],
   high: readonly number[],
   options: AdjustOptions = {},
 ): Bounds {
   checkBox(low, high)
+  const { firstStage } = findRow(procedure)
   const run = (p: readonly number[]) => adjust(procedure, p, options)
-  if (procedure !== 'bky') return { low: run(low), high: run(high) }
-  return boundTwoStage(low, high, firstStageLevel(options.alpha ?? 0.05), run)
+  if (firstStage === null) return { low: run(low), high: run(high) }
+  return boundTwoStage(low, high, firstStage(options.alpha ?? 0.05), run)
 }
 
 function checkBox(low: readonly number[], high: readonly number[]) {
@@ -33,7 +33,7 @@ function checkBox(low: readonly number[], high: readonly number[]) {
 }
 
 /**
- * The two-stage procedure is monotone as long as its first stage rejects all, and as long as it does not; it drops
+ * A two-stage procedure is monotone as long as its first stage rejects all, and as long as it does not; it drops
  * where the largest p passes `level`. The bounds are those over both regimes. Where every low end lies below the
  * level, the second regime begins with one p raised just above it, and raising the largest that can be raised
  * leaves all others lowest; for that one itself the next largest is raised.

@@ -1,41 +1,106 @@
-import type { Procedure } from '../vocabulary'
+import type { CatalogueProcedure } from '../vocabulary'
 import type { AdjustSorted } from './sorted-family'
-import { procedureTable } from './table'
+import { sortOrder } from './sort-order'
+import { procedureTable, type ProcedureRow } from './table'
 
-/** `m`: size of the whole family, default the number of known p-values; `alpha`: for two-stage procedures, default 0.05. */
-export type AdjustOptions = { m?: number; alpha?: number }
+/**
+ * `m`: size of the whole family, default the number of known p-values; `alpha`: for two-stage procedures, default
+ * 0.05. `weights`, `transitions` (rows of a square matrix) and `groups` are for the procedures whose row in the table
+ * takes them.
+ */
+export type AdjustOptions = {
+  m?: number
+  alpha?: number
+  weights?: readonly number[]
+  transitions?: readonly (readonly number[])[]
+  groups?: number
+}
 
 /**
  * Adjusted p-values in input order, each in [0, 1]. `p` in [0, 1]; NaN stays NaN and does not count towards m. Where
  * `m` exceeds the number of known p-values, the unknown members act as p = 1 at the end of the order (as `n` in R's
- * p.adjust). O(n log n).
- * Throws RangeError for a procedure that needs more than p-values, for p outside [0, 1], for an `m` that is not an
- * integer or is below the number of known p-values, and for alpha outside (0, 1).
+ * p.adjust). O(n log n) or better for every procedure but the graphical one, O(n³).
+ * The procedures with `adjustInOrder` in the table need more than the set of p-values: weights or a place in the order.
+ * There NaN holds its place and its weight, acts on the others as p = 1, and counts towards m, whose default is the
+ * length of `p`.
+ * Throws RangeError for a procedure that needs statistics or data, for p outside [0, 1], for an `m` that is not an
+ * integer or is below the number of p-values, for alpha outside (0, 1), for an option that the procedure does not take,
+ * and for weights, transitions or groups that do not fit (see the files of these procedures).
  * Sources: see the files of the procedures.
  */
-export function adjust(procedure: Procedure, p: readonly number[], options: AdjustOptions = {}): number[] {
-  const sorted = getKnown(p).sort()
-  const adjusted = getFunction(procedure)(sorted, getFamilySize(sorted.length, options), getLevel(options))
-  const find = createFinder(sorted)
-  return p.map((value) => (Number.isNaN(value) ? NaN : (adjusted[find(value)] ?? NaN)))
+export function adjust(
+  procedure: CatalogueProcedure,
+  p: readonly number[],
+  options: AdjustOptions = {},
+): number[] {
+  const row = findRow(procedure)
+  checkOptions(row, options)
+  const alpha = getLevel(options)
+  const known = getKnown(p)
+  if (row.adjustInOrder !== null) {
+    const { weights, transitions, groups } = options
+    const m = getFamilySize(p.length, options)
+    const places =
+      known.length === p.length ? known : Float64Array.from(p, (value) => (value >= 0 ? value : 1))
+    return spread(p, row.adjustInOrder(places, { m, weights, transitions, groups }), true)
+  }
+  const run = getFunction(row)
+  const m = getFamilySize(known.length, options)
+  return spread(p, row.singleStep ? run(known, m, alpha) : adjustBySorting(run, known, m, alpha), false)
 }
 
-/** The function of the p-values; RangeError where the table has none. */
-export function getFunction(procedure: Procedure): AdjustSorted {
+/** Adjusted values of `known` in its own order, by a function of the ascending ones. */
+function adjustBySorting(run: AdjustSorted, known: Float64Array, m: number, alpha: number): Float64Array {
+  const order = sortOrder(known)
+  const sorted = new Float64Array(known.length)
+  for (let rank = 0; rank < order.length; rank++) sorted[rank] = known[order[rank] ?? 0] ?? 1
+  const ascending = run(sorted, m, alpha)
+  const adjusted = new Float64Array(known.length)
+  for (let rank = 0; rank < order.length; rank++) adjusted[order[rank] ?? 0] = ascending[rank] ?? 1
+  return adjusted
+}
+
+/** The adjusted values as a list beside `p`, NaN where `p` is; `aligned` where `adjusted` has a place for these too. */
+function spread(p: readonly number[], adjusted: Float64Array, aligned: boolean): number[] {
+  const list = new Array<number>(p.length)
+  let next = 0
+  for (let i = 0; i < p.length; i++) {
+    const value = p[i] ?? NaN
+    if (Number.isNaN(value)) list[i] = NaN
+    else list[i] = adjusted[aligned ? i : next++] ?? NaN
+  }
+  return list
+}
+
+/** The row of a procedure; RangeError for what is none. */
+export function findRow(procedure: CatalogueProcedure): ProcedureRow {
   const row = Object.hasOwn(procedureTable, procedure) ? procedureTable[procedure] : null
   if (row === null) throw new RangeError(`'${procedure}' is no known procedure`)
+  return row
+}
+
+/** The function of the p-values alone; RangeError where the row has none. */
+export function getFunction(row: ProcedureRow): AdjustSorted {
   if (row.adjust === null) {
     throw new RangeError(`${row.label} cannot be computed from p-values alone: it needs ${row.needs}`)
   }
   return row.adjust
 }
 
+function checkOptions({ label, takes }: ProcedureRow, options: AdjustOptions) {
+  for (const option of ['weights', 'transitions', 'groups'] as const) {
+    if (options[option] !== undefined && !takes.includes(option))
+      throw new RangeError(`${label} takes no ${option}`)
+  }
+}
+
 function getKnown(p: readonly number[]): Float64Array {
   const known = new Float64Array(p.length)
   let size = 0
-  for (const value of p) {
-    if (value < 0 || value > 1) throw new RangeError(`a p-value lies in [0, 1], not at ${value}`)
-    if (!Number.isNaN(value)) known[size++] = value
+  for (let i = 0; i < p.length; i++) {
+    const value = p[i] ?? NaN
+    if (value >= 0 && value <= 1) known[size++] = value
+    else if (!Number.isNaN(value)) throw new RangeError(`a p-value lies in [0, 1], not at ${value}`)
   }
   return known.subarray(0, size)
 }
@@ -50,28 +115,4 @@ function getFamilySize(known: number, { m = known }: AdjustOptions): number {
 function getLevel({ alpha = 0.05 }: AdjustOptions): number {
   if (!(alpha > 0 && alpha < 1)) throw new RangeError(`alpha lies between 0 and 1, not at ${alpha}`)
   return alpha
-}
-
-/**
- * Finds the index of the first element of ascending `sorted`, all in [0, 1], that is at least a given value: by
- * bisection within the stretch that a table of equal steps leads to. Equal p-values have equal adjusted values, so
- * that looking them up is as good as carrying their places through the sorting, and faster.
- */
-function createFinder(sorted: Float64Array): (value: number) => number {
-  const steps = Math.max(1, sorted.length)
-  const first = new Uint32Array(steps + 2).fill(sorted.length)
-  for (let i = sorted.length - 1; i >= 0; i--) first[Math.floor((sorted[i] ?? 1) * steps)] = i
-  for (let step = steps; step >= 0; step--) first[step] = Math.min(first[step] ?? 0, first[step + 1] ?? 0)
-
-  return (value) => {
-    const step = Math.floor(value * steps)
-    let low = first[step] ?? 0
-    let high = first[step + 1] ?? sorted.length
-    while (low < high) {
-      const middle = (low + high) >> 1
-      if ((sorted[middle] ?? 1) < value) low = middle + 1
-      else high = middle
-    }
-    return low
-  }
 }

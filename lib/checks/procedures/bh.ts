@@ -1,4 +1,4 @@
-import { descend } from './sorted-family'
+import { stepUp } from './sorted-family'
 
 /**
  * Benjamini–Hochberg, step-up: min over j >= i of (m / j) p(j). Controls the false discovery rate for independent
@@ -6,5 +6,5 @@ import { descend } from './sorted-family'
  * Source: Benjamini and Hochberg (1995), J R Stat Soc B 57, 289–300.
  */
 export function bh(sorted: Float64Array, m: number): Float64Array {
-  return descend(sorted.map((p, i) => (m / (i + 1)) * p))
+  return stepUp(sorted, (p, i) => (m / (i + 1)) * p)
 }

@@ -1,4 +1,4 @@
-import { descend } from './sorted-family'
+import { stepUp } from './sorted-family'
 
 const EULER = 0.5772156649015329
 
@@ -19,5 +19,5 @@ export function harmonic(m: number): number {
  */
 export function by(sorted: Float64Array, m: number): Float64Array {
   const sum = harmonic(m)
-  return descend(sorted.map((p, i) => (m / (i + 1)) * sum * p))
+  return stepUp(sorted, (p, i) => (m / (i + 1)) * sum * p)
 }

@@ -1,4 +1,4 @@
-import { descend } from './sorted-family'
+import { stepUp } from './sorted-family'
 
 /**
  * Hochberg, step-up: min over j >= i of (m − j + 1) p(j). Controls the family-wise error rate for independent
@@ -6,5 +6,5 @@ import { descend } from './sorted-family'
  * Source: Hochberg (1988), A sharper Bonferroni procedure for multiple tests of significance, Biometrika 75, 800–802.
  */
 export function hochberg(sorted: Float64Array, m: number): Float64Array {
-  return descend(sorted.map((p, i) => (m - i) * p))
+  return stepUp(sorted, (p, i) => (m - i) * p)
 }

@@ -1,5 +1,5 @@
 import { atLeastOneOf } from './sidak'
-import { climb } from './sorted-family'
+import { stepDown } from './sorted-family'
 
 /**
  * Holm's step-down order with Šidák's bound: max over j <= i of 1 − (1 − p(j))^(m − j + 1). Controls the
@@ -8,5 +8,5 @@ import { climb } from './sorted-family'
  * Biometrics 43, 417–423.
  */
 export function holmSidak(sorted: Float64Array, m: number): Float64Array {
-  return climb(sorted.map((p, i) => atLeastOneOf(m - i, p)))
+  return stepDown(sorted, (p, i) => atLeastOneOf(m - i, p))
 }

@@ -1,3 +1,5 @@
+import { singleStep } from './sorted-family'
+
 /**
  * 1 − (1 − p)^m without cancellation: p in [0, 1], m >= 1. The probability that the smallest of m independent
  * uniform p-values is at most p.
@@ -11,5 +13,5 @@ export function atLeastOneOf(m: number, p: number): number {
  * dependent ones. Source: Šidák (1967), J Am Stat Assoc 62, 626–633.
  */
 export function sidak(sorted: Float64Array, m: number): Float64Array {
-  return sorted.map((p) => atLeastOneOf(m, p))
+  return singleStep(sorted, (p) => atLeastOneOf(m, p))
 }

@@ -6,22 +6,39 @@
  */
 export type AdjustSorted = (sorted: Float64Array, m: number, alpha: number) => Float64Array
 
-/** Makes `values` non-decreasing from its start (step-down) and caps them at 1, in place. */
-export function climb(values: Float64Array): Float64Array {
+/** What turns one p-value of an ascending family, at index i from 0, into its own bound before those around it count. */
+export type Step = (p: number, i: number) => number
+
+/** Step-down: the largest step so far, capped at 1. */
+export function stepDown(sorted: Float64Array, step: Step): Float64Array {
+  const adjusted = new Float64Array(sorted.length)
   let largest = 0
-  for (let i = 0; i < values.length; i++) {
-    largest = Math.max(largest, values[i] ?? 0)
-    values[i] = Math.min(1, largest)
+  for (let i = 0; i < sorted.length; i++) {
+    const value = step(sorted[i] ?? 1, i)
+    if (value > largest) largest = value < 1 ? value : 1
+    adjusted[i] = largest
   }
-  return values
+  return adjusted
 }
 
-/** Makes `values` non-decreasing from its end (step-up) and caps them at 1, in place. */
-export function descend(values: Float64Array): Float64Array {
+/** Step-up: the smallest step from here to the end, capped at 1. */
+export function stepUp(sorted: Float64Array, step: Step): Float64Array {
+  const adjusted = new Float64Array(sorted.length)
   let smallest = 1
-  for (let i = values.length - 1; i >= 0; i--) {
-    smallest = Math.min(smallest, values[i] ?? 1)
-    values[i] = smallest
+  for (let i = sorted.length - 1; i >= 0; i--) {
+    const value = step(sorted[i] ?? 1, i)
+    if (value < smallest) smallest = value
+    adjusted[i] = smallest
   }
-  return values
+  return adjusted
+}
+
+/** Each value by itself, capped at 1, whatever the order. */
+export function singleStep(p: Float64Array, bound: (p: number) => number): Float64Array {
+  const adjusted = new Float64Array(p.length)
+  for (let i = 0; i < p.length; i++) {
+    const value = bound(p[i] ?? 1)
+    adjusted[i] = value < 1 ? value : 1
+  }
+  return adjusted
 }

@@ -12,5 +12,7 @@ export function storey(sorted: Float64Array, m: number): Float64Array {
   let above = m - sorted.length
   for (const p of sorted) if (p >= LAMBDA) above++
   const share = Math.min(1, above / (m * (1 - LAMBDA)))
-  return bh(sorted, m).map((q) => share * q)
+  const adjusted = bh(sorted, m)
+  for (let i = 0; i < adjusted.length; i++) adjusted[i] = share * (adjusted[i] ?? 1)
+  return adjusted
 }

@@ -1,21 +1,33 @@
-import type { Procedure } from '../vocabulary'
+import type { CatalogueProcedure } from '../vocabulary'
 import { bh } from './bh'
-import { bky } from './bky'
+import { bky, firstStageLevel } from './bky'
+import { bkyUnscaled } from './bky-unscaled'
 import { bonferroni } from './bonferroni'
 import { by } from './by'
+import { fallback } from './fallback'
+import { fixedSequence } from './fixed-sequence'
+import { graphical } from './graphical'
 import { hochberg } from './hochberg'
 import { holm } from './holm'
 import { holmSidak } from './holm-sidak'
 import { hommel } from './hommel'
+import type { AdjustInOrder } from './in-order'
+import { shaffer } from './shaffer'
 import { sidak } from './sidak'
 import type { AdjustSorted } from './sorted-family'
 import { storey } from './storey'
+import { tsbh } from './tsbh'
+import { weightedBonferroni } from './weighted-bonferroni'
+import { weightedHolm } from './weighted-holm'
 
 /**
  * `label`: the trade's name. `controls`: the error rate that is controlled, 'none' where none is. `upToGroups`: the
  * largest number of groups for which it is controlled, null for any number. `assumption`: what it needs.
- * `source`: author, year. `adjust`: the function of the p-values alone; null where more than them is needed, which
- * `needs` then names.
+ * `source`: author, year. `needs`: what it is computed from. `adjust`: the function of the p-values alone, null where
+ * more than their set is needed; `singleStep`: it takes each of them by itself, in any order. `adjustInOrder`: the
+ * function of the p-values in input order with the options that `takes` names, null where there is none. `firstStage`:
+ * of two-stage procedures, the level of the first stage at a given alpha. `heldAgainst`: the level that adjusted values
+ * are held against at a given alpha.
  */
 export type ProcedureRow = {
   label: string
@@ -25,7 +37,27 @@ export type ProcedureRow = {
   source: string
   needs: string
   adjust: AdjustSorted | null
+  singleStep: boolean
+  adjustInOrder: AdjustInOrder | null
+  takes: readonly ('weights' | 'transitions' | 'groups')[]
+  firstStage: ((alpha: number) => number) | null
+  heldAgainst: (alpha: number) => number
 }
+
+type About = Pick<ProcedureRow, 'label' | 'controls' | 'assumption' | 'source'>
+type Way = Partial<ProcedureRow> & Pick<ProcedureRow, 'needs'>
+
+const NO_WAY = {
+  upToGroups: null,
+  adjust: null,
+  singleStep: false,
+  adjustInOrder: null,
+  takes: [],
+  firstStage: null,
+  heldAgainst: (alpha: number) => alpha,
+} as const
+
+const createRow = (about: About, way: Way): ProcedureRow => ({ ...NO_WAY, ...about, ...way })
 
 const row = (
   label: string,
@@ -33,7 +65,17 @@ const row = (
   assumption: string,
   source: string,
   adjust: AdjustSorted,
-): ProcedureRow => ({ label, controls, upToGroups: null, assumption, source, needs: 'the p-values', adjust })
+  more: Partial<ProcedureRow> = {},
+) => createRow({ label, controls, assumption, source }, { needs: 'the p-values', adjust, ...more })
+
+const rowInOrder = (
+  label: string,
+  assumption: string,
+  source: string,
+  needs: string,
+  adjustInOrder: AdjustInOrder,
+  takes: ProcedureRow['takes'],
+) => createRow({ label, controls: 'fwer', assumption, source }, { needs, adjustInOrder, takes })
 
 const rowOfStatistics = (
   label: string,
@@ -42,12 +84,14 @@ const rowOfStatistics = (
   source: string,
   needs: string,
   upToGroups: number | null = null,
-): ProcedureRow => ({ label, controls, upToGroups, assumption, source, needs, adjust: null })
+) => createRow({ label, controls, assumption, source }, { needs, upToGroups })
 
 /** What is known of each procedure: the one place for labels, error rates, assumptions and sources. */
-export const procedureTable: Record<Procedure, ProcedureRow> = {
-  bonferroni: row('Bonferroni', 'fwer', 'none', 'Dunn 1961', bonferroni),
-  sidak: row('Šidák', 'fwer', 'independent or positively orthant dependent tests', 'Šidák 1967', sidak),
+export const procedureTable: Record<CatalogueProcedure, ProcedureRow> = {
+  bonferroni: row('Bonferroni', 'fwer', 'none', 'Dunn 1961', bonferroni, { singleStep: true }),
+  sidak: row('Šidák', 'fwer', 'independent or positively orthant dependent tests', 'Šidák 1967', sidak, {
+    singleStep: true,
+  }),
   holm: row('Holm', 'fwer', 'none', 'Holm 1979', holm),
   'holm-sidak': row(
     'Holm–Šidák',
@@ -72,6 +116,23 @@ export const procedureTable: Record<Procedure, ProcedureRow> = {
     'independent tests',
     'Benjamini, Krieger and Yekutieli 2006, definition 6',
     bky,
+    { firstStage: firstStageLevel },
+  ),
+  'bky-unscaled': row(
+    'two-stage Benjamini–Krieger–Yekutieli, held against alpha / (1 + alpha)',
+    'fdr',
+    'independent tests',
+    'Benjamini, Krieger and Yekutieli 2006, definition 6',
+    bkyUnscaled,
+    { firstStage: firstStageLevel, heldAgainst: firstStageLevel },
+  ),
+  tsbh: row(
+    'two-stage Benjamini–Hochberg, first stage at alpha',
+    'fdr',
+    'independent tests; approximate',
+    'variant of Benjamini, Krieger and Yekutieli 2006',
+    tsbh,
+    { firstStage: (alpha) => alpha },
   ),
   storey: row('Storey q-value', 'fdr', 'independent or weakly dependent tests', 'Storey 2002', storey),
   tukey: rowOfStatistics(
@@ -146,5 +207,67 @@ export const procedureTable: Record<Procedure, ProcedureRow> = {
     'known or estimated correlations of the statistics',
     'Hothorn, Bretz and Westfall 2008',
     'the statistics and their correlations',
+  ),
+  'weighted-bonferroni': rowInOrder(
+    'weighted Bonferroni',
+    'weights fixed beforehand',
+    'Rosenthal and Rubin 1983',
+    'the p-values and their weights',
+    weightedBonferroni,
+    ['weights'],
+  ),
+  'weighted-holm': rowInOrder(
+    'weighted Holm',
+    'weights fixed beforehand',
+    'Holm 1979',
+    'the p-values and their weights',
+    weightedHolm,
+    ['weights'],
+  ),
+  shaffer: rowInOrder(
+    'Shaffer S1',
+    'pairwise comparisons of one set of groups',
+    'Shaffer 1986',
+    'the p-values and the number of groups',
+    shaffer,
+    ['groups'],
+  ),
+  'fixed-sequence': rowInOrder(
+    'fixed sequence',
+    'order fixed beforehand',
+    'Maurer, Hothorn and Lehmacher 1995; Westfall and Krishen 2001',
+    'the p-values in the order of testing',
+    fixedSequence,
+    [],
+  ),
+  fallback: rowInOrder(
+    'fallback',
+    'order and weights fixed beforehand',
+    'Wiens 2003; Wiens and Dmitrienko 2005',
+    'the p-values in the order of testing and their weights',
+    fallback,
+    ['weights'],
+  ),
+  graphical: rowInOrder(
+    'graphical procedure',
+    'weights and transitions fixed beforehand',
+    'Bretz, Maurer, Brannath and Posch 2009',
+    'the p-values, their weights and the transitions between them',
+    graphical,
+    ['weights', 'transitions'],
+  ),
+  'fisher-hayter': rowOfStatistics(
+    'Fisher–Hayter',
+    'fwer',
+    'a significant omnibus test; all pairs; normal, equal variances',
+    'Hayter 1986',
+    't statistics with the pooled variance, its df, the number of groups and the omnibus p-value',
+  ),
+  'steel-dwass': rowOfStatistics(
+    'Steel–Dwass–Critchlow–Fligner',
+    'fwer',
+    'all pairs; distributions of the same shape; large samples',
+    'Steel 1960; Dwass 1960; Critchlow and Fligner 1991',
+    'the data of each group',
   ),
 }
