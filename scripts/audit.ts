@@ -1,6 +1,7 @@
 import { parseArgs } from 'node:util'
 import { audit } from '@/lib/checks/audit'
 import { defaultHouseRules } from '@/lib/checks/house-rules'
+import { writeAuditScript } from '@/lib/checks/r-script/audit-script'
 import { layOut } from '@/lib/checks/text/lay-out'
 import { readPdf } from '@/lib/intake/pdf/read-pdf'
 import { readTableFile } from '@/lib/intake/table/read-table'
@@ -8,7 +9,7 @@ import { printAudit } from '@/lib/letters/print-audit'
 import { isRefusal } from '@/lib/rules/refusal'
 
 const usage =
-  'usage: npm run --silent audit -- [--json] [--alpha 0.05] manuscript.pdf [results.csv|.tsv|.xlsx]'
+  'usage: npm run --silent audit -- [--json | --r] [--alpha 0.05] manuscript.pdf [results.csv|.tsv|.xlsx]'
 
 try {
   process.exitCode = await run(process.argv.slice(2))
@@ -21,7 +22,12 @@ async function run(args: string[]): Promise<number> {
   const { values, positionals } = parseArgs({
     args,
     allowPositionals: true,
-    options: { json: { type: 'boolean' }, text: { type: 'boolean' }, alpha: { type: 'string' } },
+    options: {
+      json: { type: 'boolean' },
+      text: { type: 'boolean' },
+      r: { type: 'boolean' },
+      alpha: { type: 'string' },
+    },
   })
   const [manuscript, results] = positionals
   const alpha = values.alpha === undefined ? defaultHouseRules.alpha : Number(values.alpha)
@@ -38,7 +44,9 @@ async function run(args: string[]): Promise<number> {
   const table = results ? await readOrSay(results, readTableFile) : null
   if (results && !table) return 2
   const result = audit(document, table, { ...defaultHouseRules, alpha })
-  await print(values.json ? JSON.stringify(result, null, 1) : printAudit(result))
+  await print(
+    values.r ? writeAuditScript(result) : values.json ? JSON.stringify(result, null, 1) : printAudit(result),
+  )
   return 0
 }
 

@@ -88,14 +88,8 @@ const workingSchema = z
     tests: z.array(
       z.object({
         statistics: strings,
-        witnesses: z.array(
-          z.object({
-            id: z.string(),
-            low: z.number(),
-            high: z.number(),
-            is: z.enum(['raw', 'adjusted', 'open']),
-          }),
-        ),
+        oneSided: z.boolean(),
+        witnesses: z.array(z.object({ id: z.string(), is: z.enum(['raw', 'adjusted', 'open']) })),
         raw: ends.nullable(),
       }),
     ),

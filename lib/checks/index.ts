@@ -1,5 +1,7 @@
 export { audit, ENGINE, STAGES, type Stage } from './audit'
 export { dunnettUpper } from './distributions/dunnett'
+export { noncentralFTails } from './distributions/noncentral-f'
+export { noncentralTBeyond, noncentralTLower, noncentralTUpper } from './distributions/noncentral-t'
 export { studentizedRangeUpper } from './distributions/studentized-range'
 export { logTail, tail, type TailTest } from './distributions/tail'
 export { dunnettQuantile, studentizedRangeQuantile, upperQuantile } from './distributions/upper-quantile'
@@ -14,6 +16,7 @@ export { pGamesHowellFromWelch } from './procedures/games-howell'
 export { pScheffeFromT } from './procedures/scheffe'
 export { procedureTable, type ProcedureRow } from './procedures/table'
 export { pTukeyFromT } from './procedures/tukey'
+export { writeAuditScript, writeFamilyScript } from './r-script/audit-script'
 export { fits, type FitOptions } from './recover/fits'
 export {
   fitsFromStatistics,
@@ -22,8 +25,26 @@ export {
   type StatisticFitOptions,
 } from './recover/fits-from-statistics'
 export { thresholdFits, type ThresholdFit } from './recover/threshold-fits'
-export { familyWiseError, type DependenceOptions } from './sensitivity/family-wise-error'
+export { compareProcedurePower, type ComparedDesign, type ProcedurePower } from './sensitivity/compare-power'
+export {
+  familyWiseError,
+  familyWiseErrorAtMost,
+  protectedLsdError,
+  type DependenceOptions,
+} from './sensitivity/family-wise-error'
 export { powerCost, powerOfTTest, sampleSizeOfTTest, type PowerDesign } from './sensitivity/power'
+export {
+  computeCorrectionCost,
+  computePower,
+  findDetectableEffect,
+  findSampleSize,
+  type CorrectionCost,
+  type DesignOptions,
+  type SampleSize,
+  type TestDesign,
+} from './sensitivity/power-of-design'
+export { simultaneousConfidence } from './sensitivity/simultaneous-confidence'
+export { survivesRange, survivesRanges, type SurvivalRange } from './sensitivity/survives-range'
 export { survivesUpTo, survivesUpToByBh, survivesUpToByHolm } from './sensitivity/survives-up-to'
 export type { SummaryGroup, GroupMoments } from './summary/groups'
 export type { ComparisonBounds } from './summary/bound-comparisons'

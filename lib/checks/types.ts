@@ -138,8 +138,9 @@ export type Fit = { procedure: Procedure | 'raw'; m: number }
  * `parts`: numbers of tests that an m below the family's size applies to one by one; one number where it is whole.
  * `undone`: by what printed adjusted values are turned back where nothing else is printed. `trusted`: the printed
  * adjusted values follow the claim, so that their digits count. `fitsUpTo`: the largest m tried for `fits`.
- * `tests`: in the order of the decisions; `statistics` are ids, `witnesses` the ranges of p that each print (by its
- * id) stands for, `raw` the range of the unadjusted p that follows, null where nothing is known.
+ * `tests`: in the order of the decisions; `statistics` are ids, `witnesses` the prints (reports and statistics, by id)
+ * that speak of the test's p-value and what each is taken for, a statistic by half of its two-sided p where the test is
+ * `oneSided`; `raw`: the range of the unadjusted p that follows, null where nothing is known.
  */
 export type Working = {
   procedure: Procedure | 'raw' | 'any'
@@ -152,7 +153,8 @@ export type Working = {
   fitsUpTo: number
   tests: {
     statistics: string[]
-    witnesses: { id: string; low: number; high: number; is: 'raw' | 'adjusted' | 'open' }[]
+    oneSided: boolean
+    witnesses: { id: string; is: 'raw' | 'adjusted' | 'open' }[]
     raw: [low: number, high: number] | null
   }[]
 }

@@ -15,7 +15,7 @@ import type { FamilyDraft } from './join-outcomes'
 import { labelOf } from './label'
 import { leadOf } from './lead'
 import { outcomeOf, whyOf } from './outcome'
-import { weighEvidence } from './weigh-evidence'
+import { isOneSided, weighEvidence } from './weigh-evidence'
 
 export type Setting = { remarks: Remarks; rules: HouseRules; alpha: number }
 
@@ -129,7 +129,8 @@ function showTest(comparison: Comparison, evidence: Evidence | undefined): Worki
   const { raw = null, witnesses = [] } = evidence ?? {}
   return {
     statistics: statisticsOf(comparison).map(({ id }) => id),
-    witnesses: witnesses.map(({ id, range: { low, high }, is }) => ({ id, low, high, is })),
+    oneSided: isOneSided(comparison),
+    witnesses: witnesses.map(({ id, is }) => ({ id, is })),
     raw: raw && [raw.low, raw.high],
   }
 }

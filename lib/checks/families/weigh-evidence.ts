@@ -38,9 +38,13 @@ export function weighEvidence(
   }
 }
 
+export function isOneSided({ items }: Comparison): boolean {
+  return items.some(({ report }) => report.oneSided)
+}
+
 /** Statistics first, then printed p-values; of a test stated as one-sided half of the statistic's two-sided p. */
 function listWitnesses(comparison: Comparison, series: readonly Series[]): Witness[] {
-  const oneSided = comparison.items.some(({ report }) => report.oneSided)
+  const oneSided = isOneSided(comparison)
   const byStatistic = statisticsOf(comparison).flatMap((statistic): Witness[] => {
     const range = rangeOfP(statistic)
     if (!range) return []
