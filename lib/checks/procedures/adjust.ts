@@ -1,6 +1,6 @@
 import type { CatalogueProcedure } from '../vocabulary'
-import type { AdjustSorted } from './sorted-family'
-import { sortOrder } from './sort-order'
+import type { AdjustEach, AdjustSorted } from './sorted-family'
+import { rankValues } from './rank-values'
 import { procedureTable, type ProcedureRow } from './table'
 
 /**
@@ -36,6 +36,7 @@ export function adjust(
   const row = findRow(procedure)
   checkOptions(row, options)
   const alpha = getLevel(options)
+  if (row.adjustEach !== null) return adjustOneByOne(p, row.adjustEach, getFamilySize(countKnown(p), options))
   const known = getKnown(p)
   if (row.adjustInOrder !== null) {
     const { weights, transitions, groups } = options
@@ -46,28 +47,37 @@ export function adjust(
   }
   const run = getFunction(row)
   const m = getFamilySize(known.length, options)
-  return spread(p, row.singleStep ? run(known, m, alpha) : adjustBySorting(run, known, m, alpha), false)
+  return spread(p, adjustByRank(run, known, m, alpha), false)
+}
+
+function adjustOneByOne(p: readonly number[], adjustEach: AdjustEach, m: number): number[] {
+  // A copy is the fastest way to a list of that many numbers.
+  const adjusted = p.slice()
+  for (let i = 0; i < adjusted.length; i++) {
+    const value = adjusted[i] ?? NaN
+    if (!Number.isNaN(value)) adjusted[i] = adjustEach(value, m)
+  }
+  return adjusted
 }
 
 /** Adjusted values of `known` in its own order, by a function of the ascending ones. */
-function adjustBySorting(run: AdjustSorted, known: Float64Array, m: number, alpha: number): Float64Array {
-  const order = sortOrder(known)
-  const sorted = new Float64Array(known.length)
-  for (let rank = 0; rank < order.length; rank++) sorted[rank] = known[order[rank] ?? 0] ?? 1
-  const ascending = run(sorted, m, alpha)
-  const adjusted = new Float64Array(known.length)
-  for (let rank = 0; rank < order.length; rank++) adjusted[order[rank] ?? 0] = ascending[rank] ?? 1
+function adjustByRank(run: AdjustSorted, known: Float64Array, m: number, alpha: number): Float64Array {
+  const { values, places } = rankValues(known)
+  return putInPlace(run(values, m, alpha), places)
+}
+
+function putInPlace(ascending: Float64Array, places: Uint32Array): Float64Array {
+  const adjusted = new Float64Array(ascending.length)
+  for (let rank = 0; rank < places.length; rank++) adjusted[places[rank] ?? 0] = ascending[rank] ?? 1
   return adjusted
 }
 
 /** The adjusted values as a list beside `p`, NaN where `p` is; `aligned` where `adjusted` has a place for these too. */
 function spread(p: readonly number[], adjusted: Float64Array, aligned: boolean): number[] {
-  const list = new Array<number>(p.length)
+  const list = p.slice()
   let next = 0
-  for (let i = 0; i < p.length; i++) {
-    const value = p[i] ?? NaN
-    if (Number.isNaN(value)) list[i] = NaN
-    else list[i] = adjusted[aligned ? i : next++] ?? NaN
+  for (let i = 0; i < list.length; i++) {
+    if (!Number.isNaN(list[i])) list[i] = adjusted[aligned ? i : next++] ?? NaN
   }
   return list
 }
@@ -95,14 +105,23 @@ function checkOptions({ label, takes }: ProcedureRow, options: AdjustOptions) {
 }
 
 function getKnown(p: readonly number[]): Float64Array {
-  const known = new Float64Array(p.length)
+  const known = new Float64Array(countKnown(p))
   let size = 0
   for (let i = 0; i < p.length; i++) {
     const value = p[i] ?? NaN
-    if (value >= 0 && value <= 1) known[size++] = value
+    if (!Number.isNaN(value)) known[size++] = value
+  }
+  return known
+}
+
+function countKnown(p: readonly number[]): number {
+  let count = 0
+  for (let i = 0; i < p.length; i++) {
+    const value = p[i] ?? NaN
+    if (value >= 0 && value <= 1) count++
     else if (!Number.isNaN(value)) throw new RangeError(`a p-value lies in [0, 1], not at ${value}`)
   }
-  return known.subarray(0, size)
+  return count
 }
 
 function getFamilySize(known: number, { m = known }: AdjustOptions): number {

@@ -17,8 +17,8 @@ import { levelOf, readWeights } from './weights'
 export const fallback: AdjustInOrder = (p, { m, weights }) => {
   const shares = readWeights(weights, p.length, m)
   const adjusted = new Float64Array(p.length)
-  /** Where the adjusted values before i have their suffix maxima, and the weight up to and including these places. */
-  const places = new Int32Array(p.length)
+  /** The suffix maxima of the adjusted values before i, and the weight up to and including where they stand. */
+  const maxima = new Float64Array(p.length)
   const before = new Float64Array(p.length)
   let held = 0
   let total = 0
@@ -27,25 +27,22 @@ export const fallback: AdjustInOrder = (p, { m, weights }) => {
     const value = p[i] ?? 1
     const share = shares[i] ?? 0
     total += share
-    const maximum = (depth: number) => adjusted[places[depth] ?? 0] ?? 1
-    // The weight from just after the maximum below `depth`; with all maxima passed it begins at the first hypothesis.
-    const level = (depth: number) => levelOf(value, total - (depth > 0 ? (before[depth - 1] ?? 0) : 0))
 
-    // The deepest place at which the maximum is below what the weight since there asks for.
+    // The first of the maxima, which fall from the bottom up, that is below what the weight since the one under it asks for.
     let low = 0
     let high = held
     while (low < high) {
       const middle = (low + high) >> 1
-      if (maximum(middle) >= level(middle)) low = middle + 1
+      const since = total - (middle > 0 ? (before[middle - 1] ?? 0) : 0)
+      if ((maxima[middle] ?? 1) >= levelOf(value, since)) low = middle + 1
       else high = middle
     }
-    const passing = low > 0 ? maximum(low - 1) : Infinity
-    const asking = low < held ? level(low) : levelOf(value, share)
-    const found = Math.min(1, passing, asking)
+    const since = low < held ? total - (low > 0 ? (before[low - 1] ?? 0) : 0) : share
+    const found = Math.min(1, low > 0 ? (maxima[low - 1] ?? 1) : 1, levelOf(value, since))
 
     adjusted[i] = found
-    while (held > 0 && maximum(held - 1) <= found) held--
-    places[held] = i
+    while (held > 0 && (maxima[held - 1] ?? 1) <= found) held--
+    maxima[held] = found
     before[held] = total
     held++
   }

@@ -1,5 +1,5 @@
 import type { AdjustInOrder } from './in-order'
-import { sortOrder } from './sort-order'
+import { rankValues } from './rank-values'
 
 const pairsOf = (groups: number) => (groups * (groups - 1)) / 2
 
@@ -52,15 +52,15 @@ export const shaffer: AdjustInOrder = (p, { m, groups }) => {
     throw new RangeError(`all pairs of ${groups} groups are ${pairs}, not ${m}`)
 
   const counts = listTrueCounts(groups)
-  const order = sortOrder(p)
+  const { values, places } = rankValues(p)
   const adjusted = new Float64Array(p.length)
   let top = counts.length - 1
   let largest = 0
-  order.forEach((i, rank) => {
+  for (let rank = 0; rank < values.length; rank++) {
     while (top > 0 && (counts[top] ?? 0) > pairs - rank) top--
-    largest = Math.min(1, Math.max(largest, (counts[top] ?? 1) * (p[i] ?? 1)))
-    adjusted[i] = largest
-  })
+    largest = Math.min(1, Math.max(largest, (counts[top] ?? 1) * (values[rank] ?? 1)))
+    adjusted[places[rank] ?? 0] = largest
+  }
   return adjusted
 }
 

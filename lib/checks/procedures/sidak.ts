@@ -1,5 +1,3 @@
-import { singleStep } from './sorted-family'
-
 /**
  * 1 − (1 − p)^m without cancellation: p in [0, 1], m >= 1. The probability that the smallest of m independent
  * uniform p-values is at most p.
@@ -12,6 +10,6 @@ export function atLeastOneOf(m: number, p: number): number {
  * Šidák: 1 − (1 − p)^m. Controls the family-wise error rate for independent tests and for positively orthant
  * dependent ones. Source: Šidák (1967), J Am Stat Assoc 62, 626–633.
  */
-export function sidak(sorted: Float64Array, m: number): Float64Array {
-  return singleStep(sorted, (p) => atLeastOneOf(m, p))
+export function sidak(p: number, m: number): number {
+  return atLeastOneOf(m, p)
 }

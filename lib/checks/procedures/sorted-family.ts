@@ -33,12 +33,10 @@ export function stepUp(sorted: Float64Array, step: Step): Float64Array {
   return adjusted
 }
 
-/** Each value by itself, capped at 1, whatever the order. */
-export function singleStep(p: Float64Array, bound: (p: number) => number): Float64Array {
-  const adjusted = new Float64Array(p.length)
-  for (let i = 0; i < p.length; i++) {
-    const value = bound(p[i] ?? 1)
-    adjusted[i] = value < 1 ? value : 1
-  }
-  return adjusted
+/** What a single-step procedure does to each p-value in [0, 1] of a family of `m`, whatever the others are. */
+export type AdjustEach = (p: number, m: number) => number
+
+/** A single-step procedure as a function of the whole family. */
+export function adjustAll(each: AdjustEach): AdjustSorted {
+  return (p, m) => p.map((value) => each(value, m))
 }

@@ -14,7 +14,7 @@ import { hommel } from './hommel'
 import type { AdjustInOrder } from './in-order'
 import { shaffer } from './shaffer'
 import { sidak } from './sidak'
-import type { AdjustSorted } from './sorted-family'
+import { adjustAll, type AdjustEach, type AdjustSorted } from './sorted-family'
 import { storey } from './storey'
 import { tsbh } from './tsbh'
 import { weightedBonferroni } from './weighted-bonferroni'
@@ -24,7 +24,7 @@ import { weightedHolm } from './weighted-holm'
  * `label`: the trade's name. `controls`: the error rate that is controlled, 'none' where none is. `upToGroups`: the
  * largest number of groups for which it is controlled, null for any number. `assumption`: what it needs.
  * `source`: author, year. `needs`: what it is computed from. `adjust`: the function of the p-values alone, null where
- * more than their set is needed; `singleStep`: it takes each of them by itself, in any order. `adjustInOrder`: the
+ * more than their set is needed; `adjustEach`: the same for one of them, where the others do not matter. `adjustInOrder`: the
  * function of the p-values in input order with the options that `takes` names, null where there is none. `firstStage`:
  * of two-stage procedures, the level of the first stage at a given alpha. `heldAgainst`: the level that adjusted values
  * are held against at a given alpha.
@@ -37,7 +37,7 @@ export type ProcedureRow = {
   source: string
   needs: string
   adjust: AdjustSorted | null
-  singleStep: boolean
+  adjustEach: AdjustEach | null
   adjustInOrder: AdjustInOrder | null
   takes: readonly ('weights' | 'transitions' | 'groups')[]
   firstStage: ((alpha: number) => number) | null
@@ -50,7 +50,7 @@ type Way = Partial<ProcedureRow> & Pick<ProcedureRow, 'needs'>
 const NO_WAY = {
   upToGroups: null,
   adjust: null,
-  singleStep: false,
+  adjustEach: null,
   adjustInOrder: null,
   takes: [],
   firstStage: null,
@@ -88,10 +88,19 @@ const rowOfStatistics = (
 
 /** What is known of each procedure: the one place for labels, error rates, assumptions and sources. */
 export const procedureTable: Record<CatalogueProcedure, ProcedureRow> = {
-  bonferroni: row('Bonferroni', 'fwer', 'none', 'Dunn 1961', bonferroni, { singleStep: true }),
-  sidak: row('Šidák', 'fwer', 'independent or positively orthant dependent tests', 'Šidák 1967', sidak, {
-    singleStep: true,
+  bonferroni: row('Bonferroni', 'fwer', 'none', 'Dunn 1961', adjustAll(bonferroni), {
+    adjustEach: bonferroni,
   }),
+  sidak: row(
+    'Šidák',
+    'fwer',
+    'independent or positively orthant dependent tests',
+    'Šidák 1967',
+    adjustAll(sidak),
+    {
+      adjustEach: sidak,
+    },
+  ),
   holm: row('Holm', 'fwer', 'none', 'Holm 1979', holm),
   'holm-sidak': row(
     'Holm–Šidák',

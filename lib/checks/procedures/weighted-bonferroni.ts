@@ -8,5 +8,7 @@ import { levelOf, readWeights } from './weights'
  */
 export const weightedBonferroni: AdjustInOrder = (p, { m, weights }) => {
   const shares = readWeights(weights, p.length, m)
-  return p.map((value, i) => Math.min(1, levelOf(value, shares[i] ?? 0)))
+  const adjusted = new Float64Array(p.length)
+  for (let i = 0; i < p.length; i++) adjusted[i] = Math.min(1, levelOf(p[i] ?? 1, shares[i] ?? 0))
+  return adjusted
 }

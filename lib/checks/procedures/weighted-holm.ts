@@ -1,5 +1,5 @@
 import type { AdjustInOrder } from './in-order'
-import { sortOrder } from './sort-order'
+import { rankValues } from './rank-values'
 import { levelOf, readWeights } from './weights'
 
 /**
@@ -11,25 +11,34 @@ import { levelOf, readWeights } from './weights'
  */
 export const weightedHolm: AdjustInOrder = (p, { m, weights }) => {
   const shares = readWeights(weights, p.length, m)
-  const levels = p.map((value, i) => levelOf(value, shares[i] ?? 0))
-  const order = sortOrder(levels)
-
-  // Summed from the end, so that no small remainder is the difference of large sums.
-  const remaining = new Float64Array(p.length)
-  let held = 0
-  for (let rank = order.length - 1; rank >= 0; rank--) {
-    held += shares[order[rank] ?? 0] ?? 0
-    remaining[rank] = held
-  }
+  const levels = new Float64Array(p.length)
+  for (let i = 0; i < p.length; i++) levels[i] = levelOf(p[i] ?? 1, shares[i] ?? 0)
+  const { values, places } = rankValues(levels)
+  const adjusted = new Float64Array(p.length)
+  const held = sumFromEnd(shares, places, adjusted)
   const unspent = Math.max(0, 1 - held)
 
-  const adjusted = new Float64Array(p.length)
   let largest = 0
-  order.forEach((i, rank) => {
-    const level = levels[i] ?? Infinity
-    const value = level === Infinity ? 1 : level * Math.min(1, (remaining[rank] ?? 0) + unspent)
-    largest = Math.min(1, Math.max(largest, value))
+  for (let rank = 0; rank < values.length; rank++) {
+    const i = places[rank] ?? 0
+    const level = values[rank] ?? Infinity
+    const value = level === Infinity ? 1 : level * Math.min(1, (adjusted[i] ?? 0) + unspent)
+    if (value > largest) largest = Math.min(1, value)
     adjusted[i] = largest
-  })
+  }
   return adjusted
+}
+
+/**
+ * Into `sums`, at each place, the shares of this rank and all later ones: summed from the end, so that no small
+ * remainder is the difference of large sums. Answers the sum of all.
+ */
+function sumFromEnd(shares: Float64Array, places: Uint32Array, sums: Float64Array): number {
+  let held = 0
+  for (let rank = places.length - 1; rank >= 0; rank--) {
+    const i = places[rank] ?? 0
+    held += shares[i] ?? 0
+    sums[i] = held
+  }
+  return held
 }
