@@ -26,7 +26,8 @@ export function BenchBar({ manuscript, kept }: { manuscript: ManuscriptView; kep
   const { audit } = kept
   const toVerdict = manuscript.actions.includes('readVerdict')
   const home = `/manuscripts/${manuscript.id}`
-  const exportUrl = (format: string) => manuscriptUrl(manuscript.id, `/audit/export?format=${format}`)
+  const exportUrl = (format: string) =>
+    manuscriptUrl(manuscript.id, `/audit/export?format=${format}&round=${kept.round}`)
   return (
     <header className="flex shrink-0 flex-wrap items-center gap-x-5 gap-y-1 border-b border-rule px-4 py-2">
       <div className="min-w-0 flex-1 basis-72">
@@ -68,6 +69,10 @@ export function BenchBar({ manuscript, kept }: { manuscript: ManuscriptView; kep
           items={[
             { label: 'JSON, the whole audit', onSelect: () => window.location.assign(exportUrl('json')) },
             { label: 'CSV, one row a number', onSelect: () => window.location.assign(exportUrl('csv')) },
+            {
+              label: 'R script, computes every number again',
+              onSelect: () => window.location.assign(exportUrl('r')),
+            },
             { label: 'Print', onSelect: () => window.print() },
           ]}
         />

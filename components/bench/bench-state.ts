@@ -4,6 +4,8 @@ import type { AuditIndex, Target } from './audit-index'
 /** What every part of the bench shares: the audit, what is chosen, and how to choose or show something. */
 export type BenchState = {
   manuscriptId: string
+  /** The round whose audit is shown. */
+  round: number
   index: AuditIndex
   /** Whether the viewer decides points, and whether they see what was decided. */
   mayDecide: boolean

@@ -51,6 +51,7 @@ export function Bench({ manuscript, kept, fileUrl }: BenchProps) {
   const state = useMemo<BenchState>(
     () => ({
       manuscriptId: manuscript.id,
+      round: kept.round,
       index,
       chosen,
       mayDecide,
@@ -58,7 +59,7 @@ export function Bench({ manuscript, kept, fileUrl }: BenchProps) {
       show,
       comment: mayComment ? comment : null,
     }),
-    [manuscript.id, index, chosen, mayDecide, seesPoints, show, comment, mayComment],
+    [manuscript.id, kept.round, index, chosen, mayDecide, seesPoints, show, comment, mayComment],
   )
 
   const chooseInList = (target: Target) => {

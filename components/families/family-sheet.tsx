@@ -8,16 +8,17 @@ import { Staircase } from '../charts/staircase'
 import { StaircaseTable } from '../charts/staircase-table'
 import { isSame } from '../bench/audit-index'
 import { useBench } from '../bench/bench-state'
+import { manuscriptUrl } from '../manuscripts/resources'
 import { PlaceLink } from '../bench/place-link'
 import { OutcomeMark, OutcomeShape } from '../shell/outcome-mark'
-import { Button } from '../ui/button'
+import { Button, buttonLook } from '../ui/button'
 import { classes } from '../ui/classes'
 import { DecisionsTable } from './decisions-table'
 import { StaircaseLegend } from './staircase-legend'
 
 /** One family: what is claimed of it, what is due, the picture, each call. */
 export function FamilySheet({ family, number }: { family: Family; number: number }) {
-  const { index, chosen, show, comment } = useBench()
+  const { manuscriptId, round, index, chosen, show, comment } = useBench()
   const claim = family.claim ? (index.claims.get(family.claim) ?? null) : null
   const alpha = claim?.alpha ?? index.audit.alpha.value
   const judged = family.decisions.map((decision) => decision.report)
@@ -112,13 +113,20 @@ export function FamilySheet({ family, number }: { family: Family; number: number
           </figure>
         )}
         <DecisionsTable family={family} />
-        {comment && (
-          <div className="print:hidden">
+        <div className="flex flex-wrap gap-1 print:hidden">
+          {comment && (
             <Button size="small" variant="quiet" onClick={() => comment(target)}>
               Comment on this family
             </Button>
-          </div>
-        )}
+          )}
+          <a
+            download
+            href={manuscriptUrl(manuscriptId, `/audit/export?format=r&family=${family.id}&round=${round}`)}
+            className={buttonLook({ size: 'small', variant: 'quiet' })}
+          >
+            R script<span className="sr-only"> of family {number}</span>
+          </a>
+        </div>
       </div>
     </article>
   )

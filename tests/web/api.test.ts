@@ -74,6 +74,16 @@ test('an audit is exported as JSON and as CSV under a dated name', async () => {
   const csv = await call(exportAudit, world.reviewer, { id }, { query: '?format=csv' })
   const rows: Record<string, string>[] = parseCsv(csv.text, { columns: true })
   expect(rows.map((row) => Number(row.value))).toEqual(makeSmallAudit().reports.map((report) => report.value))
+  const script = await call(exportAudit, world.reviewer, { id }, { query: '?format=r' })
+  expect(script.text).toContain('check_statistics()')
+  expect(script.headers.get('content-disposition')).toMatch(/round-1-2026-03-02\.R"/)
+  const [family] = makeSmallAudit().families
+  const one = await call(exportAudit, world.reviewer, { id }, { query: `?format=r&family=${family?.id}` })
+  expect(one.text).toContain('Recomputation of one family')
+  expect((await call(exportAudit, world.reviewer, { id }, { query: '?format=r&family=f99' })).status).toBe(
+    404,
+  )
+  expect((await call(exportAudit, world.submitter, { id }, { query: '?format=r' })).status).toBe(404)
   expect((await call(exportAudit, world.submitter, { id }, { query: '?format=csv' })).status).toBe(404)
   expect((await call(exportAudit, world.reviewer, { id }, { query: '?format=exe' })).status).toBe(422)
 })
