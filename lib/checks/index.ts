@@ -8,7 +8,12 @@ export { dunnettQuantile, studentizedRangeQuantile, upperQuantile } from './dist
 export { defaultHouseRules } from './house-rules'
 export { pBounds } from './numbers/p-bounds'
 export { parsePrinted, parsePrintedP, type PrintedNumber, type PrintedP } from './numbers/parse-printed'
-export { printedInterval, roundingInterval, type Interval } from './numbers/printed-interval'
+export {
+  printedInterval,
+  roundingInterval,
+  truncationInterval,
+  type Interval,
+} from './numbers/printed-interval'
 export { adjust, type AdjustOptions } from './procedures/adjust'
 export { adjustBounds, type Bounds } from './procedures/adjust-bounds'
 export { compareByDuncan } from './procedures/duncan'

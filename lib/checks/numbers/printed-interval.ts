@@ -18,6 +18,15 @@ export function roundingInterval(value: number, decimals: number): Interval {
 }
 
 /**
+ * What a number of at least 0 stands for whose further digits were cut off instead of rounded: from itself to one unit
+ * of its last digit above, ends included. Example: 0.04 with 2 decimals gives [0.04, 0.05].
+ */
+export function truncationInterval(value: number, decimals: number): Interval {
+  const scale = 10 ** decimals
+  return { low: value, high: (Math.round(value * scale) + 1) / scale }
+}
+
+/**
  * The interval that a printed p-value stands for. '=': its rounding interval, cut to [0, 1]; '<' and '<=': [0, value];
  * '>' and '>=': [value, 1]. A value outside [0, 1] cannot be a p-value: its interval is left uncut around it.
  * Example: p = .030 (3 decimals) is [0.0295, 0.0305]; p = .00 is [0, 0.005]; p < .001 is [0, 0.001].

@@ -1,5 +1,6 @@
 import { expect, test } from 'vitest'
 import { adjust, type Procedure } from '@/lib/checks'
+import { countRejected } from '@/lib/checks/procedures/two-stage'
 import { differ, readReference, toNumber, type Printed } from '../reference'
 
 // R 4.2.2, stats::p.adjust; Šidák, Holm–Šidák, two-stage and Storey by formula in R, compared with a second
@@ -24,10 +25,26 @@ type Vector = {
   p: Printed[]
   adjusted: Record<string, Printed[]>
   storey_lambda05?: { pi0: Printed; q: Printed[] }
-  twostage?: { alpha: number; bky: Printed[] }[]
+  twostage?: {
+    alpha: number
+    bky: Printed[]
+    bky_r1: number
+    bky_m0: number
+    tsbh: Printed[]
+    tsbh_r1: number
+    tsbh_m0: number
+  }[]
+  reject_count_at?: ({ alpha: number } & Record<string, number>)[]
 }
 
-type Large = { at_index: number[]; sum: number; sum_of_squares: number; min: number; max: number }
+type Large = {
+  at_index: number[]
+  sum: number
+  sum_of_squares: number
+  min: number
+  max: number
+  count_le: Record<string, number>
+}
 
 const { vectors } = readReference<{ vectors: Vector[] }>('padjust.json')
 const big = readReference<
@@ -49,23 +66,54 @@ for (const [name, procedure] of Object.entries(NAMES)) {
   })
 }
 
-test('the two-stage procedure agrees with R at three levels on every vector', () => {
+test('the two-stage procedures agree with R at three levels on every vector, in all three conventions', () => {
   let compared = 0
   for (const { kind, p, twostage } of vectors) {
-    for (const { alpha, bky } of twostage ?? []) {
-      const found = adjust('bky', p.map(toNumber), { alpha })
-      expect(differ(found, bky), `${kind}, length ${p.length}, alpha ${alpha}`).toBeLessThan(TOLERANCE)
+    const values = p.map(toNumber)
+    const sorted = Float64Array.from(values.filter((value) => !Number.isNaN(value))).sort()
+    for (const { alpha, bky, bky_r1, bky_m0, tsbh, tsbh_r1, tsbh_m0 } of twostage ?? []) {
+      const where = `${kind}, length ${p.length}, alpha ${alpha}`
+      expect(differ(adjust('bky', values, { alpha }), bky), where).toBeLessThan(TOLERANCE)
+      expect(differ(adjust('tsbh', values, { alpha }), tsbh), where).toBeLessThan(TOLERANCE)
+      const m = sorted.length
+      expect(countRejected(sorted, m, alpha / (1 + alpha)), where).toBe(bky_r1)
+      expect(countRejected(sorted, m, alpha), where).toBe(tsbh_r1)
+      // BH (m0 / m) with the reference's m0, uncapped: the convention without the factor
+      const share = m === 0 ? NaN : bky_m0 / m
+      const unscaled = adjust('bh', values).map((q) => q * share)
+      expect(differ(adjust('bky-unscaled', values, { alpha }), unscaled), where).toBeLessThan(TOLERANCE)
+      expect(tsbh_m0, where).toBe(tsbh_r1 === 0 || tsbh_r1 === m ? m : m - tsbh_r1)
       compared++
     }
   }
   expect(compared).toBeGreaterThanOrEqual(600)
 })
 
+test('as many adjusted values are at most alpha as in R, but for those at alpha to the last bit', () => {
+  let compared = 0
+  for (const { kind, p, reject_count_at } of vectors) {
+    for (const counts of reject_count_at ?? []) {
+      for (const [name, procedure] of Object.entries(NAMES)) {
+        const adjusted = adjust(procedure, p.map(toNumber))
+        const least = adjusted.filter((value) => value <= counts.alpha * (1 - 1e-12)).length
+        const most = adjusted.filter((value) => value <= counts.alpha * (1 + 1e-12)).length
+        const wanted = counts[name] ?? NaN
+        expect(least <= wanted && wanted <= most, `${procedure}, ${kind}, alpha ${counts.alpha}`).toBe(true)
+        compared++
+      }
+    }
+  }
+  expect(compared).toBeGreaterThanOrEqual(4800)
+})
+
 test('Storey’s q-values agree with R on every vector', () => {
   let compared = 0
   for (const { kind, p, storey_lambda05 } of vectors) {
     if (storey_lambda05 === undefined) continue
-    expect(differ(adjust('storey', p.map(toNumber)), storey_lambda05.q), kind).toBeLessThan(TOLERANCE)
+    const q = adjust('storey', p.map(toNumber))
+    expect(differ(q, storey_lambda05.q), kind).toBeLessThan(TOLERANCE)
+    const scaled = adjust('bh', p.map(toNumber)).map((value) => value * toNumber(storey_lambda05.pi0))
+    expect(differ(q, scaled), kind).toBeLessThan(TOLERANCE)
     compared++
   }
   expect(compared).toBeGreaterThanOrEqual(200)
@@ -81,12 +129,15 @@ test('20,000 p-values agree with R at 609 places and in their sums', () => {
     ['bky', big.bky_alpha05],
   ]
   expect(big.p.length).toBe(20_000)
-  for (const [procedure, { at_index, sum, sum_of_squares, min, max }] of expected) {
+  for (const [procedure, { at_index, sum, sum_of_squares, min, max, count_le }] of expected) {
     const found = adjust(procedure, big.p)
     const places = big.index.map((position) => found[position - 1] ?? NaN)
     expect(differ(places, at_index), procedure).toBeLessThan(TOLERANCE)
     const sums = [found.reduce((a, b) => a + b, 0), found.reduce((a, b) => a + b * b, 0)]
     expect(differ(sums, [sum, sum_of_squares]), procedure).toBeLessThan(1e-11)
     expect(differ([Math.min(...found), Math.max(...found)], [min, max]), procedure).toBeLessThan(TOLERANCE)
+    for (const [level, count] of Object.entries(count_le)) {
+      expect(found.filter((value) => value <= Number(level)).length, `${procedure} at ${level}`).toBe(count)
+    }
   }
 })
