@@ -6,6 +6,9 @@ import type { Interval } from './raw-intervals'
 import { spreadLabels } from './spread-labels'
 import { procedureNames, steppedFor, thresholdOf, type Stepped } from './thresholds'
 
+/** What a staircase needs of a family. */
+export type DrawnFamily = Pick<Family, 'id' | 'label' | 'members' | 'm' | 'outcome' | 'decisions'>
+
 export type StaircaseFrame = { width: number; height: number }
 
 export type StaircaseDot = {
@@ -54,7 +57,7 @@ type Entry = Interval & { report: Report; decision: Decision | null; value: numb
  * adjusted ones against alpha.
  */
 export function staircaseGeometry(
-  family: Family,
+  family: DrawnFamily,
   reports: readonly Report[],
   claim: Claim | null,
   alpha: number,
@@ -117,7 +120,7 @@ export function staircaseGeometry(
 type Member = { report: Report; decision: Decision | null }
 
 /** One a comparison, as decided; the members themselves where nothing was decided. */
-function listMembers(family: Family, reports: readonly Report[]): Member[] {
+function listMembers(family: DrawnFamily, reports: readonly Report[]): Member[] {
   const byId = new Map(reports.map((report) => [report.id, report]))
   const entries: { id: string; decision: Decision | null }[] =
     family.decisions.length > 0
@@ -153,7 +156,7 @@ function alphaLine(alpha: number): DraftLine {
   return { key: 'alpha', label: `α = ${alpha}`, kind: 'alpha', at: () => alpha }
 }
 
-function draftLines(claim: Claim | null, family: Family, m: number, alpha: number): DraftLine[] {
+function draftLines(claim: Claim | null, family: DrawnFamily, m: number, alpha: number): DraftLine[] {
   const claimed = steppedFor(claim?.procedure ?? null)
   const lines: DraftLine[] = [alphaLine(alpha)]
   if (claimed) {
@@ -218,7 +221,7 @@ function stepPoints(at: (rank: number) => number, lastRank: number, x: Scale, y:
 function placeDot(
   entry: Entry,
   rank: number,
-  family: Family,
+  family: DrawnFamily,
   floor: number,
   x: Scale,
   y: Scale,

@@ -1,12 +1,17 @@
 import { LinePath } from '@visx/shape'
-import type { Claim, Family, Report } from '@/lib/checks/types'
+import type { Claim, Decision, Report } from '@/lib/checks/types'
 import { OutcomeRing } from './outcome-ring'
 import { describeDot, nameOfReport } from './describe-dot'
 import type { Interval } from './raw-intervals'
-import { staircaseGeometry, type StaircaseDot, type StaircaseLine } from './staircase-geometry'
+import {
+  staircaseGeometry,
+  type DrawnFamily,
+  type StaircaseDot,
+  type StaircaseLine,
+} from './staircase-geometry'
 
 export type StaircaseProps = {
-  family: Family
+  family: DrawnFamily
   reports: readonly Report[]
   claim: Claim | null
   alpha: number
@@ -16,7 +21,14 @@ export type StaircaseProps = {
   id: string
   chosen?: string | null
   onPick?: (reportId: string) => void
+  /** Name and words of a dot, where they are not those of a manuscript's comparison and call. */
+  describe?: (report: Report, decision: Decision | null) => { name: string; words: string }
 }
+
+const describeCall = (report: Report, decision: Decision | null) => ({
+  name: nameOfReport(report),
+  words: describeDot(report, decision),
+})
 
 /** The picture of a family, once for narrow and once for wide places; style decides which is shown. */
 export function Staircase(props: StaircaseProps) {
@@ -106,6 +118,7 @@ function Picture(props: StaircaseProps & { width: number; height: number }) {
           focusable={stops}
           chosen={props.chosen === dot.report.id}
           onPick={props.onPick}
+          describe={props.describe ?? describeCall}
         />
       ))}
     </svg>
@@ -155,10 +168,11 @@ function Dot(props: {
   focusable: boolean
   chosen: boolean
   onPick?: (reportId: string) => void
+  describe: typeof describeCall
 }) {
   const { dot, radius, onPick } = props
   const { report, decision } = dot
-  const words = describeDot(report, decision)
+  const { name, words } = props.describe(report, decision)
   const pick = onPick ? () => onPick(report.id) : undefined
   return (
     <g
@@ -166,7 +180,7 @@ function Dot(props: {
       data-pick={pick !== undefined}
       role={pick ? 'button' : 'img'}
       tabIndex={props.focusable ? 0 : undefined}
-      aria-label={`${nameOfReport(report)}: ${words}`}
+      aria-label={`${name}: ${words}`}
       onClick={pick}
       onKeyDown={
         pick &&
@@ -210,7 +224,7 @@ function Dot(props: {
       >
         <rect x={14} y={0} width="100%" height={28} className="fill-sheet" />
         <text x={16} y={11} className="fill-ink font-semibold">
-          {nameOfReport(report)}
+          {name}
         </text>
         <text x={16} y={25} className="fill-ink">
           {words}

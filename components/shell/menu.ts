@@ -6,6 +6,7 @@ type Screen = { href: string; label: string; permission: Permission }
 const screens: readonly Screen[] = [
   { href: '/docket', label: 'Docket', permission: 'docket.list' },
   { href: '/hand-in', label: 'Hand in', permission: 'draft.create' },
+  { href: '/calculator', label: 'Calculator', permission: 'calculator.use' },
   { href: '/figures', label: 'Figures', permission: 'figures.read' },
   { href: '/house-rules', label: 'House rules', permission: 'house-rules.read' },
   { href: '/people', label: 'People', permission: 'people.list' },

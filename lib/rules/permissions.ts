@@ -18,6 +18,7 @@ const any = ['any'] as const
 export const PERMISSIONS = {
   'account.change': { submitter: any, reviewer: any, editor: any, administrator: any },
   'docket.list': { submitter: any, reviewer: any, editor: any },
+  'calculator.use': { submitter: any, reviewer: any, editor: any, administrator: any },
 
   'draft.create': { submitter: any },
   'draft.change': { submitter: own },

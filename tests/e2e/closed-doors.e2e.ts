@@ -6,6 +6,7 @@ import { enterAs, statusOf } from './support/desk'
 const doors: Record<string, readonly PersonKey[]> = {
   '/docket': ['submitter', 'reviewer', 'editor'],
   '/hand-in': ['submitter'],
+  '/calculator': ['submitter', 'reviewer', 'editor', 'administrator'],
   '/house-rules': ['reviewer', 'editor'],
   '/people': ['editor', 'administrator'],
   '/record': ['editor', 'administrator'],

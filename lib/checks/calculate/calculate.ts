@@ -4,10 +4,8 @@ import { adjustBounds } from '../procedures/adjust-bounds'
 import type { AdjustOptions } from '../procedures/adjust'
 import { survivesUpTo, survivesUpToByBh, survivesUpToByHolm } from '../sensitivity/survives-up-to'
 import { procedureTable } from '../procedures/table'
+import { CATALOGUE, type CatalogueProcedure } from '../vocabulary'
 import type { Entry } from './entry'
-
-/** Every procedure of the table; those that need more than is given are refused with the reason. */
-export type CalculatorProcedure = keyof typeof procedureTable
 
 /** 'printed': every number is the interval of its rounding; 'exact': the number itself ('<' and '>' stay intervals). */
 export const READINGS = ['printed', 'exact'] as const
@@ -17,7 +15,7 @@ export type Reading = (typeof READINGS)[number]
 export type CalculateOptions = {
   alpha: number
   reading: Reading
-  procedures: readonly CalculatorProcedure[]
+  procedures: readonly CatalogueProcedure[]
   family?: Omit<AdjustOptions, 'alpha'>
 }
 
@@ -27,7 +25,7 @@ export type CalculateOptions = {
  * are held against. `refused`: why the procedure cannot be computed, in a sentence; the lists are empty then.
  */
 export type Adjusted = {
-  procedure: CalculatorProcedure
+  procedure: CatalogueProcedure
   level: number
   adjusted: Interval[]
   significant: (boolean | null)[]
@@ -80,16 +78,17 @@ export function calculate(entries: readonly Entry[], options: CalculateOptions):
 }
 
 function adjustBy(
-  procedure: CalculatorProcedure,
+  procedure: CatalogueProcedure,
   low: readonly number[],
   high: readonly number[],
   options: AdjustOptions & { alpha: number },
 ): Adjusted {
-  const level = levelOf(procedure, options.alpha)
+  const { takes, heldAgainst } = procedureTable[procedure]
+  const level = heldAgainst(options.alpha)
   const nothing = { procedure, level, adjusted: [], significant: [] }
   if (low.length === 0) return { ...nothing, refused: null }
   try {
-    const bounds = adjustBounds(procedure, low, high, options)
+    const bounds = adjustBounds(procedure, low, high, keepTaken(takes, options))
     const adjusted = bounds.low.map((value, i) => ({ low: value, high: bounds.high[i] ?? NaN }))
     return {
       procedure,
@@ -105,15 +104,23 @@ function adjustBy(
   }
 }
 
-/** What the adjusted values of a procedure are held against: alpha, unless its convention names another level. */
-export function levelOf(procedure: string, alpha: number): number {
-  return procedure === 'bky-unscaled' ? alpha / (1 + alpha) : alpha
+/** The options that a procedure takes: weights and the like are typed once for all that are computed side by side. */
+export function keepTaken<O extends AdjustOptions>(
+  takes: readonly ('weights' | 'transitions' | 'groups')[],
+  { weights, transitions, groups, ...rest }: O,
+): AdjustOptions {
+  return {
+    ...rest,
+    ...(takes.includes('weights') && weights ? { weights } : {}),
+    ...(takes.includes('transitions') && transitions ? { transitions } : {}),
+    ...(takes.includes('groups') && groups !== undefined ? { groups } : {}),
+  }
 }
 
 /** The procedures that can be computed from p-values and what may be typed beside them, in the table's order. */
-export function listComputable(): CalculatorProcedure[] {
-  return (Object.keys(procedureTable) as CalculatorProcedure[]).filter((procedure) => {
-    const row = procedureTable[procedure]
-    return row.adjust !== null || ('adjustInOrder' in row && row.adjustInOrder !== null)
+export function listComputable(): CatalogueProcedure[] {
+  return CATALOGUE.filter((procedure) => {
+    const { adjust, adjustInOrder } = procedureTable[procedure]
+    return adjust !== null || adjustInOrder !== null
   })
 }

@@ -1,7 +1,9 @@
 import { isSignificant } from '../families/decide'
 import { roundingInterval } from '../numbers/printed-interval'
 import { adjustBounds } from '../procedures/adjust-bounds'
-import { intervalOf, levelOf, type CalculateOptions, type CalculatorProcedure } from './calculate'
+import { procedureTable } from '../procedures/table'
+import type { CatalogueProcedure } from '../vocabulary'
+import { intervalOf, keepTaken, type CalculateOptions } from './calculate'
 import type { Entry } from './entry'
 
 /** A value with one more digit than printed, and what it would decide: null where it would stay open. */
@@ -19,7 +21,7 @@ const MOST_DECIMALS = 15
 export function findDecidingDigit(
   entries: readonly Entry[],
   index: number,
-  procedure: CalculatorProcedure,
+  procedure: CatalogueProcedure,
   { alpha, reading, family = {} }: Omit<CalculateOptions, 'procedures'>,
 ): NextDigit[] {
   const entry = entries[index]
@@ -27,7 +29,9 @@ export function findDecidingDigit(
   if (reading === 'exact' || entry.relation !== '=' || entry.decimals >= MOST_DECIMALS) return []
   const low = entries.map((one) => intervalOf(one, reading).low)
   const high = entries.map((one) => intervalOf(one, reading).high)
-  const level = levelOf(procedure, alpha)
+  const { takes, heldAgainst } = procedureTable[procedure]
+  const level = heldAgainst(alpha)
+  const options = keepTaken(takes, { ...family, alpha })
   const decimals = Math.max(1, entry.decimals + 1)
   const scale = 10 ** decimals
   const first = Math.ceil(entry.low * scale - 1e-6)
@@ -38,7 +42,7 @@ export function findDecidingDigit(
     const box = roundingInterval(value, decimals)
     low[index] = Math.max(entry.low, box.low)
     high[index] = Math.max(low[index] ?? 0, Math.min(entry.high, box.high))
-    const bounds = adjustBounds(procedure, low, high, { ...family, alpha })
+    const bounds = adjustBounds(procedure, low, high, options)
     const one = { low: bounds.low[index] ?? NaN, high: bounds.high[index] ?? NaN }
     found.push({ value, decimals, significant: isSignificant(one, level) })
   }

@@ -1,4 +1,3 @@
-import { procedureTable } from '../procedures/table'
 import { writeCsv, type CsvCell } from '../table/write-csv'
 import type { Calculation } from './calculate'
 import type { Entry } from './entry'
@@ -47,7 +46,3 @@ export function writeCalculationCsv(entries: readonly Entry[], calculation: Calc
 
 const finite = (value: number | undefined): number | null =>
   value !== undefined && Number.isFinite(value) ? value : null
-
-/** The trade's name of a procedure, for heads and lists. */
-export const nameOfProcedure = (procedure: keyof typeof procedureTable): string =>
-  procedureTable[procedure].label
