@@ -1,5 +1,5 @@
 import type { AdjustInOrder } from './in-order'
-import { levelOf, readWeights } from './weights'
+import { levelInTurn, readWeights } from './weights'
 
 /**
  * Fallback: the hypotheses are tested in the order given, each with its own share of the level and, where the one
@@ -34,11 +34,11 @@ export const fallback: AdjustInOrder = (p, { m, weights }) => {
     while (low < high) {
       const middle = (low + high) >> 1
       const since = total - (middle > 0 ? (before[middle - 1] ?? 0) : 0)
-      if ((maxima[middle] ?? 1) >= levelOf(value, since)) low = middle + 1
+      if ((maxima[middle] ?? 1) >= levelInTurn(value, since)) low = middle + 1
       else high = middle
     }
     const since = low < held ? total - (low > 0 ? (before[low - 1] ?? 0) : 0) : share
-    const found = Math.min(1, low > 0 ? (maxima[low - 1] ?? 1) : 1, levelOf(value, since))
+    const found = Math.min(1, low > 0 ? (maxima[low - 1] ?? 1) : 1, levelInTurn(value, since))
 
     adjusted[i] = found
     while (held > 0 && (maxima[held - 1] ?? 1) <= found) held--

@@ -1,5 +1,5 @@
 import type { AdjustInOrder } from './in-order'
-import { levelOf, readWeights } from './weights'
+import { levelInTurn, readWeights } from './weights'
 
 const SLACK = 1e-9
 
@@ -7,7 +7,8 @@ const SLACK = 1e-9
  * Graphical procedure: each hypothesis holds a share w_i of the level (`weights`, default 1 / m each), and once it is
  * rejected passes it on along the rows of `transitions` (g_ij of H_i's share to H_j; rows sum to at most 1, the
  * diagonal is 0); the graph is then updated. Adjusted p: in each step the smallest p_j / w_j among those that are left,
- * and not less than in the steps before. Holm, fixed sequence, fallback and many gatekeeping procedures are such graphs.
+ * and not less than in the steps before; a hypothesis
+ * without a share is not tested until it receives one. Holm, fixed sequence, fallback and many gatekeeping procedures are such graphs.
  * Controls the family-wise error rate under any dependence where the graph was fixed beforehand. O(n³).
  * Throws RangeError for a missing or ill-formed graph.
  * Source: Bretz, Maurer, Brannath and Posch (2009), Stat Med 28, 586–604, algorithms 1 and 2.
@@ -21,7 +22,7 @@ export const graphical: AdjustInOrder = (p, { m, weights, transitions }) => {
     let next = -1
     let least = Infinity
     for (const i of left) {
-      const level = levelOf(p[i] ?? 1, graph.weight(i))
+      const level = levelInTurn(p[i] ?? 1, graph.weight(i))
       if (next < 0 || level < least) {
         next = i
         least = level

@@ -22,6 +22,10 @@ export function readWeights(given: readonly number[] | undefined, size: number, 
 
 /** The smallest level at which p is rejected by its share `weight`: p / weight; without a share only p = 0 is. */
 export function levelOf(p: number, weight: number): number {
-  if (p === 0) return 0
+  return p === 0 ? 0 : p / weight
+}
+
+/** The same where a hypothesis without a share is not tested at all, whatever its p: it waits for those before it. */
+export function levelInTurn(p: number, weight: number): number {
   return weight > 0 ? p / weight : Infinity
 }
