@@ -1,5 +1,11 @@
 import { expect, test } from 'vitest'
-import { familyWiseError } from '@/lib/checks'
+import {
+  adjust,
+  familyWiseError,
+  familyWiseErrorAtMost,
+  protectedLsdError,
+  simultaneousConfidence,
+} from '@/lib/checks'
 import { readReference } from '../reference'
 
 // R 4.2.2: formulas, integrate() over the common factor, mvtnorm's pmvnorm, and the studentized range by double
@@ -100,4 +106,114 @@ test('what cannot be is refused', () => {
   expect(() => familyWiseError(0.05, 3, { rho: -0.5 })).toThrow(RangeError)
   expect(() => familyWiseError(0.05, 3, { rho: 1.1 })).toThrow(RangeError)
   expect(() => familyWiseError(0.05, 3, { allPairsOf: 1 })).toThrow(RangeError)
+})
+
+test('independent tests: thresholds, expected errors and the worst case agree with R', () => {
+  type Row = {
+    alpha: number
+    m: number
+    expected_false_positives: number
+    bonferroni_threshold: number
+    sidak_threshold: number
+    fwer_upper_bound_any_dependence: number
+  }
+  const { independent } = readReference<{ independent: Row[] }>('fwer.json')
+  expect(independent.length).toBe(186)
+  for (const row of independent) {
+    const { alpha, m } = row
+    expectWithin(familyWiseErrorAtMost(alpha, m), row.fwer_upper_bound_any_dependence, 1e-12, row)
+    expectWithin(m * alpha, row.expected_false_positives, 1e-12 * m, row)
+    expectWithin(adjust('bonferroni', [row.bonferroni_threshold], { m })[0] ?? NaN, alpha, 1e-12, row)
+    expectWithin(adjust('sidak', [row.sidak_threshold], { m })[0] ?? NaN, alpha, 1e-12, row)
+    expectWithin(1 - simultaneousConfidence(1 - alpha, m), row.bonferroni_threshold, 1e-15, row)
+    expectWithin(1 - simultaneousConfidence(1 - alpha, m, 'sidak'), row.sidak_threshold, 1e-15, row)
+  }
+})
+
+test('p-values at the thresholds of the steps have the level as their adjusted values', () => {
+  const { step_thresholds: steps } = readReference<{
+    step_thresholds: ({ m: number; alpha: number } & Record<
+      'holm' | 'hochberg' | 'holm_sidak' | 'BH' | 'BY',
+      number[]
+    >)[]
+  }>('fwer.json')
+  expect(steps.length).toBe(3)
+  for (const row of steps) {
+    for (const [procedure, thresholds] of [
+      ['holm', row.holm],
+      ['hochberg', row.hochberg],
+      ['holm-sidak', row.holm_sidak],
+      ['bh', row.BH],
+      ['by', row.BY],
+    ] as const) {
+      expect(thresholds.length).toBe(row.m)
+      for (const p of adjust(procedure, thresholds)) expectWithin(p, row.alpha, 1e-12, { procedure, row })
+    }
+  }
+})
+
+test('all pairs of z tests, and what the formula for independent tests would say', () => {
+  const { all_pairs: rows } = readReference<{
+    all_pairs: { m: number; alpha: number; fwer_uncorrected_independent_formula: number }[]
+  }>('fwer.json')
+  expect(rows.length).toBe(6)
+  for (const row of rows) {
+    const { m, alpha, fwer_uncorrected_independent_formula: wanted } = row
+    expectWithin(familyWiseError(alpha, m), wanted, 1e-12, row)
+  }
+  // R 4.2.2, ptukey(1.959964 sqrt(2), k, Inf): .122, .203, .286, .366 for k = 3 to 6.
+  const rates = [3, 4, 5, 6].map((k) => familyWiseError(0.05, 1, { allPairsOf: k }))
+  expect(rates.map((rate) => Number(rate.toFixed(3)))).toEqual([0.122, 0.203, 0.286, 0.366])
+})
+
+test('several treatments against one control, without correction', () => {
+  // mvtnorm 1.1.3 in R 4.2.2, 1 - pmvt(-t, t, df, corr), GenzBretz(maxpts = 1e6, abseps = 1e-8), t = qt(.975, df):
+  // correlations 1/2; control of 20 with treatments of 10, 10 and 5.
+  const equal: [treatments: number, df: number, rate: number][] = [
+    [2, 12, 0.088384328],
+    [2, 60, 0.090281955],
+    [3, 12, 0.119892126],
+    [3, 60, 0.124342686],
+    [5, 12, 0.170200603],
+    [5, 60, 0.180319992],
+  ]
+  for (const [treatments, df, wanted] of equal) {
+    expectWithin(familyWiseError(0.05, 1, { manyToOneOf: treatments, df }), wanted, 4e-6, { treatments, df })
+  }
+  const sizes = [20, 10, 10, 5]
+  expectWithin(familyWiseError(0.05, 1, { manyToOneOf: 3, df: 41, sizes }), 0.135025179, 2e-6, sizes)
+  // One treatment is one test, whatever the sizes.
+  expectWithin(familyWiseError(0.05, 1, { manyToOneOf: 1, df: 9, sizes: [4, 7] }), 0.05, 1e-11, 'one')
+  // Correlated comparisons err together: less than independent ones, and less than all pairs.
+  const four = familyWiseError(0.05, 1, { manyToOneOf: 4, df: 30 })
+  expect(four).toBeLessThan(familyWiseError(0.05, 4))
+  expect(four).toBeLessThan(familyWiseError(0.05, 1, { allPairsOf: 5, df: 30 }))
+})
+
+test('the protected least significant difference by the number of groups', () => {
+  // Hayter (1986); values by R 4.2.2, ptukey(qt(.975, df) sqrt(2), k - 1, df): with 20 df slightly less.
+  const byDf: [df: number, rates: number[]][] = [
+    [Infinity, [0.05, 0.05, 0.1222663, 0.2033224, 0.2858131, 0.3656161, 0.4404789]],
+    [20, [0.05, 0.05, 0.1182091, 0.1916791, 0.2643089, 0.3331779, 0.3969877]],
+  ]
+  for (const [df, rates] of byDf) {
+    rates.forEach((wanted, i) => expectWithin(protectedLsdError(0.05, i + 2, df), wanted, 1e-7, { df, i }))
+  }
+})
+
+test('intervals that hold together: 97.5, 98.33, 99.17 and 99.5% each for 2, 3, 6 and 10', () => {
+  // Common practice.
+  const levels = [2, 3, 6, 10].map((m) => Number((100 * simultaneousConfidence(0.95, m)).toFixed(2)))
+  expect(levels).toEqual([97.5, 98.33, 99.17, 99.5])
+})
+
+test('designs that cannot be are refused', () => {
+  expect(() => familyWiseError(0.05, 1, { manyToOneOf: 0 })).toThrow(RangeError)
+  expect(() => familyWiseError(0.05, 1, { manyToOneOf: 2, sizes: [10, 10] })).toThrow(RangeError)
+  expect(() => familyWiseError(0.05, 1, { manyToOneOf: 1, sizes: [0, 10] })).toThrow(RangeError)
+  expect(() => familyWiseErrorAtMost(0.05, 0)).toThrow(RangeError)
+  expect(() => familyWiseErrorAtMost(1, 3)).toThrow(RangeError)
+  expect(() => protectedLsdError(0.05, 1)).toThrow(RangeError)
+  expect(() => simultaneousConfidence(1, 3)).toThrow(RangeError)
+  expect(() => simultaneousConfidence(0.95, 2.5)).toThrow(RangeError)
 })
