@@ -1,10 +1,11 @@
 import fc from 'fast-check'
 import { expect, test } from 'vitest'
-import { adjust, adjustBounds, PROCEDURES, procedureTable, type Procedure } from '@/lib/checks'
+import { adjust, adjustBounds, CATALOGUE, procedureTable, type CatalogueProcedure } from '@/lib/checks'
 
 // Logical facts, true of every vector of p-values.
-const COMPUTABLE = PROCEDURES.filter((procedure) => procedureTable[procedure].adjust !== null)
-const MONOTONE = COMPUTABLE.filter((procedure) => procedure !== 'bky')
+const COMPUTABLE = CATALOGUE.filter((procedure) => procedureTable[procedure].adjust !== null)
+const MONOTONE = COMPUTABLE.filter((procedure) => procedureTable[procedure].firstStage === null)
+const TWO_STAGE = COMPUTABLE.filter((procedure) => procedureTable[procedure].firstStage !== null)
 const NOT_BELOW_RAW = MONOTONE.filter((procedure) => procedure !== 'storey')
 
 /** p-values as papers have them: any, rounded with many ties, and very small. */
@@ -40,7 +41,7 @@ test('Hommel is at most Hochberg, Hochberg at most Holm, Holm at most Bonferroni
 test('Šidák is at most Bonferroni, Benjamini–Hochberg at most Hommel and at most Benjamini–Yekutieli', () => {
   fc.assert(
     fc.property(vectorAndSize, ({ p, m }) => {
-      const run = (procedure: Procedure) => adjust(procedure, p, { m })
+      const run = (procedure: CatalogueProcedure) => adjust(procedure, p, { m })
       expectOrdered(run('sidak'), run('bonferroni'))
       expectOrdered(run('holm-sidak'), run('holm'))
       expectOrdered(run('bh'), run('hommel'))
@@ -107,107 +108,40 @@ for (const procedure of COMPUTABLE) {
       }),
     )
   })
+}
 
-  test(`${procedure}: the bounds over a box hold every point of it`, () => {
-    const box = fc.array(
-      fc.tuple(
-        pValue,
-        pValue,
-        fc.array(fc.double({ min: 0, max: 1, noNaN: true }), { minLength: 8, maxLength: 8 }),
-      ),
-      {
-        minLength: 1,
-        maxLength: 7,
-      },
+for (const procedure of TWO_STAGE) {
+  test(`${procedure}: its bounds are reached by points near its first stage`, () => {
+    // Boxes that straddle the level of the first stage, searched on a fine grid of two or three p-values.
+    const level = procedureTable[procedure].firstStage?.(0.05) ?? NaN
+    const narrow = fc.tuple(
+      fc.double({ min: 0.6, max: 1.05, noNaN: true }),
+      fc.double({ min: 0.01, max: 0.3, noNaN: true }),
     )
     fc.assert(
-      fc.property(box, fc.nat(3), (items, more) => {
-        const low = items.map(([a, b]) => Math.min(a, b))
-        const high = items.map(([a, b]) => Math.max(a, b))
-        const options = { m: items.length + more }
-        const bounds = adjustBounds(procedure, low, high, options)
-        for (let draw = 0; draw < 8; draw++) {
-          const point = items.map(([, , at], i) => {
-            const [from, to] = [low[i] ?? NaN, high[i] ?? NaN]
-            return Math.min(to, from + (at[draw] ?? 0) * (to - from))
-          })
-          const adjusted = adjust(procedure, point, options)
-          adjusted.forEach((value, i) => {
-            expect(value).toBeGreaterThanOrEqual((bounds.low[i] ?? NaN) - 1e-12)
-            expect(value).toBeLessThanOrEqual((bounds.high[i] ?? NaN) + 1e-12)
-          })
-        }
+      fc.property(fc.array(narrow, { minLength: 2, maxLength: 3 }), (items) => {
+        const low = items.map(([at]) => at * level)
+        const high = items.map(([at, width]) => (at + width) * level)
+        const bounds = adjustBounds(procedure, low, high)
+        const marks = items.map((_, i) => {
+          const [from, to] = [low[i] ?? NaN, high[i] ?? NaN]
+          return [from, to, level, level * (1 + 1e-13)].filter((p) => p >= from && p <= to)
+        })
+        const points = marks.reduce<number[][]>(
+          (rows, list) => rows.flatMap((row) => list.map((p) => [...row, p])),
+          [[]],
+        )
+        const runs = points.map((point) => adjust(procedure, point))
+        low.forEach((_, i) => {
+          const reached = runs.map((run) => run[i] ?? NaN)
+          expect(Math.abs(Math.min(...reached) - (bounds.low[i] ?? NaN))).toBeLessThan(1e-12)
+          expect(Math.abs(Math.max(...reached) - (bounds.high[i] ?? NaN))).toBeLessThan(1e-12)
+        })
       }),
-      { numRuns: 400 },
+      { numRuns: 300 },
     )
   })
 }
-
-test('the bounds of the two-stage procedure are reached by points near its first stage', () => {
-  // Boxes that straddle 0.05 / 1.05, searched on a fine grid of three p-values.
-  const level = 0.05 / 1.05
-  const narrow = fc.tuple(
-    fc.double({ min: 0.6, max: 1.05, noNaN: true }),
-    fc.double({ min: 0.01, max: 0.3, noNaN: true }),
-  )
-  fc.assert(
-    fc.property(fc.array(narrow, { minLength: 2, maxLength: 3 }), (items) => {
-      const low = items.map(([at]) => at * level)
-      const high = items.map(([at, width]) => (at + width) * level)
-      const bounds = adjustBounds('bky', low, high)
-      const marks = items.map((_, i) => {
-        const [from, to] = [low[i] ?? NaN, high[i] ?? NaN]
-        return [from, to, level, level * (1 + 1e-13)].filter((p) => p >= from && p <= to)
-      })
-      const points = marks.reduce<number[][]>(
-        (rows, list) => rows.flatMap((row) => list.map((p) => [...row, p])),
-        [[]],
-      )
-      const runs = points.map((point) => adjust('bky', point))
-      low.forEach((_, i) => {
-        const reached = runs.map((run) => run[i] ?? NaN)
-        expect(Math.abs(Math.min(...reached) - (bounds.low[i] ?? NaN))).toBeLessThan(1e-12)
-        expect(Math.abs(Math.max(...reached) - (bounds.high[i] ?? NaN))).toBeLessThan(1e-12)
-      })
-    }),
-    { numRuns: 400 },
-  )
-})
-
-/** The largest local p-value among all intersections that hold hypothesis i: closed testing by brute force. */
-function closeBy(local: (p: readonly number[]) => number, p: readonly number[]): number[] {
-  const adjusted = p.map(() => 0)
-  for (let subset = 1; subset < 1 << p.length; subset++) {
-    const members = p.flatMap((_, i) => ((subset >> i) & 1 ? [i] : []))
-    const value = Math.min(1, local(members.map((i) => p[i] ?? NaN)))
-    for (const i of members) adjusted[i] = Math.max(adjusted[i] ?? 0, value)
-  }
-  return adjusted
-}
-
-const bonferroniOf = (p: readonly number[]) => p.length * Math.min(...p)
-const simesOf = (p: readonly number[]) =>
-  Math.min(...[...p].sort((a, b) => a - b).map((value, i) => (p.length * value) / (i + 1)))
-
-test('Holm is closed testing with Bonferroni’s local tests', () => {
-  fc.assert(
-    fc.property(vector(8), (p) => {
-      const closed = closeBy(bonferroniOf, p)
-      adjust('holm', p).forEach((value, i) => expect(value).toBeCloseTo(closed[i] ?? NaN, 13))
-    }),
-    { numRuns: 300 },
-  )
-})
-
-test('Hommel is closed testing with Simes’s local tests', () => {
-  fc.assert(
-    fc.property(vector(8), (p) => {
-      const closed = closeBy(simesOf, p)
-      adjust('hommel', p).forEach((value, i) => expect(value).toBeCloseTo(closed[i] ?? NaN, 13))
-    }),
-    { numRuns: 300 },
-  )
-})
 
 test('with two p-values Hommel is Hochberg', () => {
   fc.assert(
@@ -220,7 +154,7 @@ test('with two p-values Hommel is Hochberg', () => {
 
 test('what cannot be computed is refused, with the reason', () => {
   expect(() => adjust('tukey', [0.01, 0.2])).toThrow(/Tukey cannot be computed from p-values alone/)
-  expect(() => adjust('none' as Procedure, [0.01])).toThrow(RangeError)
+  expect(() => adjust('none' as CatalogueProcedure, [0.01])).toThrow(RangeError)
   expect(() => adjust('holm', [1.2])).toThrow(RangeError)
   expect(() => adjust('holm', [-0.1])).toThrow(RangeError)
   expect(() => adjust('holm', [0.1, 0.2], { m: 1 })).toThrow(RangeError)
@@ -233,10 +167,26 @@ test('what cannot be computed is refused, with the reason', () => {
   expect(adjust('hommel', [0.2], { m: 1e9 })).toEqual([1])
 })
 
-test('every procedure of the vocabulary has a row', () => {
-  for (const procedure of PROCEDURES) {
-    const { label, source, assumption, needs } = procedureTable[procedure]
+test('every procedure of the catalogue has a row and one way at most', () => {
+  for (const procedure of CATALOGUE) {
+    const { label, source, assumption, needs, ...way } = procedureTable[procedure]
     for (const text of [label, source, assumption, needs]) expect(text, procedure).not.toBe('')
+    expect(way.adjust !== null && way.adjustInOrder !== null, procedure).toBe(false)
+    if (way.adjustEach !== null) expect(way.adjust, procedure).not.toBeNull()
   }
-  expect(COMPUTABLE.length).toBe(10)
+  expect(COMPUTABLE.length).toBe(12)
+  expect(TWO_STAGE).toEqual(['bky', 'bky-unscaled', 'tsbh'])
+})
+
+test('adjusted values of two conventions of the two-stage procedure call the same, each against its own level', () => {
+  fc.assert(
+    fc.property(vectorAndSize, ({ p, m }) => {
+      const call = (procedure: CatalogueProcedure) => {
+        const level = procedureTable[procedure].heldAgainst(0.05)
+        return adjust(procedure, p, { m, alpha: 0.05 }).map((q) => q <= level * (1 + 1e-12))
+      }
+      expect(call('bky-unscaled')).toEqual(call('bky'))
+    }),
+    { numRuns: 300 },
+  )
 })
