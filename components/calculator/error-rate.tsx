@@ -6,6 +6,7 @@ import { Field, Input } from '../ui/field'
 import { formatComputed } from '../ui/format-value'
 import type { CalculatorInput } from './calculator-input'
 import { readBetween, readWhole } from './read-settings'
+import { getCorrelated, getPairs } from './shown-beside'
 
 type ErrorRateProps = {
   m: number
@@ -14,23 +15,12 @@ type ErrorRateProps = {
   onChange: (part: Partial<CalculatorInput>) => void
 }
 
-/** The picture is the same beyond, and the integral gets long. */
-const MOST_CORRELATED = 5000
-const MOST_GROUPS = 100
-
 /** How likely a false rejection is when nothing is corrected. */
 export function ErrorRate({ m, alpha, input, onChange }: ErrorRateProps) {
   const rho = readBetween(input.rho, 0, 1)
   const groups = readWhole(input.groupCount, 2)
-  const k = groups.value ?? groupsOfPairs(m)
-  const correlated = useMemo(
-    () => (rho.value === null || m > MOST_CORRELATED ? null : familyWiseError(alpha, m, { rho: rho.value })),
-    [rho.value, m, alpha],
-  )
-  const pairs = useMemo(
-    () => (k !== null && k <= MOST_GROUPS ? familyWiseError(alpha, m, { allPairsOf: k }) : null),
-    [k, m, alpha],
-  )
+  const correlated = useMemo(() => getCorrelated(m, alpha, input.rho), [m, alpha, input.rho])
+  const pairs = useMemo(() => getPairs(m, alpha, input.groupCount), [m, alpha, input.groupCount])
   return (
     <div className="flex flex-col gap-2">
       <dl className="tabular grid grid-cols-[minmax(0,1fr)_auto] gap-x-4 gap-y-1">
@@ -39,15 +29,16 @@ export function ErrorRate({ m, alpha, input, onChange }: ErrorRateProps) {
         </dt>
         <dd className="text-right">{formatComputed(familyWiseError(alpha, m), 4)}</dd>
         <dt>correlated equally, ρ = {rho.value ?? '–'}</dt>
-        <dd className="text-right">{correlated === null ? '–' : formatComputed(correlated, 4)}</dd>
+        <dd className="text-right">{correlated ? formatComputed(correlated.error, 4) : '–'}</dd>
         <dt>at worst, under any dependence</dt>
         <dd className="text-right">{formatComputed(Math.min(1, m * alpha), 4)}</dd>
-        {k !== null && (
+        {pairs && (
           <>
             <dt>
-              all {(k * (k - 1)) / 2} pairs of {k} equal groups, large samples
+              all {(pairs.groups * (pairs.groups - 1)) / 2} pairs of {pairs.groups} equal groups, large
+              samples
             </dt>
-            <dd className="text-right">{pairs === null ? '–' : formatComputed(pairs, 4)}</dd>
+            <dd className="text-right">{formatComputed(pairs.error, 4)}</dd>
           </>
         )}
       </dl>
@@ -62,7 +53,7 @@ export function ErrorRate({ m, alpha, input, onChange }: ErrorRateProps) {
         <Field label="Groups, if all pairs" error={groups.fault ?? undefined}>
           <Input
             inputMode="numeric"
-            placeholder={k === null ? undefined : String(k)}
+            placeholder={pairs ? String(pairs.groups) : undefined}
             value={input.groupCount}
             onChange={(event) => onChange({ groupCount: event.target.value })}
           />
@@ -70,10 +61,4 @@ export function ErrorRate({ m, alpha, input, onChange }: ErrorRateProps) {
       </div>
     </div>
   )
-}
-
-/** k where m is the number of pairs of k groups, else null. */
-function groupsOfPairs(m: number): number | null {
-  const k = Math.round((1 + Math.sqrt(1 + 8 * m)) / 2)
-  return k >= 3 && (k * (k - 1)) / 2 === m ? k : null
 }

@@ -1,11 +1,12 @@
 'use client'
 
 import { useMemo } from 'react'
-import { powerCost, sampleSizeOfTTest } from '@/lib/checks/sensitivity/power'
+import { sampleSizeOfTTest } from '@/lib/checks/sensitivity/power'
 import { Field, Input, Select } from '../ui/field'
 import { formatComputed } from '../ui/format-value'
 import { POWER_CHOICES, type CalculatorInput } from './calculator-input'
 import { readBetween, readWhole } from './read-settings'
+import { getPower } from './shown-beside'
 
 type PowerCostProps = {
   m: number
@@ -18,13 +19,15 @@ type PowerCostProps = {
 export function PowerCost({ m, alpha, input, onChange }: PowerCostProps) {
   const n = readWhole(input.size, 2)
   const effect = readBetween(input.effect, 0.01, 20)
-  const cost = useMemo(() => {
-    if (n.value === null || effect.value === null || n.value > 1e6) return null
-    const { design } = input
-    const { without, with: left } = powerCost(design, n.value, effect.value, alpha, m)
-    const needed = without < 1 ? sampleSizeOfTTest(design, without, effect.value, alpha / m) : n.value
-    return { without, left, needed }
-  }, [n.value, effect.value, input, alpha, m])
+  const { design, size } = input
+  const power = useMemo(
+    () => getPower(m, alpha, design, size, input.effect),
+    [m, alpha, design, size, input.effect],
+  )
+  const needed = useMemo(() => {
+    if (!power) return NaN
+    return power.without < 1 ? sampleSizeOfTTest(design, power.without, power.effect, alpha / m) : power.n
+  }, [power, design, alpha, m])
   return (
     <div className="flex flex-col gap-2">
       <div className="grid grid-cols-3 gap-3">
@@ -56,15 +59,15 @@ export function PowerCost({ m, alpha, input, onChange }: PowerCostProps) {
           />
         </Field>
       </div>
-      {cost && (
+      {power && (
         <dl className="tabular grid grid-cols-[minmax(0,1fr)_auto] gap-x-4 gap-y-1">
           <dt>Power of one test at α = {alpha}</dt>
-          <dd className="text-right">{formatComputed(cost.without, 3)}</dd>
+          <dd className="text-right">{formatComputed(power.without, 3)}</dd>
           <dt>at α / {m.toLocaleString('en')}, Bonferroni</dt>
-          <dd className="text-right">{formatComputed(cost.left, 3)}</dd>
+          <dd className="text-right">{formatComputed(power.with, 3)}</dd>
           <dt>{input.design === 'paired' ? 'Pairs' : 'n per group'} to regain it</dt>
           <dd className="text-right">
-            {Number.isFinite(cost.needed) ? cost.needed.toLocaleString('en') : 'more than 10 million'}
+            {Number.isFinite(needed) ? needed.toLocaleString('en') : 'more than 10 million'}
           </dd>
         </dl>
       )}

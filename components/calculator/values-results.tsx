@@ -14,6 +14,7 @@ import { Toolbar } from './toolbar'
 import { ValuesTable } from './values-table'
 import { WhatWasDone } from './what-was-done'
 import type { WorkedOut } from './work-out'
+import { writeValuesScript } from './write-values-script'
 
 type ValuesResultsProps = {
   /** What the results follow from; it may lag behind the typing in a long list. */
@@ -39,7 +40,11 @@ export function ValuesResults({ input, worked, onChange, id }: ValuesResultsProp
     <div className="flex min-w-0 flex-col gap-6">
       <div className="flex flex-wrap items-start justify-between gap-x-6 gap-y-3">
         {main.refused === null && <Headline calculation={calculation} main={main} alpha={alpha} />}
-        <Toolbar input={input} writeCsv={() => writeCalculationCsv(entries, calculation)} writeR={null} />
+        <Toolbar
+          input={input}
+          writeCsv={() => writeCalculationCsv(entries, calculation)}
+          writeR={() => writeValuesScript(input, worked)}
+        />
       </div>
       {refused.length > 0 && (
         <Notice tone="care">

@@ -1,17 +1,13 @@
 'use client'
 
 import { useMemo } from 'react'
-import { fitPrinted } from '@/lib/checks/calculate/fit-printed'
 import type { Entry } from '@/lib/checks/calculate/entry'
 import { procedureTable } from '@/lib/checks/procedures/table'
 import { Field, Textarea } from '../ui/field'
 import type { CalculatorInput } from './calculator-input'
 import { capitalise } from './procedure-choice'
+import { getFits, MOST_COMPARED } from './shown-beside'
 import { count, type WorkedOut } from './work-out'
-
-/** Beyond this the search takes longer than a reader waits. */
-const MOST_COMPARED = 2000
-const FURTHEST = 400
 
 type WhatWasDoneProps = {
   entries: readonly Entry[]
@@ -22,17 +18,7 @@ type WhatWasDoneProps = {
 
 /** Which procedure and family size give the printed adjusted values. */
 export function WhatWasDone({ entries, input, onChange, faults }: WhatWasDoneProps) {
-  const compared = entries.filter((entry) => entry.adjusted !== null).length
-  const many = compared > MOST_COMPARED
-  const found = useMemo(
-    () =>
-      many
-        ? null
-        : fitPrinted(entries, input.reading, {
-            mMax: Math.min(FURTHEST, Math.max(60, entries.length)),
-          }),
-    [entries, input.reading, many],
-  )
+  const shown = useMemo(() => getFits(entries, input.reading), [entries, input.reading])
   return (
     <div className="flex flex-col gap-2">
       <Field
@@ -54,18 +40,18 @@ export function WhatWasDone({ entries, input, onChange, faults }: WhatWasDonePro
         />
       </Field>
       <div aria-live="polite">
-        {many && <p>More than {MOST_COMPARED} pairs of values are not compared here.</p>}
-        {found && found.compared > 0 && (
+        {shown === null && <p>More than {MOST_COMPARED} pairs of values are not compared here.</p>}
+        {shown && shown.compared > 0 && (
           <>
             <p>
-              {found.fits.length === 0
-                ? `No procedure known here, with m up to ${Math.min(FURTHEST, Math.max(60, entries.length))}, gives the ${count(found.compared, 'printed value')} from the raw ones.`
-                : found.fits.length === 1
+              {shown.found.length === 0
+                ? `No procedure known here, with m up to ${shown.upTo}, gives the ${count(shown.compared, 'printed value')} from the raw ones.`
+                : shown.found.length === 1
                   ? 'One procedure gives all printed values from the raw ones:'
                   : 'The printed values do not tell these apart; each gives all of them from the raw ones:'}
             </p>
             <ul className="mt-1">
-              {found.fits.slice(0, 12).map(({ procedure, m }) => (
+              {shown.found.slice(0, 12).map(({ procedure, m }) => (
                 <li key={`${procedure} ${m}`} className="tabular">
                   {procedure === 'raw' ? (
                     'no adjustment at all'
@@ -76,7 +62,7 @@ export function WhatWasDone({ entries, input, onChange, faults }: WhatWasDonePro
                   )}
                 </li>
               ))}
-              {found.fits.length > 12 && <li>and {count(found.fits.length - 12, 'other')}</li>}
+              {shown.found.length > 12 && <li>and {count(shown.found.length - 12, 'other')}</li>}
             </ul>
           </>
         )}

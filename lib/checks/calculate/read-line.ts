@@ -3,7 +3,7 @@ import { findPValues } from '../extract/grammar/p-value'
 import { findStatistics } from '../extract/grammar/statistic'
 import type { Entry, Sides, Unread } from './entry'
 import { readPToken, type ReadP } from './read-number'
-import { readStatisticP, STATISTIC_DECIMALS } from './read-statistic'
+import { readStatisticP, STATISTIC_DECIMALS, type ReadStatisticP } from './read-statistic'
 
 export type LineOptions = { alpha: number; sides: Sides; decimalComma: boolean }
 export type ReadLine = { entries: Entry[]; unread: Unread[] }
@@ -40,7 +40,7 @@ function readStated(text: string, line: number, { alpha, sides }: LineOptions): 
     entries: [],
     unread: [{ line, text: piece, why }],
   })
-  const base = { line, name, adjusted: null, weight: null }
+  const base = { line, name, statistic: null, adjusted: null, weight: null }
 
   const raw = values.filter((one) => one.scale !== 'adjusted')
   const adjusted = values.filter((one) => one.scale === 'adjusted')
@@ -62,7 +62,8 @@ function readStated(text: string, line: number, { alpha, sides }: LineOptions): 
     // Both are printed: each narrows the other where they agree; the p-value counts where they do not.
     const low = Math.max(value.low, fromStatistic.low)
     const high = Math.min(value.high, fromStatistic.high)
-    const both = low <= high ? { ...value, low, high } : value
+    const statisticOf = { ...fromStatistic.statistic, alone: false }
+    const both = low <= high ? { ...value, low, high, statistic: statisticOf } : value
     return {
       entries: [{ ...base, ...both, printed: text.slice(first, last).trim(), adjusted: printedAdjusted }],
       unread: [],
@@ -108,8 +109,8 @@ function readStated(text: string, line: number, { alpha, sides }: LineOptions): 
   }
 }
 
-function ofStatistic({ value, low, high }: { value: number; low: number; high: number }) {
-  return { value, low, high, relation: '=' as const, decimals: STATISTIC_DECIMALS }
+function ofStatistic({ value, low, high, statistic }: ReadStatisticP) {
+  return { value, low, high, statistic, relation: '=' as const, decimals: STATISTIC_DECIMALS }
 }
 
 /** What separates the items of a line; a comma only where it is no decimal comma. */
@@ -163,5 +164,17 @@ const clip = (text: string) => (text.length > 120 ? `${text.slice(0, 119)}…` :
 /** Written out: there may be a hundred thousand of them. */
 function toEntry(line: number, name: string, printed: string, p: ReadP): Entry {
   const { low, high, value, relation, decimals } = p
-  return { line, name, printed, value, relation, decimals, low, high, adjusted: null, weight: null }
+  return {
+    line,
+    name,
+    printed,
+    value,
+    relation,
+    decimals,
+    low,
+    high,
+    statistic: null,
+    adjusted: null,
+    weight: null,
+  }
 }

@@ -2,33 +2,41 @@ import { tail } from '../distributions/tail'
 import type { PrintedStatistic } from '../extract/grammar/statistic'
 import { pBounds } from '../numbers/p-bounds'
 import { roundingInterval, type Interval } from '../numbers/printed-interval'
-import type { Sides } from './entry'
+import type { EntryStatistic, Sides } from './entry'
 
 /** Digits after the point with which the p-value of a statistic is shown. */
 export const STATISTIC_DECIMALS = 4
 
 const DF_COUNT = { t: 1, F: 2, chi2: 1, z: 0, r: 1 } as const
 
+export type ReadStatisticP = Interval & { value: number; statistic: EntryStatistic }
+
 /**
  * The p-value of a printed statistic, and the interval over its rounding; `sides` for t, z and r, the upper tail for
  * F and χ². Null where the statistic has no p-value without more (U, W, missing degrees of freedom, a relation).
  */
-export function readStatisticP(
-  statistic: PrintedStatistic,
-  sides: Sides,
-): (Interval & { value: number }) | null {
+export function readStatisticP(statistic: PrintedStatistic, sides: Sides): ReadStatisticP | null {
   const { test, df, value, decimals, relation } = statistic
   if (test === 'other' || relation !== '=' || df.length !== DF_COUNT[test]) return null
   if (df.some((one) => !(one > 0))) return null
   const directed = sides !== 'two-sided' && (test === 't' || test === 'z' || test === 'r')
   const sign = sides === 'less' ? -1 : 1
   const given = roundingInterval(value, decimals)
+  const print: EntryStatistic = {
+    test,
+    df,
+    value,
+    decimals,
+    sides: directed ? sides : 'two-sided',
+    alone: true,
+  }
   if (!directed) {
-    return { value: tail(test, clipTo(test, value), df), ...pBounds(test, given.low, given.high, df) }
+    const { low, high } = pBounds(test, given.low, given.high, df)
+    return { value: tail(test, clipTo(test, value), df), low, high, statistic: print }
   }
   const [low, high] = sign === 1 ? [given.low, given.high] : [-given.high, -given.low]
   const upper = (x: number) => tail(test, clipTo(test, x), df, 1)
-  return { value: upper(sign * value), low: upper(high), high: upper(low) }
+  return { value: upper(sign * value), low: upper(high), high: upper(low), statistic: print }
 }
 
 function clipTo(test: PrintedStatistic['test'], value: number): number {

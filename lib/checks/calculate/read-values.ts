@@ -158,6 +158,7 @@ function readRecord(
     line,
     name: nameOf(cells, columns, roles),
     printed,
+    statistic: null,
     adjusted: readAdjusted(columns.adjusted === null ? '' : (cells[columns.adjusted] ?? ''), how.alpha),
     weight: columns.weight === null ? null : (readPlainNumber(cells[columns.weight] ?? '')?.value ?? null),
   }

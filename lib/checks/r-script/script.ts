@@ -3,6 +3,7 @@ import { checking } from './functions/checking'
 import { dunnett } from './functions/dunnett'
 import { families } from './functions/families'
 import { fitting } from './functions/fitting'
+import { ordered } from './functions/ordered'
 import { procedures } from './functions/procedures'
 import { ranges } from './functions/ranges'
 import { studentizedRange } from './functions/studentized-range'
@@ -20,6 +21,7 @@ const LIBRARY = {
   'studentized-range': { needs: [], text: studentizedRange },
   dunnett: { needs: ['checking', 'studentized-range'], text: dunnett },
   procedures: { needs: [], text: procedures },
+  ordered: { needs: [], text: ordered },
   families: { needs: ['ranges', 'procedures', 'studentized-range'], text: families },
   fitting: { needs: ['ranges', 'procedures', 'families'], text: fitting },
   audit: { needs: ['ranges', 'tails', 'families', 'fitting'], text: audit },
