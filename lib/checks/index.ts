@@ -6,7 +6,7 @@ export { studentizedRangeUpper } from './distributions/studentized-range'
 export { logTail, tail, type TailTest } from './distributions/tail'
 export { dunnettQuantile, studentizedRangeQuantile, upperQuantile } from './distributions/upper-quantile'
 export { defaultHouseRules } from './house-rules'
-export { pBounds } from './numbers/p-bounds'
+export { pBounds, type TailSides } from './numbers/p-bounds'
 export { parsePrinted, parsePrintedP, type PrintedNumber, type PrintedP } from './numbers/parse-printed'
 export {
   printedInterval,
@@ -14,6 +14,7 @@ export {
   truncationInterval,
   type Interval,
 } from './numbers/printed-interval'
+export { pBoundsOverSphericity } from './numbers/sphericity'
 export { adjust, type AdjustOptions } from './procedures/adjust'
 export { adjustBounds, type Bounds } from './procedures/adjust-bounds'
 export { compareByDuncan } from './procedures/duncan'
@@ -32,13 +33,15 @@ export { compareBySteelDwass } from './procedures/steel-dwass'
 export { procedureTable, type ProcedureRow } from './procedures/table'
 export { pTukeyFromT } from './procedures/tukey'
 export { writeAuditScript, writeFamilyScript } from './r-script/audit-script'
-export { fits, type FitOptions } from './recover/fits'
+export { fits, fitsAdaptive, type AdaptiveFit, type FitOptions } from './recover/fits'
 export {
   fitsFromStatistics,
   type PrintedStatistic,
   type StatisticFit,
   type StatisticFitOptions,
 } from './recover/fits-from-statistics'
+export { fitsJointly, type JointFit } from './recover/fits-jointly'
+export { judgeFits, type FitVerdict } from './recover/judge-fits'
 export { thresholdFits, type ThresholdFit } from './recover/threshold-fits'
 export { compareProcedurePower, type ComparedDesign, type ProcedurePower } from './sensitivity/compare-power'
 export {

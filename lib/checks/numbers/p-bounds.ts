@@ -1,11 +1,15 @@
 import { tail, type TailTest } from '../distributions/tail'
 import { roundingInterval, type Interval } from './printed-interval'
 
+/** 2: both tails; 1: the smaller tail; 'greater', 'less': the tail above or below, named before the result was seen. */
+export type TailSides = 1 | 2 | 'greater' | 'less'
+
 /**
  * The p-values that a statistic between `low` and `high` can have: two-sided for t, z and r (`sides` 1: the smaller
- * tail, as a one-sided test in the direction of the result), upper tail for F, χ² and q. The interval may hold 0,
- * where the two-sided p is 1; a correlation is cut at ±1, F, χ² and q at 0. `df` as in `tail`; fractional df stand
- * for their own rounding interval (27.4 for 27.35 … 27.45), at whose ends the p-values are taken as well.
+ * tail, as a one-sided test in the direction of the result; 'greater' and 'less': the tail of that direction, above
+ * 1/2 for a result in the wrong one), upper tail for F, χ² and q. The interval may hold 0, where the two-sided p is 1;
+ * a correlation is cut at ±1, F, χ² and q at 0. `df` as in `tail`; fractional df stand for their own rounding interval
+ * (27.4 for 27.35 … 27.45), at whose ends the p-values are taken as well.
  * Throws RangeError where `low` exceeds `high` and as `tail` does.
  */
 export function pBounds(
@@ -13,12 +17,17 @@ export function pBounds(
   low: number,
   high: number,
   df: readonly number[],
-  sides: 1 | 2 = 2,
+  sides: TailSides = 2,
 ): Interval {
   if (!(low <= high))
     throw new RangeError(`the interval of a statistic runs upwards, not from ${low} to ${high}`)
-  const [least, most] = getSizes(test, low, high)
-  const oneSided = test === 't' || test === 'z' || test === 'r' ? sides : 2
+  const signed = test === 't' || test === 'z' || test === 'r'
+  const directed = signed && (sides === 'greater' || sides === 'less')
+  // The lower tail is the upper one of the mirrored statistic.
+  const [least, most] = directed
+    ? getEnds(test, sides === 'less' ? [-high, -low] : [low, high])
+    : getSizes(test, low, high)
+  const oneSided = directed || (signed && sides === 1) ? 1 : 2
   const lows: number[] = []
   const highs: number[] = []
   for (const corner of listCorners(test, df)) {
@@ -26,6 +35,11 @@ export function pBounds(
     highs.push(tail(test, least, corner, oneSided))
   }
   return { low: Math.min(...lows), high: Math.max(...highs) }
+}
+
+/** The ends themselves, a correlation's cut at ±1. */
+function getEnds(test: TailTest, [low, high]: [number, number]): [number, number] {
+  return test === 'r' ? [Math.max(-1, low), Math.min(1, high)] : [low, high]
 }
 
 /** Smallest and largest size of the statistic, as far as its p-value goes. */
@@ -47,7 +61,8 @@ function listCorners(test: TailTest, df: readonly number[]): number[][] {
   )
 }
 
-function listEnds(df: number): number[] {
+/** The df as printed and, where it is a fraction, the ends of its rounding interval (27.35, 27.4 and 27.45 for 27.4). */
+export function listEnds(df: number): number[] {
   if (!Number.isFinite(df) || Number.isInteger(df)) return [df]
   const decimals = String(df).split('.')[1]?.length ?? 0
   const { low, high } = roundingInterval(df, decimals)
