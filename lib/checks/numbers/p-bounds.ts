@@ -61,8 +61,7 @@ function listCorners(test: TailTest, df: readonly number[]): number[][] {
   )
 }
 
-/** The df as printed and, where it is a fraction, the ends of its rounding interval (27.35, 27.4 and 27.45 for 27.4). */
-export function listEnds(df: number): number[] {
+function listEnds(df: number): number[] {
   if (!Number.isFinite(df) || Number.isInteger(df)) return [df]
   const decimals = String(df).split('.')[1]?.length ?? 0
   const { low, high } = roundingInterval(df, decimals)

@@ -1,12 +1,14 @@
 import type { TailTest } from '../distributions/tail'
 import { pBounds } from '../numbers/p-bounds'
-import type { Interval } from '../numbers/printed-interval'
+import { roundingInterval, type Interval } from '../numbers/printed-interval'
 import { pDunnettFromT } from '../procedures/dunnett'
+import { pGamesHowellFromWelch } from '../procedures/games-howell'
 import { pScheffeFromT } from '../procedures/scheffe'
 import { pTukeyFromT } from '../procedures/tukey'
 import type { Fit } from '../types'
 import { fits, type FitOptions } from './fits'
-import { meet } from './intervals'
+import { findFirst } from './find-first'
+import { SLACK } from './intervals'
 
 /** A printed statistic: its rounding interval and its df as in `tail`; `sides` default 2. */
 export type PrintedStatistic = {
@@ -23,21 +25,34 @@ export type StatisticFit = Fit & { groups: number | null }
 /** `groupsMax`: largest number of groups tried, default 12. */
 export type StatisticFitOptions = FitOptions & { groupsMax?: number }
 
-/** Procedures that work on t statistics with one df: the tests that k groups give room for, and the adjusted p. */
-const FROM_T = [
-  { procedure: 'tukey', count: (k: number) => (k * (k - 1)) / 2, p: pTukeyFromT },
-  { procedure: 'scheffe', count: (k: number) => (k * (k - 1)) / 2, p: pScheffeFromT },
+/** Procedures over all pairs or against a control: the tests that k groups give room for, and the adjusted p of a t. */
+type FromT = {
+  procedure: 'tukey' | 'scheffe' | 'dunnett' | 'games-howell'
+  count: (groups: number) => number
+  p: (t: number, groups: number, df: number) => number
+}
+
+const allPairs = (groups: number) => (groups * (groups - 1)) / 2
+
+const FROM_ONE_DF: readonly FromT[] = [
+  { procedure: 'tukey', count: allPairs, p: pTukeyFromT },
+  { procedure: 'scheffe', count: allPairs, p: pScheffeFromT },
   {
     procedure: 'dunnett',
-    count: (k: number) => k - 1,
-    p: (t: number, k: number, df: number) => pDunnettFromT(t, k - 1, df),
+    count: (groups) => groups - 1,
+    p: (t, groups, df) => pDunnettFromT(t, groups - 1, df),
   },
-] as const
+]
+const FROM_OWN_DF: readonly FromT[] = [
+  { procedure: 'games-howell', count: allPairs, p: pGamesHowellFromWelch },
+]
 
 /**
  * As `fits`, from the printed test statistics: raw p-values over the rounding interval of each statistic; and where
- * all are two-sided t tests with one df, also Tukey, Scheffé (m = k (k − 1) / 2) and Dunnett with equal groups
- * (m = k − 1) for k = 2 … `groupsMax` groups that have at least as many comparisons as there are items.
+ * all are two-sided t tests on at least one df, the procedures that work on t for k = 2 … `groupsMax` groups that have at least as many
+ * comparisons as there are items: with one whole df Tukey and Scheffé (m = k (k − 1) / 2) and Dunnett with equal
+ * groups (m = k − 1); where the df differ or are fractions, as Welch's are, Games–Howell (m = k (k − 1) / 2), over the
+ * rounding of the df too. RangeError where printed values and statistics differ in number, and as `pBounds`.
  */
 export function fitsFromStatistics(
   printed: readonly Interval[],
@@ -49,44 +64,72 @@ export function fitsFromStatistics(
   return [...fromP, ...findFromT(printed, statistics, raw, options.groupsMax ?? 12)]
 }
 
+/** One item: what is printed, its raw p, the sizes of its t, and the df that its print stands for. */
+type Item = { print: Interval; raw: Interval; t: Interval; df: number[] }
+
 function findFromT(
   printed: readonly Interval[],
   statistics: readonly PrintedStatistic[],
   raw: readonly Interval[],
   groupsMax: number,
 ): StatisticFit[] {
-  const df = statistics[0]?.df[0]
-  const alike = statistics.every(
-    ({ test, df: own, sides = 2 }) => test === 't' && sides === 2 && own[0] === df,
-  )
-  if (df === undefined || !alike) return []
+  const first = statistics[0]?.df[0]
+  const twoSided = statistics.every(({ test, sides = 2 }) => test === 't' && sides === 2)
+  const own = statistics.map(({ df }) => df[0] ?? NaN)
+  if (first === undefined || !twoSided || !own.every((df) => df >= 1)) return []
+  const alike = own.every((df) => df === first)
+  const welch = !alike || !(Number.isInteger(first) || first === Infinity)
 
-  const sizes = statistics.map(({ low, high }) => ({
-    low: low <= 0 && high >= 0 ? 0 : Math.min(Math.abs(low), Math.abs(high)),
-    high: Math.max(Math.abs(low), Math.abs(high)),
-  }))
-  const found: StatisticFit[] = []
-  for (const { procedure, count, p } of FROM_T) {
-    for (let k = 2; k <= groupsMax; k++) {
-      if (count(k) < statistics.length) continue
-      // Tukey and Dunnett lie between the raw p and Bonferroni's: what misses that needs no quadrature.
-      const bounded = procedure === 'scheffe' || isWithinBonferroni(printed, raw, count(k))
-      const all =
-        bounded &&
-        printed.every((print, i) => {
-          const size = sizes[i] ?? { low: NaN, high: NaN }
-          const low = p(size.high, k, df)
-          return meet(print, { low, high: 1 }) && meet(print, { low, high: p(size.low, k, df) })
-        })
-      if (all) found.push({ procedure, m: count(k), groups: k })
-    }
-  }
-  return found
+  // "6.0" arrives as 6: where others carry decimals, so does it
+  const decimals = Math.max(...own.map(countDecimals))
+  const items = statistics.flatMap(({ low, high }, i) => {
+    const [print, p, df] = [printed[i], raw[i], own[i]]
+    if (print === undefined || p === undefined || df === undefined) return []
+    const least = low <= 0 && high >= 0 ? 0 : Math.min(Math.abs(low), Math.abs(high))
+    const t = { low: least, high: Math.max(Math.abs(low), Math.abs(high)) }
+    return [{ print, raw: p, t, df: welch ? listDf(df, decimals) : [df] }]
+  })
+  const candidates = [...(alike ? FROM_ONE_DF : []), ...(welch ? FROM_OWN_DF : [])]
+  return candidates.flatMap((candidate) => findGroups(candidate, items, groupsMax))
 }
 
-function isWithinBonferroni(printed: readonly Interval[], raw: readonly Interval[], m: number): boolean {
-  return printed.every((print, i) => {
-    const { low, high } = raw[i] ?? { low: NaN, high: NaN }
-    return meet(print, { low, high: Math.min(1, m * high) })
-  })
+function countDecimals(df: number): number {
+  return String(df).split('.')[1]?.length ?? 0
+}
+
+/** The df as printed and, as a printed fraction, the ends of its rounding interval. */
+function listDf(df: number, decimals: number): number[] {
+  if (decimals === 0 || df === Infinity) return [df]
+  const { low, high } = roundingInterval(df, decimals)
+  return [Math.max(1, low), df, high]
+}
+
+/** Adjusted values grow with the number of groups: the numbers that fit are consecutive. */
+function findGroups(
+  { procedure, count, p }: FromT,
+  items: readonly Item[],
+  groupsMax: number,
+): StatisticFit[] {
+  let fewest = 2
+  while (count(fewest) < items.length) fewest++
+  // all but Scheffé lie between the raw p and Bonferroni's: what misses that needs no quadrature
+  const within =
+    (groups: number) =>
+    ({ print, raw }: Item) =>
+      procedure === 'scheffe' || print.low <= Math.min(1, count(groups) * raw.high) + SLACK
+  const highFits = (groups: number) =>
+    items.every(within(groups)) &&
+    items.every(({ print, t, df }) => df.some((value) => print.low <= p(t.low, groups, value) + SLACK))
+  const lowFits = (groups: number) =>
+    items.every(({ print, t, df }) => df.some((value) => p(t.high, groups, value) <= print.high + SLACK))
+
+  if (!items.every(({ print, raw }) => raw.low <= print.high + SLACK)) return []
+  const from = findFirst(fewest, groupsMax, highFits)
+  if (from > groupsMax) return []
+  const to = findFirst(from, groupsMax, (groups) => !lowFits(groups)) - 1
+  return Array.from({ length: Math.max(0, to - from + 1) }, (_, i) => ({
+    procedure,
+    m: count(from + i),
+    groups: from + i,
+  }))
 }

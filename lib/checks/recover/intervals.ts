@@ -1,7 +1,7 @@
 import type { Interval } from '../numbers/printed-interval'
 
 /** Room for rounding errors at the closed ends. */
-const SLACK = 1e-12
+export const SLACK = 1e-12
 
 /** Whether two closed intervals have a point in common. */
 export function meet(a: Interval, b: Interval): boolean {

@@ -1,7 +1,9 @@
 import { expect, test } from 'vitest'
 import {
   fits,
+  fitsAdaptive,
   fitsFromStatistics,
+  judgeFits,
   parsePrinted,
   parsePrintedP,
   pBounds,
@@ -30,6 +32,10 @@ type Problem = {
   raw_p_lower: number[]
   raw_p_upper: number[]
   fits: { procedure: string; sizes: [number, number][] }[]
+  solution_class: string
+  truth: { procedure: string; size: number } | null
+  claim: { procedure: string; size: number } | null
+  claim_fits: boolean | null
 }
 type Threshold = {
   reported_threshold: string
@@ -88,10 +94,20 @@ test('from the statistics Tukey and Scheffé are found for exactly the numbers o
   let recovered = 0
   for (const problem of reference.problems) {
     const found = fitsFromStatistics(printedOf(problem), problem.items.map(toStatistic))
-    const named = found.flatMap(({ procedure, m, groups }) => {
-      if (procedure === 'dunnett') return []
-      return [procedure === 'raw' ? 'raw' : `${procedure} ${groups ?? m}`]
-    })
+    const listed = found.filter(({ procedure }) => procedure !== 'dunnett')
+    expect(judgeFits(listed), problem.id).toBe(problem.solution_class)
+    const holds = (said: Problem['claim']) =>
+      listed.some(
+        ({ procedure, m, groups }) =>
+          said !== null &&
+          procedure === rename(said.procedure) &&
+          (procedure === 'raw' || (groups ?? m) === said.size),
+      )
+    if (problem.truth !== null) expect(holds(problem.truth), problem.id).toBe(true)
+    if (problem.claim !== null) expect(holds(problem.claim), problem.id).toBe(problem.claim_fits)
+    const named = listed.map(({ procedure, m, groups }) =>
+      procedure === 'raw' ? 'raw' : `${procedure} ${groups ?? m}`,
+    )
     expect(named.sort(), problem.id).toEqual(listExpected(problem, () => true))
     recovered += named.filter((name) => isFromT(name.split(' ')[0] ?? '')).length
   }
@@ -109,15 +125,60 @@ test('per-test thresholds lead back to the alpha and the m that R finds', () => 
   }
 })
 
-test('Dunnett against one control is recovered from R’s p-values of a data set', () => {
-  // R: PlantGrowth, two treatments against the control, df 27; p by double quadrature 0.3226957, 0.1534859.
-  const statistics = [-1.33, 1.77].map((value) => ({
-    test: 't' as const,
-    ...roundingInterval(value, 2),
-    df: [27],
-  }))
-  const found = fitsFromStatistics([roundingInterval(0.323, 3), roundingInterval(0.153, 3)], statistics)
-  expect(found).toContainEqual({ procedure: 'dunnett', m: 2, groups: 3 })
+// R 4.2.2 on its built-in data sets (header of datasets.json), printed as a paper would: t to 2 decimals, p to 3.
+type DataSet = {
+  name: string
+  grand: { k: number }
+  groups: { n: number[] }
+  pairwise_t_pooled: { t: number[]; df: number }
+  pairwise_t_separate: { t: number[]; df: number[] }
+  tukey: { p: number[] }
+  scheffe: { p: number[] }
+  games_howell: { p: number[] }
+  dunnett?: { t: number[]; df: number; p: number[] }
+}
+const { cases } = readReference<{ cases: DataSet[] }>('datasets.json')
+const print = (value: number, decimals: number) => roundingInterval(Number(value.toFixed(decimals)), decimals)
+const printP = (p: number): Interval => (p < 0.001 ? { low: 0, high: 0.001 } : print(p, 3))
+const printT = (t: number, df: number): PrintedStatistic => ({ test: 't', ...print(t, 2), df: [df] })
+
+test('Tukey, Scheffé, Games–Howell and Dunnett are recovered from the printed statistics of R’s data sets', () => {
+  let recovered = 0
+  for (const item of cases) {
+    const { name, grand, groups, pairwise_t_pooled, pairwise_t_separate } = item
+    const pooled = pairwise_t_pooled.t.map((t) => printT(t, pairwise_t_pooled.df))
+    const welch = pairwise_t_separate.t.map((t, i) =>
+      printT(t, Number((pairwise_t_separate.df[i] ?? NaN).toFixed(1))),
+    )
+    const m = (grand.k * (grand.k - 1)) / 2
+    const find = (p: readonly number[], statistics: readonly PrintedStatistic[]) =>
+      fitsFromStatistics(p.map(printP), statistics)
+    const all = { m, groups: grand.k }
+    expect(find(item.tukey.p, pooled), name).toContainEqual({ procedure: 'tukey', ...all })
+    expect(find(item.scheffe.p, pooled), name).toContainEqual({ procedure: 'scheffe', ...all })
+    expect(find(item.games_howell.p, welch), name).toContainEqual({ procedure: 'games-howell', ...all })
+    recovered++
+    if (item.dunnett === undefined || new Set(groups.n).size > 1) continue
+    const { t, df, p } = item.dunnett
+    expect(
+      find(
+        p,
+        t.map((value) => printT(value, df)),
+      ),
+      name,
+    ).toContainEqual({
+      procedure: 'dunnett',
+      m: grand.k - 1,
+      groups: grand.k,
+    })
+    recovered++
+  }
+  expect(recovered).toBeGreaterThanOrEqual(18)
+})
+
+test('statistics on less than one degree of freedom leave the procedures on t out and throw nothing', () => {
+  const found = fitsFromStatistics([{ low: 0.2, high: 0.9 }], [{ test: 't', low: 1, high: 1.1, df: [0.5] }])
+  expect(found.every(({ groups }) => groups === null)).toBe(true)
 })
 
 test('items without a raw value are left out and do not count', () => {
@@ -132,6 +193,9 @@ test('items without a raw value are left out and do not count', () => {
   expect(found).toContainEqual({ procedure: 'bonferroni', m: 3 })
   expect(fits([unknown], [unknown])).toEqual([])
   expect(() => fits([unknown], [])).toThrow(RangeError)
+  expect(() => fits([unknown], [{ low: 0.2, high: 0.1 }])).not.toThrow()
+  expect(() => fits([{ low: 0, high: 1 }], [{ low: 0.2, high: 0.1 }])).toThrow(RangeError)
+  expect(() => fits([{ low: 0, high: 1 }], [{ low: 0.2, high: 1.1 }])).toThrow(RangeError)
 })
 
 test('two-stage and Storey are tried on request only', () => {
@@ -140,4 +204,9 @@ test('two-stage and Storey are tried on request only', () => {
   const printed = [0.00525, 0.0105, 0.0105, 0.23625].map((p) => ({ low: p, high: p }))
   expect(fits(printed, raw)).toEqual([])
   expect(fits(printed, raw, { adaptive: true })).toContainEqual({ procedure: 'bky', m: 4 })
+  expect(fitsAdaptive(printed, raw)).toContainEqual({ procedure: 'bky', m: 4 })
+  // without the factor 1 + alpha
+  const unscaled = [0.005, 0.01, 0.01, 0.225].map((p) => ({ low: p, high: p }))
+  const found = fitsAdaptive(unscaled, raw).filter(({ m }) => m === 4)
+  expect(found.map(({ procedure }) => procedure)).toEqual(['bky-unscaled', 'tsbh'])
 })
