@@ -1,5 +1,6 @@
 import type { HouseRules, LaidOut, Reading, ReadTable } from '../types'
 import { findClaims, findGeneralAlpha } from './claims'
+import { readConsole } from './read-console'
 import { readProse } from './read-prose'
 import { splitSentences } from './sentences'
 import { collectNames } from './names'
@@ -29,7 +30,8 @@ export function read(laidOut: LaidOut, table: ReadTable | null, rules: HouseRule
     alpha.value,
     controls.map(({ name }) => name),
   )
-  const parts = [inText, inTables, inResults]
+  const atPrompts = { reports: readConsole(laidOut), statistics: [] }
+  const parts = [inText, atPrompts, inTables, inResults]
   return number({
     alpha,
     claims,

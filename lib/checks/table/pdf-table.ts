@@ -1,4 +1,6 @@
+import { readCommand } from '../extract/grammar/console'
 import type { LaidOut, PdfTable, SectionKind } from '../types'
+import { readP } from './cell'
 import { readCorrelations } from './correlations'
 import { readGrid, type Grid, type GridRow, type Part } from './grid'
 import { isHeadLine } from './head'
@@ -33,10 +35,12 @@ function toGrids(laidOut: LaidOut, alpha: number): Grid[] {
   const grids: Grid[] = []
   laidOut.tables.forEach((table, i) => {
     const previous = grids[grids.length - 1]
+    const printedBy = table.caption.trim() === '' ? findCommand(laidOut, table) : null
     for (const [k, { headers, rows }] of cutAtHeads(table).entries()) {
       const last = k === 0 ? previous : undefined
       const goesOn =
         last !== undefined &&
+        printedBy === null &&
         table.caption.trim() === '' &&
         last.page !== null &&
         table.page - last.page <= 1 &&
@@ -50,7 +54,7 @@ function toGrids(laidOut: LaidOut, alpha: number): Grid[] {
         table: i,
         caption: goesOn ? last.caption : table.caption,
         notes: goesOn ? `${last.notes} ${table.notes}`.trim() : table.notes,
-        headers: goesOn ? last.headers : headers,
+        headers: goesOn ? last.headers : headOutput(headers, rows, printedBy),
         rows,
         offset: table.offset,
         section: sectionAt(laidOut, table.offset),
@@ -59,6 +63,25 @@ function toGrids(laidOut: LaidOut, alpha: number): Grid[] {
     }
   })
   return grids
+}
+
+/** The command typed at a prompt right above a table that is its output, where it gives p-values. */
+function findCommand({ prose }: LaidOut, { offset }: PdfTable): ReturnType<typeof readCommand> {
+  const before = prose.text.slice(0, offset).replace(/\n+$/, '')
+  return readCommand(before.slice(before.lastIndexOf('\n\n') + 1))
+}
+
+/** A matrix that a command printed has outcomes as heads: each column of numbers holds p-values. */
+function headOutput(
+  headers: readonly string[],
+  rows: readonly GridRow[],
+  printedBy: ReturnType<typeof readCommand>,
+): string[] {
+  if (!printedBy) return [...headers]
+  const head = printedBy.scale === 'adjusted' ? 'p adj' : 'p'
+  return headers.map((text, c) =>
+    rows.every(({ cells }) => c > 0 && readP(cells[c] ?? '') !== null) ? `${text} | ${head}` : text,
+  )
 }
 
 function cutAtHeads(table: PdfTable): { headers: string[]; rows: GridRow[] }[] {

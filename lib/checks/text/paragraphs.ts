@@ -1,11 +1,15 @@
 import { isFigureCaption, textOf } from './captions'
+import { continuesCommand, isPrompt } from './console'
 import type { FlowItem } from './flow'
 import { isNumbered, kindOfHeading, readRunIn } from './headings'
 import { median, type Lane, type Row } from './rows'
 import type { FoundTable } from './tables'
 
-/** Lines that are read in one go. `aside`: captions and notes, which a sentence may run around. */
-export type Paragraph = { kind: 'body' | 'heading' | 'aside'; rows: Row[]; page: number }
+/**
+ * Lines that are read in one go. `aside`: captions and notes, which a sentence may run around; `command`: what was typed
+ * at the prompt of a statistics program, which stays beside what that printed.
+ */
+export type Paragraph = { kind: 'body' | 'heading' | 'aside' | 'command'; rows: Row[]; page: number }
 export type Part = Paragraph | { kind: 'table'; table: FoundTable; page: number }
 
 /** What is usual in a document's running text. */
@@ -42,6 +46,7 @@ function toParagraph(lines: Line[], usual: Usual): Paragraph {
   const rows = lines.map((line) => line.row)
   const first = lines[0]
   const page = first?.page ?? 1
+  if (isPrompt(first?.text ?? '')) return { kind: 'command', rows, page }
   if (isHeading(lines, usual)) return { kind: 'heading', rows, page }
   const small = median(rows.map((row) => row.size)) < 0.93 * usual.size
   const aside = small || isFigureCaption(first?.text ?? '')
@@ -50,6 +55,12 @@ function toParagraph(lines: Line[], usual: Usual): Paragraph {
 
 function startsParagraph(open: readonly Line[], last: Line, line: Line, usual: Usual): boolean {
   if (last.lane !== line.lane || last.page !== line.page) return true
+  if (isPrompt(line.text)) return true
+  if (isPrompt(open[0]?.text ?? ''))
+    return !continuesCommand(
+      open.map(({ text }) => text),
+      line.text,
+    )
   const drop = last.row.v - line.row.v
   const pitch = usualPitch(open, last, usual)
   if (drop > 1.32 * pitch || drop < -1) return true
