@@ -1,11 +1,24 @@
-/** Prints how much processor time each procedure takes for 10^3 … 10^6 p-values, beside R's p.adjust where Rscript is installed. */
+/**
+ * Prints how long each procedure takes for 10^3 … 10^6 p-values: wall time, median of 5, beside R's p.adjust on the same
+ * values where Rscript is installed and R has the procedure. Small vectors are adjusted many times in a row on both sides.
+ */
 import { spawnSync } from 'node:child_process'
+import { mkdtempSync, rmSync, writeFileSync } from 'node:fs'
+import { tmpdir } from 'node:os'
+import { join } from 'node:path'
 import { median } from 'simple-statistics'
-import { adjust, PROCEDURES, procedureTable, type Procedure } from '../../lib/checks'
+import {
+  adjust,
+  CATALOGUE,
+  procedureTable,
+  type AdjustOptions,
+  type CatalogueProcedure,
+} from '../../lib/checks'
+import { createRandom } from './random'
 
 const SIZES = [1e3, 1e4, 1e5, 1e6]
 const ROUNDS = 5
-const R_METHODS: Partial<Record<Procedure, string>> = {
+const R_METHODS: Partial<Record<CatalogueProcedure, string>> = {
   bonferroni: 'bonferroni',
   holm: 'holm',
   hochberg: 'hochberg',
@@ -13,39 +26,83 @@ const R_METHODS: Partial<Record<Procedure, string>> = {
   bh: 'BH',
   by: 'BY',
 }
+/** R's hommel takes n² steps. */
+const MOST_FOR_HOMMEL_IN_R = 1e4
 
-/** The same p-values in every run: a linear congruential generator, a tenth of them small. */
+/** All but the graphical procedure, which takes n³ steps and is meant for tens of hypotheses. */
+const TIMED = CATALOGUE.filter((procedure) => {
+  const { adjust: ofSet, adjustInOrder } = procedureTable[procedure]
+  return procedure !== 'graphical' && (ofSet !== null || adjustInOrder !== null)
+})
+
+/** A tenth of them small. */
 function drawPValues(count: number): number[] {
-  let state = 20240611
-  const next = () => (state = (state * 1664525 + 1013904223) % 4294967296) / 4294967296
+  const next = createRandom(20240611)
   return Array.from({ length: count }, () => (next() < 0.1 ? next() ** 6 : next()))
 }
 
-function timeOurs(procedure: Procedure, p: readonly number[]): number {
-  const times = Array.from({ length: ROUNDS }, () => {
-    const start = process.cpuUsage()
-    adjust(procedure, p)
-    return process.cpuUsage(start).user / 1000
-  })
-  return median(times)
+/** The fewest groups with at least as many pairs. */
+const groupsFor = (pairs: number) => Math.ceil((1 + Math.sqrt(1 + 8 * pairs)) / 2)
+
+const repeatsFor = (count: number) => Math.max(1, Math.round(2e5 / count))
+
+function timeOurs(procedure: CatalogueProcedure, p: readonly number[]): number {
+  const options: AdjustOptions = procedure === 'shaffer' ? { groups: groupsFor(p.length) } : {}
+  const repeats = repeatsFor(p.length)
+  const run = () => {
+    const start = performance.now()
+    for (let i = 0; i < repeats; i++) adjust(procedure, p, options)
+    return (performance.now() - start) / repeats
+  }
+  run()
+  return median(Array.from({ length: ROUNDS }, run))
 }
 
-/** Median milliseconds in R, null where Rscript is missing. Hommel in R takes n² steps: from 10^5 it is left out. */
-function timeInR(method: string | undefined, count: number): number | null {
-  if (method === undefined || (method === 'hommel' && count > 1e4)) return null
-  const script = `set.seed(1); p <- runif(${count}); cat(median(replicate(${ROUNDS}, system.time(p.adjust(p, "${method}"))[[1]])) * 1000)`
-  const { status, stdout } = spawnSync('Rscript', ['-e', script], { encoding: 'utf8' })
-  return status === 0 ? Number(stdout) : null
-}
-
-const show = (ms: number | null) => (ms === null ? '–' : ms.toFixed(1)).padStart(9)
-
-console.log(`median milliseconds of processor time of ${ROUNDS} runs: ours, R`)
-console.log('procedure'.padEnd(12), ...SIZES.map((size) => `${size}`.padStart(19)))
-const vectors = SIZES.map(drawPValues)
-for (const procedure of PROCEDURES.filter((name) => procedureTable[name].adjust !== null)) {
-  const cells = vectors.map(
-    (p) => show(timeOurs(procedure, p)) + ' ' + show(timeInR(R_METHODS[procedure], p.length)),
+/** Median milliseconds by R's name of the method; empty where Rscript is missing. */
+function timeInR(p: readonly number[], folder: string): Map<string, number> {
+  const file = join(folder, `p-${p.length}.bin`)
+  writeFileSync(file, new Uint8Array(Float64Array.from(p).buffer))
+  const methods = Object.values(R_METHODS).filter(
+    (method) => method !== 'hommel' || p.length <= MOST_FOR_HOMMEL_IN_R,
   )
-  console.log(procedure.padEnd(12), ...cells)
+  const script = `
+    p <- readBin("${file}", "double", ${p.length})
+    for (method in c(${methods.map((method) => `"${method}"`).join(', ')})) {
+      repeats <- if (method == "hommel") 1 else ${repeatsFor(p.length)}
+      run <- function() system.time(for (i in seq_len(repeats)) p.adjust(p, method))[["elapsed"]] / repeats
+      if (method != "hommel") run()
+      cat(method, 1000 * median(replicate(if (method == "hommel" && length(p) > 1000) 1 else ${ROUNDS}, run())), "\\n")
+    }`
+  const { status, stdout } = spawnSync('Rscript', ['--vanilla', '-e', script], { encoding: 'utf8' })
+  if (status !== 0) return new Map()
+  const rows = stdout.trim().split('\n')
+  return new Map(
+    rows.map((row): [string, number] => {
+      const [method = '', ms] = row.split(' ')
+      return [method, Number(ms)]
+    }),
+  )
+}
+
+const show = (ms: number | undefined) =>
+  (ms === undefined ? '–' : ms >= 10 ? ms.toFixed(0) : ms.toPrecision(2)).padStart(8)
+
+const folder = mkdtempSync(join(tmpdir(), 'assize-bench-'))
+try {
+  const vectors = SIZES.map((size) => {
+    const p = drawPValues(size)
+    return { p, inR: timeInR(p, folder) }
+  })
+  console.log(`milliseconds, median of ${ROUNDS}: ours, R`)
+  console.log('procedure'.padEnd(20), ...SIZES.map((size) => `${size}`.padStart(17)))
+  for (const procedure of TIMED) {
+    const method = R_METHODS[procedure]
+    const cells = vectors.map(
+      ({ p, inR }) =>
+        `${show(timeOurs(procedure, p))} ${show(method === undefined ? undefined : inR.get(method))}`,
+    )
+    console.log(procedure.padEnd(20), ...cells)
+  }
+} finally {
+  rmSync(folder, { recursive: true, force: true })
 }
