@@ -38,7 +38,7 @@ export type CalculatorInput = {
   control: string
 }
 
-export const POWER_CHOICES = ['two-sample', 'paired'] as const
+export const POWER_CHOICES = ['independent', 'pairs', 'many-to-one', 'paired'] as const
 export type PowerChoice = (typeof POWER_CHOICES)[number]
 
 export const emptyInput: CalculatorInput = {
@@ -59,7 +59,7 @@ export const emptyInput: CalculatorInput = {
   groupCount: '',
   printed: '',
   rho: '0.5',
-  design: 'two-sample',
+  design: 'independent',
   size: '20',
   effect: '0.8',
   groups: '',

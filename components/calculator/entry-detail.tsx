@@ -8,7 +8,7 @@ import { findDecidingDigit, type NextDigit } from '@/lib/checks/calculate/decidi
 import type { Entry } from '@/lib/checks/calculate/entry'
 import { OutcomeMark, OutcomeShape } from '../shell/outcome-mark'
 import { outcomeOf, standOf, wordsOf } from './judge-entry'
-import { capitalise } from './procedure-choice'
+import { capitalise } from './short-names'
 import { nameOf, showAdjusted, showInterval, showSurvives } from './show-value'
 
 type EntryDetailProps = {

@@ -5,7 +5,7 @@ export const kelpValues: CalculatorInput = {
   ...emptyInput,
   values: [
     'granite – slate\t.62',
-    'granite – concrete\t.008',
+    'granite – concrete\t.01',
     'granite – oyster shell\t<.001',
     'slate – concrete\t.019',
     'slate – oyster shell\t.002',

@@ -1,6 +1,6 @@
 'use client'
 
-import { useDeferredValue, useMemo } from 'react'
+import { useMemo } from 'react'
 import { Button } from '../ui/button'
 import { RadioGroup } from '../ui/choice'
 import { EmptyState } from '../ui/empty-state'
@@ -11,6 +11,7 @@ import { kelpGroups } from './examples'
 import { GroupsResults } from './groups-results'
 import { ReadReport } from './read-report'
 import { summarizeInput } from './summarize-input'
+import { useSettled } from './use-settled'
 
 type GroupsCalculatorProps = {
   input: CalculatorInput
@@ -19,13 +20,16 @@ type GroupsCalculatorProps = {
 
 /** Sizes, means and spreads of groups at the left, the comparisons that follow from them at the right. */
 export function GroupsCalculator({ input, onChange }: GroupsCalculatorProps) {
-  const late = useDeferredValue(input)
+  const late = useSettled(input, 300)
   const { read, summary, refused, faults } = useMemo(() => summarizeInput(late), [late])
   const names = [...new Set(read.groups.map((group) => group.group))]
   return (
     <div className="@container">
       <div className="grid gap-x-10 gap-y-8 @4xl:grid-cols-[19rem_minmax(0,1fr)] @6xl:grid-cols-[21rem_minmax(0,1fr)]">
-        <section aria-label="The groups and their settings" className="flex flex-col gap-4">
+        <section
+          aria-label="The groups and their settings"
+          className="flex flex-col gap-4 @4xl:self-start print:hidden"
+        >
           <Field
             label="Groups"
             hint="One a line: name, n, mean and SD or SE, with tabs, semicolons, commas or spaces; a header may name the columns."

@@ -12,7 +12,7 @@ import { RowTh, Table, Tbody, Td, Th, Thead, Tr } from '../ui/table'
 import { ValueText } from '../ui/value-text'
 import type { CalculatorInput } from './calculator-input'
 import { outcomeOf, standOf, wordsOf } from './judge-entry'
-import { capitalise } from './procedure-choice'
+import { shortNameOf } from './short-names'
 import { Toolbar } from './toolbar'
 import { count } from './work-out'
 
@@ -21,8 +21,10 @@ const LISTED = 300
 /** The analysis of variance, Welch's, and every comparison by every procedure that suits. */
 export function GroupsResults({ summary, input }: { summary: Summary; input: CalculatorInput }) {
   const { anova, welch, bounds, comparisons, alpha, control, groups } = summary
-  const procedures = comparisons[0]?.adjusted.map((one) => one.procedure).filter((one) => one !== 'lsd') ?? []
   const leading = control === null ? 'tukey' : 'dunnett'
+  const computed = comparisons[0]?.adjusted.map((one) => one.procedure) ?? []
+  const others = computed.filter((one) => one !== 'lsd' && one !== leading)
+  const procedures = [leading, ...others] as const
   const kept = comparisons.filter((one) => decide(one, leading, alpha) === true).length
   const open = comparisons.filter((one) => decide(one, leading, alpha) === null).length
   const percent = Number((100 * summary.confidence).toPrecision(4))
@@ -68,7 +70,7 @@ export function GroupsResults({ summary, input }: { summary: Summary; input: Cal
         </dd>
       </dl>
       <div className="overflow-x-auto" role="region" aria-label="Comparisons" tabIndex={0}>
-        <Table caption="Comparisons between the groups">
+        <Table stacks caption="Comparisons between the groups">
           <Thead>
             <tr role="row">
               <Th>Comparison</Th>
@@ -80,14 +82,14 @@ export function GroupsResults({ summary, input }: { summary: Summary; input: Cal
               <Th number>
                 Raw <i>p</i>
               </Th>
+              {procedures.map((procedure) => (
+                <Th key={procedure} number className={procedure === leading ? 'text-ink' : undefined}>
+                  {shortNameOf(procedure)}
+                </Th>
+              ))}
               <Th number>
                 Welch <i>p</i>
               </Th>
-              {procedures.map((procedure) => (
-                <Th key={procedure} number className={procedure === leading ? 'text-ink' : undefined}>
-                  {capitalise(procedureTable[procedure].label)}
-                </Th>
-              ))}
             </tr>
           </Thead>
           <Tbody>
@@ -98,18 +100,26 @@ export function GroupsResults({ summary, input }: { summary: Summary; input: Cal
                   <RowTh className="font-normal whitespace-nowrap">
                     {one.second} – {one.first}
                   </RowTh>
-                  <Td number>{formatComputed(one.difference, 3)}</Td>
-                  <Td number>
+                  <Td number label="Difference">
+                    {formatComputed(one.difference, 3)}
+                  </Td>
+                  <Td number label={`${percent} % limits`}>
                     {limits ? `${formatComputed(limits.low, 3)} to ${formatComputed(limits.high, 3)}` : '–'}
                   </Td>
-                  <Td number>{formatComputed(one.pooled.t, 3)}</Td>
-                  <Td number>{showP(one.pooled.p, one.bounds?.pooled.p ?? null)}</Td>
-                  <Td number>{one.welch ? showP(one.welch.p, one.bounds?.welch?.p ?? null) : '–'}</Td>
+                  <Td number label="t">
+                    {formatComputed(one.pooled.t, 3)}
+                  </Td>
+                  <Td number label="Raw p">
+                    {showP(one.pooled.p, one.bounds?.pooled.p ?? null)}
+                  </Td>
                   {procedures.map((procedure) => (
-                    <Td key={procedure} number>
+                    <Td key={procedure} number label={shortNameOf(procedure)}>
                       <Cell comparison={one} procedure={procedure} alpha={alpha} />
                     </Td>
                   ))}
+                  <Td number label="Welch p">
+                    {one.welch ? showP(one.welch.p, one.bounds?.welch?.p ?? null) : '–'}
+                  </Td>
                 </Tr>
               )
             })}

@@ -1,7 +1,7 @@
 import { procedureTable } from '@/lib/checks/procedures/table'
 import type { Adjusted, Calculation } from '@/lib/checks/calculate/calculate'
 import { isSignificant } from '@/lib/checks/families/decide'
-import { capitalise } from './procedure-choice'
+import { capitalise } from './short-names'
 import { count } from './work-out'
 
 type HeadlineProps = { calculation: Calculation; main: Adjusted; alpha: number }

@@ -5,7 +5,7 @@ import type { Entry } from '@/lib/checks/calculate/entry'
 import { RowTh, Table, Tbody, Td, Th, Thead, Tr } from '../ui/table'
 import { nameOf, showSurvives } from './show-value'
 
-const LISTED = 20
+const LISTED = 12
 
 /** The largest family at which each significance survives, for the tests that are or may be significant alone. */
 export function HowFar({ entries, calculation }: { entries: readonly Entry[]; calculation: Calculation }) {
@@ -49,7 +49,9 @@ export function HowFar({ entries, calculation }: { entries: readonly Entry[]; ca
         </Table>
       </div>
       <p className="mt-1.5 text-xs text-ink-soft">
-        Members that join the family are taken as larger than those listed.
+        The largest <i>m</i> at which each stays significant. Of two numbers it is certain up to the first and
+        lost above the second; between them the rounding leaves it open. Members that join the family are
+        taken as larger than those listed.
         {order.length > LISTED && ` The ${LISTED} that hold farthest; the CSV holds all.`}
       </p>
     </>

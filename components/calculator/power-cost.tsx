@@ -1,12 +1,21 @@
 'use client'
 
 import { useMemo } from 'react'
-import { sampleSizeOfTTest } from '@/lib/checks/sensitivity/power'
 import { Field, Input, Select } from '../ui/field'
 import { formatComputed } from '../ui/format-value'
+import { RowTh, Table, Tbody, Td, Th, Thead, Tr } from '../ui/table'
 import { POWER_CHOICES, type CalculatorInput } from './calculator-input'
 import { readBetween, readWhole } from './read-settings'
-import { getPower } from './shown-beside'
+import { capitalise, shortNameOf } from './short-names'
+import { getPower, type PowerRow } from './shown-power'
+import { useSettled } from './use-settled'
+
+const designs: Record<CalculatorInput['design'], string> = {
+  independent: 'each test on two groups of its own',
+  pairs: 'all pairs of groups',
+  'many-to-one': 'each group against one control',
+  paired: 'paired, or one sample',
+}
 
 type PowerCostProps = {
   m: number
@@ -15,43 +24,38 @@ type PowerCostProps = {
   onChange: (part: Partial<CalculatorInput>) => void
 }
 
-/** What a Bonferroni correction costs a single test, and the sample that would regain it. */
+/** What each procedure leaves of a test's power, and the sample that regains it. */
 export function PowerCost({ m, alpha, input, onChange }: PowerCostProps) {
   const n = readWhole(input.size, 2)
   const effect = readBetween(input.effect, 0.01, 20)
-  const { design, size } = input
-  const power = useMemo(
-    () => getPower(m, alpha, design, size, input.effect),
-    [m, alpha, design, size, input.effect],
+  const { design, size, groupCount } = input
+  const asked = useMemo(
+    () => ({ m, alpha, design, size, effect: input.effect, groupCount }),
+    [m, alpha, design, size, input.effect, groupCount],
   )
-  const needed = useMemo(() => {
-    if (!power) return NaN
-    return power.without < 1 ? sampleSizeOfTTest(design, power.without, power.effect, alpha / m) : power.n
-  }, [power, design, alpha, m])
+  const settled = useSettled(asked, 300)
+  const power = useMemo(() => getPower(settled), [settled])
   return (
-    <div className="flex flex-col gap-2">
-      <div className="grid grid-cols-3 gap-3">
-        <Field label="Design">
+    <div className="flex flex-col gap-3">
+      <div className="grid grid-cols-2 gap-3 @xl:grid-cols-[minmax(0,2fr)_minmax(0,1fr)_minmax(0,1fr)]">
+        <Field label="Design" className="max-@xl:col-span-2">
           <Select
-            value={input.design}
+            value={design}
             onChange={(event) => {
-              const design = POWER_CHOICES.find((one) => one === event.target.value)
-              if (design) onChange({ design })
+              const chosen = POWER_CHOICES.find((one) => one === event.target.value)
+              if (chosen) onChange({ design: chosen })
             }}
-            options={[
-              { value: 'two-sample', label: 'two groups' },
-              { value: 'paired', label: 'paired' },
-            ]}
+            options={POWER_CHOICES.map((value) => ({ value, label: designs[value] }))}
           />
         </Field>
-        <Field label={input.design === 'paired' ? 'Pairs' : 'n per group'} error={n.fault ?? undefined}>
+        <Field label={design === 'paired' ? 'Pairs' : 'n per group'} error={n.fault ?? undefined}>
           <Input
             inputMode="numeric"
-            value={input.size}
+            value={size}
             onChange={(event) => onChange({ size: event.target.value })}
           />
         </Field>
-        <Field label="Effect d" error={effect.fault ?? undefined}>
+        <Field label="Effect, in SD" error={effect.fault ?? undefined}>
           <Input
             inputMode="decimal"
             value={input.effect}
@@ -59,18 +63,41 @@ export function PowerCost({ m, alpha, input, onChange }: PowerCostProps) {
           />
         </Field>
       </div>
-      {power && (
-        <dl className="tabular grid grid-cols-[minmax(0,1fr)_auto] gap-x-4 gap-y-1">
-          <dt>Power of one test at α = {alpha}</dt>
-          <dd className="text-right">{formatComputed(power.without, 3)}</dd>
-          <dt>at α / {m.toLocaleString('en')}, Bonferroni</dt>
-          <dd className="text-right">{formatComputed(power.with, 3)}</dd>
-          <dt>{input.design === 'paired' ? 'Pairs' : 'n per group'} to regain it</dt>
-          <dd className="text-right">
-            {Number.isFinite(needed) ? needed.toLocaleString('en') : 'more than 10 million'}
-          </dd>
-        </dl>
-      )}
+      {power?.rows && <PowerTable rows={power.rows} />}
+      {power && power.rows === null && <p>{power.why}</p>}
     </div>
+  )
+}
+
+function PowerTable({ rows }: { rows: readonly PowerRow[] }) {
+  return (
+    <Table caption="Power of one comparison by procedure">
+      <Thead>
+        <tr role="row">
+          <Th>Procedure</Th>
+          <Th number>Level of one test</Th>
+          <Th number>Power</Th>
+          <Th number>n for 0.80</Th>
+        </tr>
+      </Thead>
+      <Tbody>
+        {rows.map(({ procedure, perTestLevel, power, bounds, nFor80 }) => (
+          <Tr key={procedure}>
+            <RowTh className="font-normal">
+              {procedure === 'none' ? capitalise('no correction') : shortNameOf(procedure)}
+            </RowTh>
+            <Td number>{perTestLevel === null ? 'by steps' : formatComputed(perTestLevel, 4)}</Td>
+            <Td number>
+              {power === null
+                ? `${formatComputed(bounds.low, 3)} – ${formatComputed(bounds.high, 3)}`
+                : formatComputed(power, 3)}
+            </Td>
+            <Td number>
+              {nFor80 === null ? '–' : Number.isFinite(nFor80) ? nFor80.toLocaleString('en') : '∞'}
+            </Td>
+          </Tr>
+        ))}
+      </Tbody>
+    </Table>
   )
 }

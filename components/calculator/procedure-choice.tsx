@@ -6,6 +6,7 @@ import type { CatalogueProcedure } from '@/lib/checks/vocabulary'
 import { Checkbox } from '../ui/choice'
 import { Field, Select } from '../ui/field'
 import type { CalculatorInput } from './calculator-input'
+import { capitalise, shortNameOf } from './short-names'
 
 const computable = listComputable()
 const controlWords = {
@@ -21,7 +22,7 @@ type ProcedureChoiceProps = {
 
 /** The procedure that decides, with what it controls and assumes, and those shown beside it. */
 export function ProcedureChoice({ input, onChange }: ProcedureChoiceProps) {
-  const { label, controls, assumption, source } = procedureTable[input.procedure]
+  const { controls, assumption, source } = procedureTable[input.procedure]
   const others = computable.filter((procedure) => procedure !== input.procedure)
   const chosen = others.filter((procedure) => input.beside.includes(procedure))
   const toggle = (procedure: CatalogueProcedure, shown: boolean) =>
@@ -52,10 +53,8 @@ export function ProcedureChoice({ input, onChange }: ProcedureChoiceProps) {
       </Field>
       <details className="group">
         <summary className="text-tide">
-          Beside {capitalise(label)}:{' '}
-          {chosen.length === 0
-            ? 'no other'
-            : chosen.map((procedure) => procedureTable[procedure].label).join(', ')}
+          Beside {shortNameOf(input.procedure)}:{' '}
+          {chosen.length === 0 ? 'no other' : chosen.map(shortNameOf).join(', ')}
         </summary>
         <fieldset className="mt-2 flex flex-col gap-3">
           <legend className="sr-only">Procedures shown beside it</legend>
@@ -83,5 +82,3 @@ export function ProcedureChoice({ input, onChange }: ProcedureChoiceProps) {
     </div>
   )
 }
-
-export const capitalise = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1)

@@ -20,10 +20,9 @@ export function showInterval({ low, high }: Interval, decimals: number): string 
   return low === high ? show(low) : `${show(low)} to ${show(high)}`
 }
 
-/** '5', 'any' for 0 ≤ alpha / 0, '5, 6 open' where the rounding leaves one open. */
+/** '5'; '5 – 6' where the rounding leaves the sixth open; '–' for none, '∞' for any. */
 export function showSurvives({ certain, possible }: Survives): string {
-  const show = (m: number) => (Number.isFinite(m) ? m.toLocaleString('en') : 'any')
-  if (certain === possible) return certain === 0 ? '–' : show(certain)
-  const open = Number.isFinite(possible) ? `to ${show(possible)} open` : 'above open'
-  return certain === 0 ? open : `${show(certain)}, ${open}`
+  const show = (m: number) => (m === 0 ? '–' : Number.isFinite(m) ? m.toLocaleString('en') : '∞')
+  if (certain === possible) return show(certain)
+  return certain === 0 ? `0 – ${show(possible)}` : `${show(certain)} – ${show(possible)}`
 }

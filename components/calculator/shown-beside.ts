@@ -2,9 +2,7 @@ import { fitPrinted } from '@/lib/checks/calculate/fit-printed'
 import type { Reading } from '@/lib/checks/calculate/calculate'
 import type { Entry } from '@/lib/checks/calculate/entry'
 import { familyWiseError } from '@/lib/checks/sensitivity/family-wise-error'
-import { powerCost } from '@/lib/checks/sensitivity/power'
 import type { Fit } from '@/lib/checks/types'
-import type { CalculatorInput } from './calculator-input'
 import { readBetween, readWhole } from './read-settings'
 
 /** Beyond these the integrals and the search take longer than a reader waits. */
@@ -28,31 +26,9 @@ export function getPairs(m: number, alpha: number, typed: string): { groups: num
 }
 
 /** k where m is the number of pairs of k groups, else null. */
-function findGroups(m: number): number | null {
+export function findGroups(m: number): number | null {
   const k = Math.round((1 + Math.sqrt(1 + 8 * m)) / 2)
   return k >= 3 && (k * (k - 1)) / 2 === m ? k : null
-}
-
-export type ShownPower = {
-  design: CalculatorInput['design']
-  n: number
-  effect: number
-  without: number
-  with: number
-}
-
-/** The power of one t test with and without Bonferroni; null while the settings make no sense. */
-export function getPower(
-  m: number,
-  alpha: number,
-  design: CalculatorInput['design'],
-  size: string,
-  d: string,
-): ShownPower | null {
-  const n = readWhole(size, 2).value
-  const effect = readBetween(d, 0.01, 20).value
-  if (n === null || effect === null || n > 1e6) return null
-  return { design, n, effect, ...powerCost(design, n, effect, alpha, m) }
 }
 
 /** What reproduces the printed adjusted values, with m up to `upTo`; null where they are too many to compare. */

@@ -1,8 +1,11 @@
 import { readGroups, type ReadGroups } from '@/lib/checks/calculate/read-groups'
 import type { SummaryGroup } from '@/lib/checks/summary/groups'
+import { SUMMARY_PROCEDURES } from '@/lib/checks/summary/simultaneous'
 import { summarize, type Summary } from '@/lib/checks/summary/summarize'
 import type { CalculatorInput } from './calculator-input'
 import { readLevel } from './read-settings'
+
+export const MOST_FOR_OWN_RANGES = 8
 
 export type SummarizedInput = {
   read: ReadGroups
@@ -31,8 +34,13 @@ export function summarizeInput(input: CalculatorInput): SummarizedInput {
     return kind === 'sd' ? { ...base, sd: spread } : { ...base, se: spread }
   })
   const control = groups.some(({ group }) => group === input.control) ? { control: input.control } : {}
+  // Games–Howell takes a range of its own for every pair: with many groups that is no longer done at once.
+  const procedures = SUMMARY_PROCEDURES.filter(
+    (one) => one !== 'games-howell' || groups.length <= MOST_FOR_OWN_RANGES,
+  )
   try {
-    return { read, summary: summarize(groups, { alpha: level.value, ...control }), refused: null, faults: {} }
+    const summary = summarize(groups, { alpha: level.value, procedures, ...control })
+    return { read, summary, refused: null, faults: {} }
   } catch (error) {
     // What the user typed may make no comparison: that is an answer, not a fault.
     if (!(error instanceof RangeError)) throw error

@@ -2,6 +2,7 @@
 
 import { useMemo, useState, type ReactNode } from 'react'
 import { writeCalculationCsv } from '@/lib/checks/calculate/write-calculation-csv'
+import { classes } from '../ui/classes'
 import { Notice } from '../ui/notice'
 import type { CalculatorInput } from './calculator-input'
 import { EntryDetail } from './entry-detail'
@@ -69,9 +70,12 @@ export function ValuesResults({ input, worked, onChange, id }: ValuesResultsProp
         chosen={chosen}
         onChoose={setPicked}
       />
-      <div className="grid gap-x-12 gap-y-8 @3xl:grid-cols-2">
-        <Part title="How far it holds">
+      <div className="grid gap-x-10 gap-y-8 @2xl:grid-cols-2">
+        <Part title="How far it holds" wide>
           <HowFar entries={entries} calculation={calculation} />
+        </Part>
+        <Part title="What was really done" note="Which procedure gives the adjusted values that are printed.">
+          <WhatWasDone entries={entries} input={input} onChange={onChange} faults={faults} />
         </Part>
         <Part
           title="Without correction"
@@ -79,10 +83,7 @@ export function ValuesResults({ input, worked, onChange, id }: ValuesResultsProp
         >
           <ErrorRate m={calculation.m} alpha={alpha} input={input} onChange={onChange} />
         </Part>
-        <Part title="What was really done" note="Which procedure gives the adjusted values that are printed.">
-          <WhatWasDone entries={entries} input={input} onChange={onChange} faults={faults} />
-        </Part>
-        <Part title="What the correction costs">
+        <Part title="What a correction costs" note="The power of one comparison that has the effect." wide>
           <PowerCost m={calculation.m} alpha={alpha} input={input} onChange={onChange} />
         </Part>
       </div>
@@ -90,9 +91,11 @@ export function ValuesResults({ input, worked, onChange, id }: ValuesResultsProp
   )
 }
 
-export function Part({ title, note, children }: { title: string; note?: string; children: ReactNode }) {
+type PartProps = { title: string; note?: string; wide?: boolean; children: ReactNode }
+
+function Part({ title, note, wide, children }: PartProps) {
   return (
-    <section className="min-w-0 border-t border-rule pt-3">
+    <section className={classes('min-w-0 border-t border-rule pt-3', wide && '@2xl:col-span-2')}>
       <h2 className="text-lg font-semibold">{title}</h2>
       {note ? <p className="mb-2 text-ink-soft">{note}</p> : <div className="mb-2" />}
       {children}

@@ -3,13 +3,12 @@
 import { useMemo, useState } from 'react'
 import type { Adjusted, Calculation } from '@/lib/checks/calculate/calculate'
 import type { Entry } from '@/lib/checks/calculate/entry'
-import { procedureTable } from '@/lib/checks/procedures/table'
 import { OutcomeShape } from '../shell/outcome-mark'
 import { Button } from '../ui/button'
 import { classes } from '../ui/classes'
 import { RowTh, Table, Tbody, Td, Th, Thead, Tr, type SortDirection } from '../ui/table'
 import { outcomeOf, standOf, wordsOf, type Standing } from './judge-entry'
-import { capitalise } from './procedure-choice'
+import { shortNameOf } from './short-names'
 import { nameOf, showAdjusted } from './show-value'
 
 const FIRST = 50
@@ -42,7 +41,7 @@ export function ValuesTable({ entries, calculation, results, alpha, chosen, onCh
   return (
     <div>
       <div className="overflow-x-auto" role="region" aria-label="Adjusted values" tabIndex={0}>
-        <Table caption="The tests with their adjusted values">
+        <Table stacks caption="The tests with their adjusted values">
           <Thead>
             <tr role="row">
               <Th number sort={directionOf('order')} onSort={() => sortBy('order')}>
@@ -58,7 +57,7 @@ export function ValuesTable({ entries, calculation, results, alpha, chosen, onCh
               </Th>
               {computed.map(({ procedure }, i) => (
                 <Th key={procedure} number className={i === 0 ? 'text-ink' : undefined}>
-                  {capitalise(procedureTable[procedure].label)}
+                  {shortNameOf(procedure)}
                 </Th>
               ))}
             </tr>
@@ -70,7 +69,7 @@ export function ValuesTable({ entries, calculation, results, alpha, chosen, onCh
               if (!entry || !raw) return null
               return (
                 <Tr key={index} opens selected={chosen === index}>
-                  <Td number className="text-ink-soft">
+                  <Td number label="No." className="text-ink-soft">
                     {index + 1}
                   </Td>
                   <RowTh className="max-w-64 truncate font-normal">
@@ -83,12 +82,14 @@ export function ValuesTable({ entries, calculation, results, alpha, chosen, onCh
                       {nameOf(entry, index)}
                     </button>
                   </RowTh>
-                  <Td number>{entry.printed}</Td>
+                  <Td number label="Raw p">
+                    {entry.printed}
+                  </Td>
                   {computed.map(({ procedure, adjusted, significant }, i) => {
                     const one = adjusted[index]
                     const standing = standOf(raw, significant[index] ?? null, alpha)
                     return (
-                      <Td key={procedure} number>
+                      <Td key={procedure} number label={shortNameOf(procedure)}>
                         <AdjustedCell
                           text={one ? showAdjusted(one, entry) : '–'}
                           standing={standing}

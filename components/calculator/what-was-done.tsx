@@ -5,7 +5,7 @@ import type { Entry } from '@/lib/checks/calculate/entry'
 import { procedureTable } from '@/lib/checks/procedures/table'
 import { Field, Textarea } from '../ui/field'
 import type { CalculatorInput } from './calculator-input'
-import { capitalise } from './procedure-choice'
+import { capitalise } from './short-names'
 import { getFits, MOST_COMPARED } from './shown-beside'
 import { count, type WorkedOut } from './work-out'
 

@@ -1,6 +1,7 @@
 import { writeCalculationScript } from '@/lib/checks/r-script/calculation-script'
 import type { CalculatorInput } from './calculator-input'
-import { getCorrelated, getFits, getPairs, getPower } from './shown-beside'
+import { getCorrelated, getFits, getPairs } from './shown-beside'
+import { getPower } from './shown-power'
 import type { WorkedOut } from './work-out'
 
 /** The R script of all numbers that the page shows for a list. */
@@ -8,6 +9,8 @@ export function writeValuesScript(input: CalculatorInput, { entries, alpha, work
   if (!work) return ''
   const { calculation, family } = work
   const { m } = calculation
+  const { design, size, effect, groupCount } = input
+  const power = getPower({ m, alpha, design, size, effect, groupCount })
   const fits = getFits(entries, input.reading)
   return writeCalculationScript(
     entries,
@@ -16,7 +19,7 @@ export function writeValuesScript(input: CalculatorInput, { entries, alpha, work
     {
       correlated: getCorrelated(m, alpha, input.rho),
       pairs: getPairs(m, alpha, input.groupCount),
-      power: getPower(m, alpha, input.design, input.size, input.effect),
+      power: power?.rows ? { ...power, rows: power.rows } : null,
       fits: fits && fits.compared > 0 ? { found: fits.found, upTo: fits.upTo } : null,
     },
   )

@@ -4,7 +4,7 @@ import { fitPrinted } from '@/lib/checks/calculate/fit-printed'
 import { readValues } from '@/lib/checks/calculate/read-values'
 import { writeCalculationScript, type ShownBeside } from '@/lib/checks/r-script/calculation-script'
 import { familyWiseError } from '@/lib/checks/sensitivity/family-wise-error'
-import { powerCost } from '@/lib/checks/sensitivity/power'
+import { compareProcedurePower } from '@/lib/checks/sensitivity/compare-power'
 import type { CatalogueProcedure } from '@/lib/checks/vocabulary'
 import { runR, testWithR } from '../support/rscript'
 
@@ -82,14 +82,20 @@ testWithR('R agrees with the error rates, the power and what was really done', (
   const table =
     'pair\tp\tp adj\nA\t.001\t.006\nB\t.008\t.040\nC\t.012\t.048\nD\t.021\t.063\nE\t.039\t.078\nF\t.200\t.200'
   const { entries } = readValues(table)
-  const cost = powerCost('two-sample', 20, 0.8, 0.05, 6)
-  const script = write(table, 'printed', {}, ['holm'], {
-    correlated: { rho: 0.5, error: familyWiseError(0.05, 6, { rho: 0.5 }) },
-    pairs: { groups: 4, error: familyWiseError(0.05, 6, { allPairsOf: 4 }) },
-    power: { design: 'two-sample', n: 20, effect: 0.8, ...cost },
-    fits: { found: fitPrinted(entries, 'printed').fits, upTo: 60 },
-  })
-  expect(runR(script).trim()).toBe('agrees')
+  for (const design of ['independent', 'pairs', 'many-to-one'] as const) {
+    const shape = { n: 20, effect: 0.8, alpha: 0.05 }
+    const rows =
+      design === 'independent'
+        ? compareProcedurePower({ design, m: 6, ...shape })
+        : compareProcedurePower({ design, groups: 4, ...shape })
+    const script = write(table, 'printed', {}, ['holm'], {
+      correlated: { rho: 0.5, error: familyWiseError(0.05, 6, { rho: 0.5 }) },
+      pairs: { groups: 4, error: familyWiseError(0.05, 6, { allPairsOf: 4 }) },
+      power: { design, groups: design === 'independent' ? null : 4, rows, ...shape },
+      fits: { found: fitPrinted(entries, 'printed').fits, upTo: 60 },
+    })
+    expect(runR(script).trim()).toBe('agrees')
+  }
 })
 
 testWithR('R tells a number that was changed', () => {

@@ -20,7 +20,7 @@ export type Spread = (typeof SPREADS)[number]
 /** `spread`: what the header says the fourth column is, null where it does not say. */
 export type ReadGroups = { groups: GroupEntry[]; unread: Unread[]; spread: Spread | null }
 
-export const MOST_GROUPS = 60
+export const MOST_GROUPS = 20
 
 /**
  * Reads rows of group, n, mean and SD or SE out of pasted text, with or without a header, separated by tabs,

@@ -5,7 +5,7 @@ import { roundingInterval, type Interval } from '../numbers/printed-interval'
 import type { EntryStatistic, Sides } from './entry'
 
 /** Digits after the point with which the p-value of a statistic is shown. */
-export const STATISTIC_DECIMALS = 4
+export const STATISTIC_DECIMALS = 3
 
 const DF_COUNT = { t: 1, F: 2, chi2: 1, z: 0, r: 1 } as const
 
@@ -15,7 +15,10 @@ export type ReadStatisticP = Interval & { value: number; statistic: EntryStatist
  * The p-value of a printed statistic, and the interval over its rounding; `sides` for t, z and r, the upper tail for
  * F and χ². Null where the statistic has no p-value without more (U, W, missing degrees of freedom, a relation).
  */
-export function readStatisticP(statistic: PrintedStatistic, sides: Sides): ReadStatisticP | null {
+export function readStatisticP(
+  statistic: Pick<PrintedStatistic, 'test' | 'df' | 'value' | 'decimals' | 'relation'>,
+  sides: Sides,
+): ReadStatisticP | null {
   const { test, df, value, decimals, relation } = statistic
   if (test === 'other' || relation !== '=' || df.length !== DF_COUNT[test]) return null
   if (df.some((one) => !(one > 0))) return null

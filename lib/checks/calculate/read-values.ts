@@ -170,12 +170,7 @@ function readRecord(
     )
     const df =
       role.df.length > 0 ? role.df : role.test === 'z' ? [] : found.slice(0, role.test === 'F' ? 2 : 1)
-    const read =
-      number &&
-      readStatisticP(
-        { ...number, test: role.test, df, relation: '=', start: 0, end: 0, certain: true },
-        how.sides,
-      )
+    const read = number && readStatisticP({ ...number, test: role.test, df, relation: '=' }, how.sides)
     if (!read) return 'a statistic without its degrees of freedom'
     return { ...base, ...read, relation: '=', decimals: STATISTIC_DECIMALS }
   }

@@ -4,19 +4,26 @@ import type { Entry } from '../calculate/entry'
 import type { AdjustOptions } from '../procedures/adjust'
 import { procedureTable } from '../procedures/table'
 import { familyWiseError } from '../sensitivity/family-wise-error'
+import type { ProcedurePower } from '../sensitivity/compare-power'
 import type { Fit } from '../types'
 import { rComment, rLogical, rNumber, rNumbers, rString, rStrings, rVector } from './literals'
 import { writeScript, type RFunctions } from './script'
 
 /**
  * What is shown beside the adjusted values, each null where it is not: the error rate under a common correlation and
- * of all pairs of groups, the power of one t test with and without Bonferroni, and what reproduces printed adjusted
+ * of all pairs of groups, the power of one comparison by procedure (`groups` where the design has them), and what reproduces printed adjusted
  * values with m up to `upTo`.
  */
 export type ShownBeside = {
   correlated: { rho: number; error: number } | null
   pairs: { groups: number; error: number } | null
-  power: { design: 'two-sample' | 'paired'; n: number; effect: number; without: number; with: number } | null
+  power: {
+    design: 'independent' | 'pairs' | 'many-to-one' | 'paired'
+    n: number
+    effect: number
+    groups: number | null
+    rows: readonly ProcedurePower[]
+  } | null
   fits: { found: readonly Fit[]; upTo: number } | null
 }
 
@@ -36,7 +43,8 @@ export function writeCalculationScript(
   const inOrder = results.some(({ procedure }) => procedureTable[procedure].adjustInOrder !== null)
   const functions: RFunctions[] = ['tails', 'procedures']
   if (inOrder) functions.push('ordered')
-  if (beside.pairs) functions.push('studentized-range')
+  if (beside.pairs || beside.power?.design === 'pairs') functions.push('studentized-range')
+  if (beside.power?.design === 'many-to-one') functions.push('dunnett')
   if (beside.fits) functions.push('fitting')
   return writeScript({
     title: 'Assize. Recomputation of a list of tests.',
@@ -196,16 +204,46 @@ function writeErrors(m: number, alpha: number, { correlated, pairs, power }: Sho
       `check("all pairs of ${pairs.groups} groups", ${rNumber(pairs.error)}, tukey_p(qnorm(alpha / 2, lower.tail = FALSE), ${pairs.groups}, Inf), 1e-6)`,
     )
   }
-  if (power) {
-    const type = power.design === 'paired' ? 'paired' : 'two.sample'
-    const at = (level: string) =>
-      `power.t.test(n = ${power.n}, delta = ${rNumber(power.effect)}, sig.level = ${level}, type = "${type}", strict = TRUE)$power`
-    lines.push(
-      `check("power of one test", ${rNumber(power.without)}, ${at('alpha')}, 1e-6)`,
-      `check("power of one test, Bonferroni", ${rNumber(power.with)}, ${at('alpha / m')}, 1e-6)`,
-    )
-  }
+  if (power) lines.push(...writePower(power))
   return [lines.join('\n')]
+}
+
+/** Noncentral t at the critical value of each procedure that has one; what goes by steps is not computed again. */
+function writePower({ design, n, effect, groups, rows }: NonNullable<ShownBeside['power']>): string[] {
+  const paired = design === 'paired'
+  const df = paired ? `${n} - 1` : `${groups ?? 2} * (${n} - 1)`
+  const critical: Partial<Record<ProcedurePower['procedure'], string>> = {
+    none: 'qt(alpha / 2, df, lower.tail = FALSE)',
+    bonferroni: 'qt(alpha / tests / 2, df, lower.tail = FALSE)',
+    sidak: 'qt(-expm1(log1p(-alpha) / tests) / 2, df, lower.tail = FALSE)',
+    scheffe: `sqrt((${groups} - 1) * qf(alpha, ${groups} - 1, df, lower.tail = FALSE))`,
+  }
+  const tests =
+    groups === null ? 'm' : design === 'pairs' ? `${groups} * (${groups} - 1) / 2` : `${groups} - 1`
+  return [
+    '# the power of one comparison; procedures that go by steps are not computed again here',
+    `df <- ${df}`,
+    `tests <- ${tests}`,
+    `shift <- ${rNumber(effect)} * sqrt(${paired ? n : `${n} / 2`})`,
+    'power_at <- function(critical) {',
+    '  pt(critical, df, shift, lower.tail = FALSE) + pt(-critical, df, shift)',
+    '}',
+    ...rows.flatMap(({ procedure, power, criticalValue }) => {
+      const computed = critical[procedure]
+      if (power !== null && computed !== undefined) {
+        return [`check("power, ${procedure}", ${rNumber(power)}, power_at(${computed}), 1e-6)`]
+      }
+      if (power === null || criticalValue === null) return []
+      const error =
+        procedure === 'tukey'
+          ? `tukey_p(${rNumber(criticalValue)}, ${groups}, df)`
+          : `dunnett_p(${rNumber(criticalValue)}, rep(sqrt(0.5), ${groups} - 1), df)`
+      return [
+        `check("critical value, ${procedure}", alpha, ${error}, 1e-6)`,
+        `check("power, ${procedure}", ${rNumber(power)}, power_at(${rNumber(criticalValue)}), 1e-6)`,
+      ]
+    }),
+  ]
 }
 
 function writeFits(entries: readonly Entry[], { found, upTo }: NonNullable<ShownBeside['fits']>): string {
