@@ -84,14 +84,16 @@ function headOutput(
   )
 }
 
-function cutAtHeads(table: PdfTable): { headers: string[]; rows: GridRow[] }[] {
+type Cut = { headers: string[]; rows: GridRow[] }
+
+function cutAtHeads(table: PdfTable): Cut[] {
   const joined = Array.from({ length: table.columns }, (_, c) =>
     table.header
       .map((row) => row[c]?.text.trim() ?? '')
       .filter((text) => text !== '')
       .join(' | '),
   )
-  const parts: { headers: string[]; rows: GridRow[] }[] = [{ headers: joined, rows: [] }]
+  const parts: Cut[] = [{ headers: joined, rows: [] }]
   table.rows.forEach((cells, r) => {
     const texts = cells.map(({ text }) => text)
     if (isHeadLine(texts)) parts.push({ headers: texts, rows: [] })
@@ -103,7 +105,41 @@ function cutAtHeads(table: PdfTable): { headers: string[]; rows: GridRow[] }[] {
         index: r,
       })
   })
-  return parts.filter(({ rows }) => rows.length > 0)
+  return parts.filter(({ rows }) => rows.length > 0).map(partColumns)
+}
+
+/** '4391', '-2', '0.12', '1.2e-04' */
+const LONE_NUMBER = /^[-−+]?\d*\.?\d+(?:[eE][-+]?\d+)?$/
+
+/**
+ * Columns that stand a blank apart, 'Res.Df Df Chisq' over '4391 -2 4.1213', are parted where the fullest cell has as
+ * many numbers as the head has words; a cell with fewer keeps them from the left.
+ */
+function partColumns({ headers, rows }: Cut): Cut {
+  const widths = headers.map((head, c) => {
+    const words = head.split(/\s+/)
+    const cells = rows.map(({ cells: texts }) => (texts[c] ?? '').trim()).filter((text) => text !== '')
+    const numbers = cells.map((text) => text.split(/\s+/))
+    const all = numbers.every((tokens) => tokens.every((token) => LONE_NUMBER.test(token)))
+    const most = Math.max(0, ...numbers.map((tokens) => tokens.length))
+    return head !== '' && !head.includes('|') && all && most >= 2 && words.length === most ? most : 1
+  })
+  if (widths.every((width) => width === 1)) return { headers, rows }
+  const spread = (texts: readonly string[]) =>
+    texts.flatMap((text, c) => {
+      const width = widths[c] ?? 1
+      if (width === 1) return [text]
+      const tokens = text.trim() === '' ? [] : text.trim().split(/\s+/)
+      return Array.from({ length: width }, (_, i) => tokens[i] ?? '')
+    })
+  return {
+    headers: spread(headers),
+    rows: rows.map((row) => ({
+      ...row,
+      cells: spread(row.cells),
+      boxes: row.boxes.flatMap((boxes, c) => new Array<typeof boxes>(widths[c] ?? 1).fill(boxes)),
+    })),
+  }
 }
 
 /** The section in which the table stands; a table that stands nowhere belongs to the results. */

@@ -44,7 +44,8 @@ function dfOfRow({ grid, roles, df }: Reader, row: GridRow, column: number, test
   const first = near.filter(({ index }) => index === 0).pop() ?? near[near.length - 1]
   const own = first === undefined ? null : at(first.c)
   if (own !== null && first) {
-    if (test !== 'F') return [own]
+    // between two models the number of parameters is told as a loss: -2
+    if (test !== 'F') return [test === 'chi2' ? Math.abs(own) : own]
     const second = near.find(({ index }) => index === 1)
     const error = second ? at(second.c) : residualDf(grid, row, first.c, at)
     return error === null ? (df.length === 2 ? df : []) : [own, error]

@@ -229,3 +229,25 @@ test('tables without results give nothing', () => {
   expect(reading.reports).toEqual([])
   expect(reading.statistics).toEqual([])
 })
+
+test('heads and numbers that stand a blank apart are columns of their own, and a loss of df counts by its size', () => {
+  const reading = readTable(`
+    | Res.Df Df Chisq | Pr(>Chisq)
+    1 | 4389 |
+    2 | 4391 -2 4.12 | 0.1274`)
+  expect(reading.statistics.map(({ test: kind, df, value }) => [kind, df, value])).toEqual([
+    ['chi2', [2], 4.12],
+  ])
+  // P(χ² > 4.12) on 2 df is exp(−2.06) = 0.1274, by hand
+  expect(reading.statistics[0]?.pLow).toBeLessThan(0.1275)
+  expect(reading.statistics[0]?.pHigh).toBeGreaterThan(0.1273)
+  expect(reading.reports.map(({ value }) => value)).toEqual([0.1274])
+})
+
+test('a mean with its spread in brackets stays one cell', () => {
+  const reading = readTable(`
+    Site | Mean (SD) | p
+    Reef vs Bank | 4.1 (0.3) | 0.031
+    Reef vs Creek | 4.4 (0.2) | 0.012`)
+  expect(reading.reports.map(({ value }) => value)).toEqual([0.031, 0.012])
+})
