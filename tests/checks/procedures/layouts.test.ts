@@ -75,6 +75,49 @@ test('Steel–Dwass agrees with R, ties included', () => {
   }
 })
 
+test('Duncan’s p is .05 at the critical values of his test', () => {
+  // Harter (1960), Biometrics 16, 671–685: 5% points for spans of 2 … 6 means, from memory; R’s ptukey agrees.
+  const table: [df: number, values: number[]][] = [
+    [10, [3.151, 3.293, 3.376, 3.43, 3.465]],
+    [20, [2.95, 3.097, 3.19, 3.255, 3.303]],
+    [Infinity, [2.772, 2.918, 3.017, 3.089, 3.146]],
+  ]
+  for (const [df, values] of table) {
+    values.forEach((q, i) => {
+      // one mean q away from the others, whose standard error is 1
+      const means = [...new Array<number>(i + 1).fill(0), q]
+      const sizes = means.map(() => 1)
+      expect(compareByDuncan({ means, sizes, error: 1, df })[i]?.p, `df ${df}`).toBeCloseTo(0.05, 4)
+    })
+  }
+})
+
+test('Student–Newman–Keuls’s p is .05 at the critical values of the studentized range', () => {
+  // 4.65 for 5 means, 10 df: NIST/SEMATECH e-Handbook 7.4.7.1; 3.96 for 4 means, 20 df: a printed output in the
+  // supplement S13 of a textbook by Montgomery and Runger; both to two decimals.
+  for (const [groups, df, q] of [
+    [5, 10, 4.65],
+    [4, 20, 3.96],
+  ] as const) {
+    const means = [...new Array<number>(groups - 1).fill(0), q]
+    const sizes = means.map(() => 1)
+    expect(compareBySnk({ means, sizes, error: 1, df })[groups - 2]?.p).toBeCloseTo(0.05, 3)
+  }
+})
+
+test('a pair of a range test is never called where a wider stretch that holds it is not', () => {
+  for (const layout of layouts) {
+    const ordered = { ...layout, means: [...layout.means].sort((a, b) => a - b), harmonic: 'all' as const }
+    for (const compare of [compareBySnk, compareByDuncan]) {
+      const pairs = compare(ordered)
+      for (const { pair, p } of pairs) {
+        const wider = pairs.filter((other) => other.pair[0] <= pair[0] && other.pair[1] >= pair[1])
+        expect(Math.max(...wider.map((other) => other.p))).toBe(p)
+      }
+    }
+  }
+})
+
 test('with two groups every test of pairs is the test of these two', () => {
   const [a, b] = [
     [1, 2, 4, 7],

@@ -47,12 +47,13 @@ type Large = {
 }
 
 const { vectors } = readReference<{ vectors: Vector[] }>('padjust.json')
-const big = readReference<
-  { p: number[]; index: number[]; adjusted: Record<string, Large> } & Record<
-    'storey_lambda05' | 'bky_alpha05',
-    Large
-  >
->('padjust_20000.json')
+const big = readReference<{
+  p: number[]
+  index: number[]
+  adjusted: Record<string, Large>
+  storey_lambda05: Large & { pi0: number }
+  bky_alpha05: Large & { r1: number; m0: number }
+}>('padjust_20000.json')
 
 for (const [name, procedure] of Object.entries(NAMES)) {
   test(`${procedure} agrees with R on every reference vector`, () => {
@@ -117,6 +118,15 @@ test('Storey’s q-values agree with R on every vector', () => {
     compared++
   }
   expect(compared).toBeGreaterThanOrEqual(200)
+})
+
+test('of 20,000 p-values as many are rejected in the first stage, and as many taken for true, as in R', () => {
+  const sorted = Float64Array.from(big.p).sort()
+  const rejected = countRejected(sorted, sorted.length, 0.05 / 1.05)
+  expect(rejected).toBe(big.bky_alpha05.r1)
+  expect(sorted.length - rejected).toBe(big.bky_alpha05.m0)
+  const scaled = adjust('bh', big.p).map((q) => q * big.storey_lambda05.pi0)
+  expect(differ(adjust('storey', big.p), scaled)).toBeLessThan(TOLERANCE)
 })
 
 test('20,000 p-values agree with R at 609 places and in their sums', () => {

@@ -71,6 +71,31 @@ test('joint fits are those that a search of the box finds, and are never left ou
   expect(excluded).toBeGreaterThan(10)
 })
 
+test('value by value, fits are those of a search over every procedure and every size', () => {
+  const PROCEDURES = ['bonferroni', 'sidak', 'holm', 'holm-sidak', 'hochberg', 'hommel', 'bh', 'by'] as const
+  fc.assert(
+    fc.property(family, fc.nat(3), ({ p, procedure, rawDecimals }, more) => {
+      const raw = p.map((value) => rounded(value, rawDecimals))
+      const printed = adjust(procedure, p, { m: p.length + more }).map((value) => rounded(value, 3))
+      const low = raw.map((box) => box.low)
+      const high = raw.map((box) => box.high)
+      const wanted = PROCEDURES.flatMap((name) =>
+        Array.from({ length: 41 - p.length }, (_, i) => p.length + i).flatMap((m) => {
+          const bounds = adjustBounds(name, low, high, { m })
+          const all = printed.every(
+            (print, i) =>
+              print.low <= (bounds.high[i] ?? NaN) + 1e-12 && (bounds.low[i] ?? NaN) <= print.high + 1e-12,
+          )
+          return all ? [`${name} ${m}`] : []
+        }),
+      )
+      const found = fits(printed, raw, { mMax: 40 }).filter((fit) => fit.procedure !== 'raw')
+      expect(found.map((fit) => `${fit.procedure} ${fit.m}`)).toEqual(wanted)
+    }),
+    { numRuns: 150 },
+  )
+})
+
 test('every witness lies in its box and gives every printed value', () => {
   const larger = fc.record({
     p: fc.array(smallP, { minLength: 1, maxLength: 12 }),
