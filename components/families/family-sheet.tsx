@@ -8,6 +8,7 @@ import { Staircase } from '../charts/staircase'
 import { StaircaseTable } from '../charts/staircase-table'
 import { isSame } from '../bench/audit-index'
 import { useBench } from '../bench/bench-state'
+import { OpenInCalculator } from '../calculator/open-in-calculator'
 import { manuscriptUrl } from '../manuscripts/resources'
 import { PlaceLink } from '../bench/place-link'
 import { OutcomeMark, OutcomeShape } from '../shell/outcome-mark'
@@ -119,6 +120,13 @@ export function FamilySheet({ family, number }: { family: Family; number: number
               Comment on this family
             </Button>
           )}
+          <OpenInCalculator
+            family={family}
+            claim={claim}
+            alpha={alpha}
+            reports={index.reports}
+            statistics={index.statistics}
+          />
           <a
             download
             href={manuscriptUrl(manuscriptId, `/audit/export?format=r&family=${family.id}&round=${round}`)}

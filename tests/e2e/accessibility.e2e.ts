@@ -1,5 +1,7 @@
 import AxeBuilder from '@axe-core/playwright'
 import { expect, test, type Page } from '@playwright/test'
+import { encodeInput } from '@/components/calculator/calculator-input'
+import { kelpGroups, kelpValues } from '@/components/calculator/examples'
 import type { PersonKey } from '@/scripts/demo/people'
 import { enterAs } from './support/desk'
 
@@ -31,7 +33,7 @@ async function walk(page: Page, addresses: readonly string[]): Promise<string[]>
 }
 
 const screens: Partial<Record<PersonKey, readonly string[]>> = {
-  submitter: ['/docket', '/hand-in', '/account'],
+  submitter: ['/docket', '/hand-in', '/calculator', '/account'],
   reviewer: ['/docket', '/house-rules'],
   editor: ['/docket', '/people', '/house-rules', '/record', '/figures'],
   administrator: ['/people', '/record', '/mailbox', '/mailbox/outbox'],
@@ -48,6 +50,13 @@ for (const [key, addresses] of Object.entries(screens) as [PersonKey, readonly s
     expect(await walk(page, addresses)).toEqual([])
   })
 }
+
+test('axe finds nothing on a filled calculator', async ({ browser }) => {
+  test.setTimeout(240_000)
+  const page = await enterAs(browser, 'reviewer')
+  const addresses = [kelpValues, kelpGroups].map((input) => `/calculator#${encodeInput(input)}`)
+  expect(await walk(page, addresses)).toEqual([])
+})
 
 test('axe finds nothing on the screens of a manuscript', async ({ browser }) => {
   test.setTimeout(240_000)
