@@ -90,7 +90,7 @@ export function findRow(procedure: CatalogueProcedure): ProcedureRow {
 }
 
 /** The function of the p-values alone; RangeError where the row has none. */
-export function getFunction(row: ProcedureRow): AdjustSorted {
+function getFunction(row: ProcedureRow): AdjustSorted {
   if (row.adjust === null) {
     throw new RangeError(`${row.label} cannot be computed from p-values alone: it needs ${row.needs}`)
   }

@@ -41,7 +41,7 @@ export const graphical: AdjustInOrder = (p, { m, weights, transitions }) => {
  * held to those that are `left`. Throws RangeError where `transitions` is no size × size matrix of numbers in [0, 1]
  * with rows that sum to at most 1 and a zero diagonal.
  */
-export function createGraph(
+function createGraph(
   size: number,
   weights: Float64Array,
   transitions: readonly (readonly number[])[] | undefined,

@@ -177,14 +177,14 @@ export const procedureTable: Record<CatalogueProcedure, ProcedureRow> = {
     'fwer',
     'rank sums after Kruskal–Wallis; the adjustment is the one stated with it',
     'Dunn 1964',
-    'the adjustment that is stated with it',
+    'group sizes and mean ranks, or the data, and the adjustment that is stated with it',
   ),
   lsd: rowOfStatistics(
     'least significant difference',
     'none',
     'a significant omnibus test; holds the family-wise rate for three groups only',
     'Fisher 1935; Hayter 1986',
-    'the omnibus test and the number of groups',
+    'the raw p-values, the omnibus test and the number of groups',
     3,
   ),
   duncan: rowOfStatistics(

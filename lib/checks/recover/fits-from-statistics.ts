@@ -49,10 +49,11 @@ const FROM_OWN_DF: readonly FromT[] = [
 
 /**
  * As `fits`, from the printed test statistics: raw p-values over the rounding interval of each statistic; and where
- * all are two-sided t tests on at least one df, the procedures that work on t for k = 2 … `groupsMax` groups that have at least as many
- * comparisons as there are items: with one whole df Tukey and Scheffé (m = k (k − 1) / 2) and Dunnett with equal
- * groups (m = k − 1); where the df differ or are fractions, as Welch's are, Games–Howell (m = k (k − 1) / 2), over the
- * rounding of the df too. RangeError where printed values and statistics differ in number, and as `pBounds`.
+ * all are two-sided t tests on at least one df, the procedures that work on t for k = 2 … `groupsMax` groups that have
+ * at least as many comparisons as there are items: with one and the same df Tukey and Scheffé (m = k (k − 1) / 2) and
+ * Dunnett with equal groups (m = k − 1); where the df differ or are fractions, as Welch's are, Games–Howell (m =
+ * k (k − 1) / 2), over the rounding of the df too.
+ * RangeError where printed values and statistics differ in number, and as `pBounds`.
  */
 export function fitsFromStatistics(
   printed: readonly Interval[],

@@ -18,7 +18,7 @@ export const RECOVERABLE = [
   'bh',
   'by',
 ] as const satisfies readonly Procedure[]
-export type Recoverable = (typeof RECOVERABLE)[number]
+type Recoverable = (typeof RECOVERABLE)[number]
 
 /** Tried only on request: they depend on a level or an estimate, and reproduce much by chance in small families. */
 const ADAPTIVE = ['bky', 'storey'] as const satisfies readonly Procedure[]

@@ -227,6 +227,29 @@ test('the order of hypotheses with their weights does not matter to weighted Bon
   )
 })
 
+test('adjusted values lie between the raw value and 1, and none falls where a p grows', () => {
+  fc.assert(
+    fc.property(graph, fc.nat(), fc.double({ min: 0, max: 1, noNaN: true }), (item, pick, share) => {
+      const { p, weights, transitions } = item
+      const grown = p.map((value, i) => (i === pick % p.length ? value + share * (1 - value) : value))
+      for (const [procedure, options] of [
+        ['weighted-bonferroni', { weights }],
+        ['weighted-holm', { weights }],
+        ['fixed-sequence', {}],
+        ['fallback', { weights }],
+        ['graphical', { weights, transitions }],
+        ['shaffer', { groups: 4 }],
+      ] as const) {
+        const adjusted = adjust(procedure, p, options)
+        expectAtMost(p, adjusted)
+        expect(Math.max(...adjusted)).toBeLessThanOrEqual(1)
+        expectAtMost(adjusted, adjust(procedure, grown, options))
+      }
+    }),
+    { numRuns: 300 },
+  )
+})
+
 const pairs = fc.integer({ min: 2, max: 5 }).chain((groups) =>
   fc.record({
     groups: fc.constant(groups),
