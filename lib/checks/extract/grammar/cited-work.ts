@@ -10,7 +10,7 @@ const REPORTED =
 
 /** Somebody else's: 'previous work', 'earlier studies', 'in a frequently quoted report', 'et al. found', 'Author C described'. */
 const OTHERS =
-  /\b(?:previous|prior|earlier|former|another|other|recent|quoted|cited|published|pioneering|seminal|landmark|classic|original)\s(?:\w+\s)?(?:work|works|stud(?:y|ies)|reports?|trials?|authors?|investigat\w+|research\w*|papers?|experiments?|analys[ei]s|publications?|meta-analys[ei]s|review)\b|\bet al\.?,?\s*(?:[\[(][^\])]*[\])]\s*)?(?:found|reported|described|observed|showed|demonstrated|noted|obtained|documented|concluded)|\b(?:and|&) (?:colleagues|co-?workers)\b|\bAuthors?\s[A-Z]\d?\b/i
+  /\b(?:previous|prior|earlier|former|another|other|recent|quoted|cited|published|pioneering|seminal|landmark|classic|original)\s(?:\w+\s)?(?:work|works|stud(?:y|ies)|reports?|trials?|authors?|investigat\w+|research\w*|papers?|experiments?|analys[ei]s|publications?|meta-analys[ei]s|review)\b|\bet al\.?,?\s*(?:[\[(][^\])]*[\])]\s*)?(?:found|reported|described|observed|showed|demonstrated|noted|obtained|documented|concluded)|\bothers\s(?:have\s)?(?:found|reported|described|observed|showed|shown|noted|obtained)|\b(?:and|&) (?:colleagues|co-?workers)\b|\bAuthors?\s[A-Z]\d?\b/i
 
 /** The paper's own: 'we', 'our', 'in this study', 'the present trial', 'here'. */
 const OWN =
@@ -29,5 +29,5 @@ export function isCitedWork(text: string, section: SectionKind): boolean {
   if (section === 'introduction') return true
   if (others && (cited || section === 'discussion' || section === 'other') && REPORTED.test(text)) return true
   if (section === 'discussion') return cited && REPORTED.test(text)
-  return others && cited && /\bet al\b|\bprevious|\bearlier|\bprior|quoted/i.test(text)
+  return others && cited && /\bet al\b|\bprevious|\bearlier|\bprior|quoted|\bothers\b/i.test(text)
 }

@@ -69,8 +69,8 @@ const TAGS = [
 ] as const
 const TAG = String.raw`(?:[_\s-]?[({]?(?:${TAGS.join('|')})\.?[)}]?)`
 
-/** 'p', 'P', 'ps', "p's", 'p-value', 'P values', 'p-level', 'p value for trend', 'q', 'q-value', 'FDR', 'Sig. (2-tailed)'. */
-const NAME = String.raw`(?:[pP](?<plural>s|'s)?(?:[-\s]?(?<word>[vV]alues?|[lL]evels?))?(?<tag>${TAG}{0,2})|[qQ](?:[-\s]?(?<qword>[vV]alues?))?(?<qtag>_?[({]?FDR[)}]?)?|(?<fdr>FDR)|[sS]ig\.?(?:\s?\((?:1|2|one|two)-(?:tailed|sided)\))?)`
+/** 'p', 'P', 'ps', "p's", 'p-value', 'P values', 'p-val', 'p-level', 'p value for trend', 'q', 'q-value', 'FDR', 'Sig. (2-tailed)', 'Pr(>F)', 'Prob > F'. */
+const NAME = String.raw`(?:[pP](?<plural>s|'s)?(?:[-\s]?(?<word>[vV]al(?:ues?)?\b|[lL]evels?))?(?<tag>${TAG}{0,2})|[qQ](?:[-\s]?(?<qword>[vV]alues?))?(?<qtag>_?[({]?FDR[)}]?)?|(?<fdr>FDR)|[sS]ig\.?(?:\s?\((?:1|2|one|two)-(?:tailed|sided)\))?|Pr\s?\(>\s?(?:F|\|?[tz]\|?|Chisq|ChiSq)\)|Prob(?:\s?>\s?(?:F|\|?[tz]\|?))?(?=\s?[=<]))`
 
 /** 'for trend', 'for the interaction', '(two-sided)', '(adjusted)', "(Bonferroni-corrected)" between name and relation. */
 const BETWEEN = String.raw`(?:\s+for\s+(?<of>(?:the\s+|group\s+|linear\s+)?[a-z]+(?:\s×\s[a-z]+)?)|\s?\((?<aside>[A-Za-z][A-Za-z\s'-]{2,40})\))?`
@@ -84,7 +84,7 @@ const NUMBER = String.raw`(?<number>${UNSIGNED})`
 
 /** p = .032, 'P<.001', 'p-value of 0.03', '(p 0.03)', 'p_adj = .04', 'ps > .20', 'p = n.s.' */
 const P_VALUE = new RegExp(
-  String.raw`(?<![A-Za-z0-9_.^/–-])${NAME}${BETWEEN}(?:\s*${RELATION}\s*|\s+)(?:${NUMBER}|(?<ns>n\.?s\.?)(?![a-z]))`,
+  String.raw`(?<![A-Za-z0-9_.^/-])(?<![^A-Za-z]–)${NAME}${BETWEEN}(?:\s*${RELATION}\s*|\s+)(?:${NUMBER}|(?<ns>n\.?s\.?)(?![a-z]))`,
   'g',
 )
 

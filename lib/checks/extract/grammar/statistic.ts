@@ -22,7 +22,7 @@ const SYMBOLS: Record<Test, string> = {
   // 'F', 'F-value', 'F statistic'
   F: String.raw`F(?:[- ](?:values?|statistics?|test|ratio))?`,
   // 'χ2', 'χ^2', 'chi-square', 'X2', 'X-squared', 'v2' from lost Greek
-  chi2: String.raw`(?:χ|[Cc]hi|X|v)[- ]?(?:\^?\{?2\}?|[sS]quared?(?:\s(?:statistic|value))?)|χ\s\^?2`,
+  chi2: String.raw`(?:χ|[Cc]hi|X|v)[- ]?(?:\^?\{?2\}?|[sS]quared?(?:\s(?:statistic|value|test))?)|χ\s\^?2`,
   // 'z', 'Z', 'z-score', 'Wald z'
   z: String.raw`[zZ](?:[- ](?:values?|statistics?|scores?))?`,
   // 'r', "Pearson's r"
@@ -39,8 +39,8 @@ const BRACKET = String.raw`[(\[]\s*(?<bracket>[^()\[\]=<>]{1,24}|[^()\[\]]{0,24}
 /** '_28', '28', '_2,38', '2,38', ' 4,40', '_{2, 38}', ' 2/38', '_(28)': subscripts, with or without the mark of one. */
 const SUBSCRIPT = String.raw`[_\s]?\{?(?<sub>\d+(?:\.\d+)?(?:\s?[,;/]\s?\d+(?:\.\d+)?)?)\}?`
 
-/** '= -2.46', '< 0.01', ': 2.05', 'of 3.1'. */
-const VALUE = String.raw`\s*(?<relation>${RELATION_SIGN}|:|\bof\b|\bwas\b)\s*(?<value>${SIGNED})`
+/** '= -2.46', '< 0.01', ': 2.05', 'of 3.1', 'gave 6.15'; a blank alone, 't(28) 2.05', counts only with degrees of freedom. */
+const VALUE = String.raw`\s*(?<relation>${RELATION_SIGN}|:|\bof\b|\bwas\b|\bgave\b|\byielded\b|\s)\s*(?<value>${SIGNED})`
 
 const STATISTIC = new RegExp(
   String.raw`(?<![A-Za-z0-9_^/.–-])(?:${(['chi2', 'other', 't', 'F', 'z', 'r'] as const)
@@ -49,9 +49,9 @@ const STATISTIC = new RegExp(
   'g',
 )
 
-/** ', df = 28', '; df 2, 38', ' with 28 degrees of freedom', ', 2 d.f.', ' (df = 28)', ', num df = 3, denom df = 28', ' on 2 and 38 df'. */
+/** ', df = 28', '; df 2, 38', ' was found (df = 1, 57)', ' with 28 degrees of freedom', ', 2 d.f.', ' (df = 28)', ', num df = 3, denom df = 28', ' on 2 and 38 df'. */
 const DF_AFTER = new RegExp(
-  String.raw`^\s*[,;(]?\s*(?:(?:num\s)?(?:df|d\.f\.|d\.o\.f\.|ν|degrees\sof\sfreedom)\s?[=:]?\s?(?<first>${NUM})(?:\s*[,;/]\s*(?:(?:denom|den)\s?df\s?=\s?)?(?<second>\d+(?:\.\d+)?)(?!\s?\.?\d)(?![^,;)]*=))?|(?:with|on|for)?\s*(?<with>${NUM})(?:\s*(?:and|,|\/)\s*(?<with2>\d+(?:\.\d+)?))?\s*(?:df|d\.f\.|degrees\sof\sfreedom))`,
+  String.raw`^(?:\s(?:was|is)\s(?:found|obtained|observed|seen))?\s*[,;(]?\s*(?:(?:num\s)?(?:df|d\.f\.|d\.o\.f\.|ν|degrees\sof\sfreedom)\s?[=:]?\s?(?<first>${NUM})(?:\s*(?:[,;/]|and)\s*(?:(?:denom|den)\s?df\s?=\s?)?(?<second>\d+(?:\.\d+)?)(?!\s?\.?\d)(?![^,;)]*=))?|(?:with|on|for)?\s*(?<with>${NUM})(?:\s*(?:and|,|\/)\s*(?<with2>\d+(?:\.\d+)?))?\s*(?:df|d\.f\.|degrees\sof\sfreedom))`,
 )
 
 /** 'n = 50' after a correlation. */
@@ -91,13 +91,15 @@ function toStatistic(sentence: string, match: RegExpExecArray): PrintedStatistic
   if (test === 'r' && Math.abs(parsed.value) > 1) return null
   // q without its bracket is a false discovery rate
   if (symbol === 'q' && groups.bracket === undefined) return null
-  if (/of|was|:/.test(groups.relation ?? '') && !spelt) return null
+  if (/of|was|gave|yielded|:/.test(groups.relation ?? '') && !spelt) return null
+  if (groups.relation?.trim() === '' && (df.length === 0 || parsed.decimals < 1 || groups.sub !== undefined))
+    return null
   return {
     start,
     end,
     test,
     df,
-    relation: toRelation(groups.relation ?? '='),
+    relation: toRelation(groups.relation?.trim() || '='),
     value: parsed.value,
     decimals: parsed.decimals,
     certain: (df.length > 0 && test !== 'other') || spelt,
@@ -112,6 +114,9 @@ export function parseDf(inside: string, test: Test): number[] | null {
     .replace(/\b(?:df|d\.f\.|ν)\d?\s?[=:]?/gi, '')
     .replace(/[{}_]/g, '')
     .trim()
+  // 't1,28' is printed as the F that it is the root of
+  const root = test === 't' ? /^1\s?[,;]\s?(\d{1,2}|\d{4})$/.exec(plain)?.[1] : undefined
+  if (root) return [Number(root)]
   const parts = test === 'F' ? splitTwo(plain) : plain.split(/\s*(?:;|,\s+)\s*/)
   const numbers = parts.filter((part) => part !== '').map(toDf)
   if (numbers.some((value) => value === null)) return null

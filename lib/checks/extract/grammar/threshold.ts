@@ -63,6 +63,7 @@ export function isThreshold(p: PrintedP, { text, section, caption, linked }: Set
   if (LEVEL_AFTER.test(after) && CONVENTIONAL.has(p.value)) return true
   if (LEVEL_BEFORE.test(stripWords(before))) return true
   if (!bound) return false
+  if (FOR_SIGNIFICANCE.test(after)) return true
   if (SET_BEFORE.test(before) || IF_BEFORE.test(before)) return true
   if (/^\)?\s(?:was|were)\s(?:considered|regarded|required|accepted|taken|set|used)\b/.test(after))
     return true
@@ -104,6 +105,9 @@ function isDivided(p: PrintedP): boolean {
     ),
   )
 }
+
+/** 'P < 5 × 10-8 for genome-wide significance', 'p < .005 (0.05/10) as evidence of significance' */
+const FOR_SIGNIFICANCE = /^\s?(?:\([^)]*\)\s)?(?:for|as)\s(?:[\w-]+\s){0,4}significance\b/i
 
 /** Words that stand between the level and the letter: 'adjusted', 'a Bonferroni-corrected'. */
 function stripWords(before: string): string {
