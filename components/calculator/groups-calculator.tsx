@@ -21,7 +21,7 @@ type GroupsCalculatorProps = {
 /** Sizes, means and spreads of groups at the left, the comparisons that follow from them at the right. */
 export function GroupsCalculator({ input, onChange }: GroupsCalculatorProps) {
   const late = useSettled(input, 300)
-  const { read, summary, refused, faults } = useMemo(() => summarizeInput(late), [late])
+  const { read, groups, summary, refused, faults } = useMemo(() => summarizeInput(late), [late])
   const names = [...new Set(read.groups.map((group) => group.group))]
   return (
     <div className="@container">
@@ -97,7 +97,7 @@ export function GroupsCalculator({ input, onChange }: GroupsCalculatorProps) {
           className="min-w-0 @4xl:border-l @4xl:border-rule @4xl:pl-10"
         >
           {summary ? (
-            <GroupsResults summary={summary} input={late} />
+            <GroupsResults groups={groups} summary={summary} input={late} />
           ) : refused && read.groups.length > 0 ? (
             <Notice tone="care">{refused}</Notice>
           ) : (

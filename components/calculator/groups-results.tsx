@@ -3,6 +3,8 @@
 import { isSignificant } from '@/lib/checks/families/decide'
 import type { Interval } from '@/lib/checks/numbers/printed-interval'
 import { procedureTable } from '@/lib/checks/procedures/table'
+import { writeSummaryScript } from '@/lib/checks/r-script/summary-script'
+import type { SummaryGroup } from '@/lib/checks/summary/groups'
 import type { Summary, SummaryComparison } from '@/lib/checks/summary/summarize'
 import { writeSummaryCsv } from '@/lib/checks/calculate/write-summary-csv'
 import { recomputedInterval } from '../charts/printed-p'
@@ -18,8 +20,10 @@ import { count } from './work-out'
 
 const LISTED = 300
 
+type GroupsResultsProps = { groups: readonly SummaryGroup[]; summary: Summary; input: CalculatorInput }
+
 /** The analysis of variance, Welch's, and every comparison by every procedure that suits. */
-export function GroupsResults({ summary, input }: { summary: Summary; input: CalculatorInput }) {
+export function GroupsResults({ groups: given, summary, input }: GroupsResultsProps) {
   const { anova, welch, bounds, comparisons, alpha, control, groups } = summary
   const leading = control === null ? 'tukey' : 'dunnett'
   const computed = comparisons[0]?.adjusted.map((one) => one.procedure) ?? []
@@ -39,7 +43,11 @@ export function GroupsResults({ summary, input }: { summary: Summary; input: Cal
           {control === null ? `between ${groups.length} groups` : `with ${control}`} as significant
           {open > 0 && <>; {open} cannot be decided at the printed precision</>}.
         </p>
-        <Toolbar input={input} writeCsv={() => writeSummaryCsv(summary)} writeR={null} />
+        <Toolbar
+          input={input}
+          writeCsv={() => writeSummaryCsv(summary)}
+          writeR={() => writeSummaryScript(given, summary)}
+        />
       </div>
       <dl className="tabular grid grid-cols-[max-content_minmax(0,1fr)] gap-x-4 gap-y-1.5">
         <dt className="text-ink-soft">Equal variances</dt>

@@ -9,6 +9,7 @@ export const MOST_FOR_OWN_RANGES = 8
 
 export type SummarizedInput = {
   read: ReadGroups
+  groups: SummaryGroup[]
   summary: Summary | null
   /** Why there is no summary, in a sentence. */
   refused: string | null
@@ -22,6 +23,7 @@ export function summarizeInput(input: CalculatorInput): SummarizedInput {
   if (level.value === null) {
     return {
       read,
+      groups: [],
       summary: null,
       refused: 'The results wait until the level makes sense.',
       faults: level.fault ? { alpha: level.fault } : {},
@@ -40,10 +42,10 @@ export function summarizeInput(input: CalculatorInput): SummarizedInput {
   )
   try {
     const summary = summarize(groups, { alpha: level.value, procedures, ...control })
-    return { read, summary, refused: null, faults: {} }
+    return { read, groups, summary, refused: null, faults: {} }
   } catch (error) {
     // What the user typed may make no comparison: that is an answer, not a fault.
     if (!(error instanceof RangeError)) throw error
-    return { read, summary: null, refused: `${error.message}.`, faults: {} }
+    return { read, groups, summary: null, refused: `${error.message}.`, faults: {} }
   }
 }
