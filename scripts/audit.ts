@@ -1,15 +1,16 @@
+import { writeFile } from 'node:fs/promises'
 import { parseArgs } from 'node:util'
 import { audit } from '@/lib/checks/audit'
 import { defaultHouseRules } from '@/lib/checks/house-rules'
 import { writeAuditScript } from '@/lib/checks/r-script/audit-script'
 import { layOut } from '@/lib/checks/text/lay-out'
-import { readPdf } from '@/lib/intake/pdf/read-pdf'
+import { readManuscript } from '@/lib/intake/read-manuscript'
 import { readTableFile } from '@/lib/intake/table/read-table'
 import { printAudit } from '@/lib/letters/print-audit'
 import { isRefusal } from '@/lib/rules/refusal'
 
 const usage =
-  'usage: npm run --silent audit -- [--json | --r] [--alpha 0.05] manuscript.pdf [results.csv|.tsv|.xlsx]'
+  'usage: npm run --silent audit -- [--json | --r] [--alpha 0.05] [--copy pages.pdf] manuscript.pdf|.docx [results.csv|.tsv|.xlsx]'
 
 try {
   process.exitCode = await run(process.argv.slice(2))
@@ -27,6 +28,8 @@ async function run(args: string[]): Promise<number> {
       text: { type: 'boolean' },
       r: { type: 'boolean' },
       alpha: { type: 'string' },
+      // where the pages of a Word document are written, which the report's page numbers are those of
+      copy: { type: 'string' },
     },
   })
   const [manuscript, results] = positionals
@@ -35,8 +38,10 @@ async function run(args: string[]): Promise<number> {
     console.error(usage)
     return 1
   }
-  const document = await readOrSay(manuscript, readPdf)
-  if (!document) return 2
+  const read = await readOrSay(manuscript, (path) => readManuscript(path))
+  if (!read) return 2
+  const { document, readingCopy } = read
+  if (values.copy !== undefined && readingCopy) await writeFile(values.copy, readingCopy)
   if (values.text) {
     await print(pagesOf(layOut(document).prose))
     return 0

@@ -1,12 +1,13 @@
 'use client'
 
 import type { ManuscriptView } from '@/db/queries/manuscript'
+import { hasReadingCopy, pagesUrlOf } from '../files/pages-url'
 import { useAudit } from '../manuscripts/resources'
 import { Failed } from '../shell/failed'
 import { ButtonLink } from '../ui/button'
 import { EmptyState } from '../ui/empty-state'
 import { LoadingSteps } from '../ui/mark'
-import { Bench } from './bench'
+import { Bench, type BenchFile } from './bench'
 
 /** The bench, or what stands in its place while there is no audit to work on. */
 export function BenchScreen({ manuscript }: { manuscript: ManuscriptView }) {
@@ -33,14 +34,14 @@ export function BenchScreen({ manuscript }: { manuscript: ManuscriptView }) {
       key={audit.data.auditId}
       manuscript={manuscript}
       kept={audit.data}
-      fileUrl={findFileUrl(manuscript, audit.data.round)}
+      file={findFile(manuscript, audit.data.round)}
     />
   )
 }
 
-function findFileUrl(manuscript: ManuscriptView, round: number): string | null {
+function findFile(manuscript: ManuscriptView, round: number): BenchFile | null {
   if (!manuscript.actions.includes('readFiles')) return null
   const files = manuscript.rounds.find((one) => one.number === round)?.files ?? []
   const file = files.find((one) => one.kind === 'manuscript' && one.replacedAt === null)
-  return file ? `/api/files/${file.id}` : null
+  return file ? { url: pagesUrlOf(file), isCopy: hasReadingCopy(file) } : null
 }

@@ -17,10 +17,13 @@ import { SplitPanes } from './split-panes'
 import { subjectOf, targetOfComment } from './subject-of'
 import { useBenchKeys } from './use-bench-keys'
 
-type BenchProps = { manuscript: ManuscriptView; kept: KeptAudit; fileUrl: string | null }
+/** Where the pages are; a copy was made of a Word document. */
+export type BenchFile = { url: string; isCopy: boolean }
+
+type BenchProps = { manuscript: ManuscriptView; kept: KeptAudit; file: BenchFile | null }
 
 /** Where a reviewer works: the pages beside the audit, every number leading to its place and back. */
-export function Bench({ manuscript, kept, fileUrl }: BenchProps) {
+export function Bench({ manuscript, kept, file }: BenchProps) {
   const index = useMemo(() => indexAudit(kept.audit), [kept.audit])
   const may = (action: ManuscriptView['actions'][number]) => manuscript.actions.includes(action)
   const mayDecide = may('decidePoint')
@@ -102,8 +105,8 @@ export function Bench({ manuscript, kept, fileUrl }: BenchProps) {
           shown={pane}
           onShown={setPane}
           left={
-            fileUrl ? (
-              <PagePane url={fileUrl} index={index} chosen={chosen} asked={asked} onChoose={chooseInList} />
+            file ? (
+              <PagePane {...file} index={index} chosen={chosen} asked={asked} onChoose={chooseInList} />
             ) : (
               <p className="p-6 text-ink-soft">The manuscript’s file is not yours to open.</p>
             )

@@ -17,6 +17,8 @@ import './page-pane.css'
 
 type PagePaneProps = {
   url: string
+  /** The pages are a copy of a Word document. */
+  isCopy: boolean
   index: AuditIndex
   chosen: Target | null
   /** Grows with each wish to be shown the chosen place, so that asking twice scrolls twice. */
@@ -102,6 +104,11 @@ function Pages(props: PagePaneProps & { pdf: PDFDocumentProxy; first: { width: n
         onFit={() => setZoom(null)}
         url={url}
       />
+      {props.isCopy && (
+        <p className="shrink-0 border-b border-rule bg-paper px-3 py-1 text-xs text-ink-soft print:hidden">
+          A copy in pages of the Word document that was handed in; pictures are left out.
+        </p>
+      )}
       {place && place.page === null && place.row !== null && (
         <div role="status" className="shrink-0 border-b border-rule bg-sheet px-3 py-2">
           <p className="text-ink-soft">This stands in the results table, not on a page:</p>

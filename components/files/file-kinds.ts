@@ -1,4 +1,4 @@
-import type { FileKind } from '@/lib/rules/words'
+import { WORD_DOCUMENT, type FileKind } from '@/lib/rules/words'
 
 type KindOfFile = {
   label: string
@@ -12,9 +12,9 @@ type KindOfFile = {
 export const fileKinds: Record<FileKind, KindOfFile> = {
   manuscript: {
     label: 'Manuscript',
-    hint: 'One PDF with text that can be selected, not a scan.',
-    accept: { 'application/pdf': ['.pdf'] },
-    wrong: 'This is not a PDF; please export the manuscript as PDF.',
+    hint: 'One PDF or Word document (.docx). Best is a PDF with text that can be selected, not a scan.',
+    accept: { 'application/pdf': ['.pdf'], [WORD_DOCUMENT]: ['.docx'] },
+    wrong: 'This is neither a PDF nor a Word document (.docx); please save the manuscript as one of these.',
   },
   table: {
     label: 'Results table',

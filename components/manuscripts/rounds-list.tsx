@@ -1,6 +1,7 @@
 import { FileText, Table2 } from 'lucide-react'
 import type { FileView, RoundView } from '@/db/queries/manuscript'
 import { formatBytes } from '../files/format-bytes'
+import { hasReadingCopy } from '../files/pages-url'
 import { Time } from '../ui/time'
 
 /** The rounds with their files and what was said with them; the newest first. */
@@ -38,7 +39,7 @@ export function RoundsList({ rounds, readable }: { rounds: readonly RoundView[];
 function FileLine({ file, readable }: { file: FileView; readable: boolean }) {
   const Icon = file.kind === 'manuscript' ? FileText : Table2
   return (
-    <li className="flex items-baseline gap-2">
+    <li className="flex flex-wrap items-baseline gap-x-2">
       <Icon className="size-4 shrink-0 translate-y-0.5 text-ink-soft" aria-hidden="true" />
       {readable ? (
         <a href={`/api/files/${file.id}`} className="min-w-0 break-words text-tide hover:underline">
@@ -51,6 +52,11 @@ function FileLine({ file, readable }: { file: FileView; readable: boolean }) {
         {file.kind === 'manuscript' ? 'manuscript' : 'results table'}, {formatBytes(file.bytes)}
         {file.replacedAt !== null && ', replaced'}
       </span>
+      {hasReadingCopy(file) && file.replacedAt === null ? (
+        <span className="w-full pl-6 text-xs text-ink-soft">
+          Read from a copy in pages; the page numbers of the audit are those of the copy.
+        </span>
+      ) : null}
     </li>
   )
 }

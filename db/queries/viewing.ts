@@ -92,5 +92,6 @@ export function hideReviewer(
 export function hideFileName(kind: FileKind, name: string): string {
   // The ending alone, such as ".xlsx".
   const ending = /\.[a-z0-9]{1,5}$/i.exec(name)?.[0].toLowerCase() ?? ''
-  return kind === 'manuscript' ? 'manuscript.pdf' : `table${ending}`
+  if (kind === 'table') return `table${ending}`
+  return ending === '.docx' ? 'manuscript.docx' : 'manuscript.pdf'
 }

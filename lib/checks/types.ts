@@ -40,13 +40,19 @@ export type ReadPage = {
   height: number
   rotation: number
   runs: TextRun[]
+  /** The page is a picture whose characters were recognised: any of them may be wrong. */
+  recognised?: boolean
 }
+
+/** What the reader of the file left out or took one way of two; `asks` is to the authors. */
+export type ReadRemark = { says: string; asks: string }
 
 export type ReadDocument = {
   sha256: string
   title: string | null
   pages: ReadPage[]
   fonts: Record<string, ReadFont>
+  remarks?: ReadRemark[]
 }
 
 /** A cell as it is shown; `value` is the stored number where the file stores a number, else null. */
@@ -245,7 +251,14 @@ export type PdfTable = {
 }
 
 /** What `lib/checks/text` makes of the positioned runs. Text that belongs to a table is not in `prose`. */
-export type LaidOut = { prose: Prose; tables: PdfTable[]; unread: Place[] }
+export type LaidOut = {
+  prose: Prose
+  tables: PdfTable[]
+  unread: Place[]
+  /** Pages whose text was recognised from a picture. */
+  recognised?: Place[]
+  remarks?: ReadRemark[]
+}
 
 /** A report with what the reader saw around it; the judgement uses it, the audit drops it. */
 export type ReadReport = Report & {

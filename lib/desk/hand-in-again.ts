@@ -23,7 +23,7 @@ export function handInAgain(
     moveManuscript(tx, actor, manuscript.id, 'replace a file', now)
     const round = getRoundRow(tx, manuscript)
     if (!hasManuscriptFile(tx, round.id)) {
-      const message = 'Please add the manuscript as a PDF.'
+      const message = 'Please add the manuscript as a PDF or a Word document.'
       throw refuse('invalid', message, { manuscript: message })
     }
     const auditId = queueAudit(tx, round.id, now)

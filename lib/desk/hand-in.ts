@@ -60,7 +60,8 @@ function requireComplete(
   if (!about.title) missing.title = 'Please give the title.'
   if (!about.correspondingAuthor) missing.correspondingAuthor = 'Please name the corresponding author.'
   if (!about.correspondingEmail) missing.correspondingEmail = 'Please give the address the verdict goes to.'
-  if (!hasManuscriptFile(tx, roundId)) missing.manuscript = 'Please add the manuscript as a PDF.'
+  if (!hasManuscriptFile(tx, roundId))
+    missing.manuscript = 'Please add the manuscript as a PDF or a Word document.'
   const [first, ...more] = Object.values(missing)
   if (first) {
     throw refuse('invalid', more.length ? 'Please fill in what is missing.' : first, missing)

@@ -7,6 +7,12 @@ export type AuditFiles = {
   rules: HouseRules
 }
 
+export type Audited = {
+  audit: Audit
+  /** The PDF that a Word document was turned into, which the audit's pages are those of. */
+  readingCopy: Uint8Array | null
+}
+
 type Watch = {
   limits?: ReadingLimits
   signal?: AbortSignal
@@ -15,7 +21,7 @@ type Watch = {
 }
 
 /** Reads and judges a manuscript and its table in one worker thread, so that one limit covers both. */
-export function auditFiles(files: AuditFiles, watch: Watch = {}): Promise<Audit> {
+export function auditFiles(files: AuditFiles, watch: Watch = {}): Promise<Audited> {
   const { limits = defaultLimits, signal, onProgress = () => undefined } = watch
   return runThread({
     task: {
@@ -30,7 +36,8 @@ export function auditFiles(files: AuditFiles, watch: Watch = {}): Promise<Audit>
     onMessage: (message) => {
       if (message.kind === 'page') onProgress('reading', message.page / message.of)
       if (message.kind === 'stage') onProgress(message.stage, 0)
-      return message.kind === 'audited' ? message.audit : undefined
+      if (message.kind !== 'audited') return undefined
+      return { audit: message.audit, readingCopy: message.readingCopy }
     },
   })
 }

@@ -3,7 +3,8 @@ import { mkdir, open, rename, rm, type FileHandle } from 'node:fs/promises'
 import { dirname, join } from 'node:path'
 import { refuse } from '@/lib/rules/refusal'
 import type { FileKind } from '@/lib/rules/words'
-import { checkPdf, cutOff } from './check/check-pdf'
+import { checkManuscript } from './check/check-manuscript'
+import { cutOff } from './check/check-pdf'
 import { checkTable } from './check/check-table'
 import { getStoredPath, getTemporaryFolder } from './store/stored-path'
 
@@ -31,7 +32,7 @@ export async function storeFile(body: AsyncIterable<Uint8Array>, place: Place): 
   const temporary = join(folder, randomBytes(16).toString('hex'))
   try {
     const { sha256, bytes } = await writeAll(body, temporary, place)
-    const mediaType = await (place.kind === 'manuscript' ? checkPdf(temporary) : checkTable(temporary))
+    const mediaType = await (place.kind === 'manuscript' ? checkManuscript(temporary) : checkTable(temporary))
     place.signal?.throwIfAborted()
     await moveInto(temporary, getStoredPath(place.folder, sha256))
     return { sha256, bytes, mediaType }

@@ -4,6 +4,7 @@ import { audits } from '@/db/schema'
 import { keepAudit } from '@/lib/desk/keep-audit'
 import { stopAudit } from '@/lib/desk/stop-audit'
 import { auditFiles } from '@/lib/intake/audit-files'
+import { keepReadingCopy } from '@/lib/intake/store/reading-copy'
 import { defaultLimits } from '@/lib/intake/thread/run-thread'
 import { isRefusal } from '@/lib/rules/refusal'
 import { systemActor } from '@/lib/rules/roles'
@@ -19,7 +20,7 @@ export async function runAudit({ db, settings, clock, signal, subjectId }: JobCa
   const report = makeReporter(db, subjectId, clock)
   report('opening', 0)
   try {
-    const audit = await auditFiles(files, {
+    const { audit, readingCopy } = await auditFiles(files, {
       limits: {
         ...defaultLimits,
         milliseconds: settings.auditMilliseconds,
@@ -29,6 +30,8 @@ export async function runAudit({ db, settings, clock, signal, subjectId }: JobCa
       onProgress: report,
     })
     report('keeping', 0)
+    // Before the audit is kept: whoever sees the audit can open the pages it speaks of.
+    if (readingCopy) await keepReadingCopy(files.manuscript, readingCopy)
     return (now) => void keepAudit(db, systemActor, { auditId: subjectId, audit }, now)
   } catch (error) {
     if (!isRefusal(error)) throw error

@@ -1,4 +1,4 @@
-import type { LaidOut, PdfTable, Place, ReadDocument } from '../types'
+import type { LaidOut, PdfTable, Place, ReadDocument, ReadPage } from '../types'
 import { repairGlyphs } from './damage'
 import { readFlow, type FlowItem } from './flow'
 import { dropFurniture } from './furniture'
@@ -27,9 +27,7 @@ import type { Origin } from './write-line'
 export function layOut(document: ReadDocument): LaidOut {
   const digits = measureDigits(document.pages.flatMap((page) => page.runs))
   const pages = document.pages.map((page) => ({ page, frames: readFrames(document, page, digits) }))
-  const unread = pages
-    .filter(({ frames }) => frames.length === 0)
-    .map(({ page }) => toUnread(page.number, page.width, page.height))
+  const unread = pages.filter(({ frames }) => frames.length === 0).map(({ page }) => toWholePage(page))
   const told = pages.flatMap(({ frames }) => frames.filter((frame, i) => i === 0 || frame.words.length > 25))
   repairGlyphs(told)
   const frames = dropFurniture(dropHiddenLayers(told)).filter((frame) => frame.words.length > 0)
@@ -40,11 +38,16 @@ export function layOut(document: ReadDocument): LaidOut {
     page: frame.page.number,
     items: readFlow(frame, segments[i] ?? [], gutters[i] ?? [], usual.size),
   }))
-  return write(toParts(flows, usual), flows, unread)
+  const recognised = document.pages.filter((page) => page.recognised).map(toWholePage)
+  return {
+    ...write(toParts(flows, usual), flows, unread),
+    ...(recognised.length > 0 ? { recognised } : {}),
+    ...(document.remarks ? { remarks: document.remarks } : {}),
+  }
 }
 
-function toUnread(page: number, width: number, height: number): Place {
-  return { source: 'text', page, row: null, sheet: null, quote: '', boxes: [[0, 0, width, height]] }
+function toWholePage({ number, width, height }: ReadPage): Place {
+  return { source: 'text', page: number, row: null, sheet: null, quote: '', boxes: [[0, 0, width, height]] }
 }
 
 /** Size, font and distance of lines of the running text: those of most characters. */

@@ -3,7 +3,7 @@ import { fileTypeFromFile } from 'file-type'
 import type { FileKind } from '@/lib/rules/words'
 
 const remedies: Record<FileKind, string> = {
-  manuscript: 'please export the manuscript as PDF and hand that in.',
+  manuscript: 'please save the manuscript as .docx or export it as PDF, and hand that in.',
   table: 'please save the results table as XLSX, CSV or TSV and hand that in.',
 }
 
@@ -31,7 +31,7 @@ export async function sayWhatItIs(path: string, kind: FileKind): Promise<string>
 }
 
 export function sayInstead(what: string, kind: FileKind): string {
-  return `This file is ${what}, not ${kind === 'manuscript' ? 'a PDF' : 'a results table'}; ${remedies[kind]}`
+  return `This file is ${what}, not ${kind === 'manuscript' ? 'a PDF or a Word document (.docx)' : 'a results table'}; ${remedies[kind]}`
 }
 
 async function nameFormat(path: string): Promise<string> {

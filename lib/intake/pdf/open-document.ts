@@ -20,7 +20,7 @@ type PositionedItem = {
 
 /**
  * Reads every page's positioned text. Throws pdfjs's own errors (PasswordException, InvalidPDFException, …), a
- * RangeError for more than `maxPages` pages and a NoTextException where no page holds a letter or a digit.
+ * TooManyPagesException for more than `maxPages` pages and a NoTextException where no page holds a letter or a digit.
  */
 export async function readPages(
   bytes: Uint8Array,
@@ -42,7 +42,7 @@ export async function readPages(
   })
   try {
     const pdf = await loading.promise
-    if (pdf.numPages > maxPages) throw new RangeError(`${pdf.numPages} pages`)
+    if (pdf.numPages > maxPages) throw named('TooManyPagesException', `${pdf.numPages} pages`)
     const fonts: Record<string, ReadFont> = {}
     const pages: ReadPage[] = []
     for (let number = 1; number <= pdf.numPages; number++) {
@@ -51,15 +51,16 @@ export async function readPages(
       page.cleanup()
       onPage(number, pdf.numPages)
     }
-    if (!pages.some((page) => page.runs.some((run) => /[\p{L}\p{N}]/u.test(run.text)))) throw noText()
+    if (!pages.some((page) => page.runs.some((run) => /[\p{L}\p{N}]/u.test(run.text))))
+      throw named('NoTextException', 'no text on any page')
     return { sha256, title: await getTitle(pdf), pages, fonts }
   } finally {
     await loading.destroy()
   }
 }
 
-function noText(): Error {
-  return Object.assign(new Error('no text on any page'), { name: 'NoTextException' })
+function named(name: string, message: string): Error {
+  return Object.assign(new Error(message), { name })
 }
 
 async function readPage(page: PDFPageProxy, fonts: Record<string, ReadFont>): Promise<ReadPage> {

@@ -1,18 +1,12 @@
 import type { ReadDocument } from '@/lib/checks/types'
-import { defaultLimits, runThread, type ReadingLimits } from '../thread/run-thread'
+import { readManuscript } from '../read-manuscript'
+import type { ReadingLimits } from '../thread/run-thread'
 
-/** Reads a PDF's positioned text in a worker thread; rejects as `runThread` does. */
-export function readPdf(
+/** The positioned text of a manuscript alone; rejects as `readManuscript` does. */
+export async function readPdf(
   path: string,
-  limits: ReadingLimits = defaultLimits,
-  onPage: (page: number, of: number) => void = () => undefined,
+  limits?: ReadingLimits,
+  onPage?: (page: number, of: number) => void,
 ): Promise<ReadDocument> {
-  return runThread({
-    task: { kind: 'read', path, maxPages: limits.pages },
-    limits,
-    onMessage: (message) => {
-      if (message.kind === 'page') onPage(message.page, message.of)
-      return message.kind === 'read' ? message.document : undefined
-    },
-  })
+  return (await readManuscript(path, limits, onPage)).document
 }

@@ -15,8 +15,9 @@ export type ThreadTask = ReadTask | AuditTask
 export type ThreadMessage =
   | { kind: 'page'; page: number; of: number }
   | { kind: 'stage'; stage: string }
-  | { kind: 'read'; document: ReadDocument }
-  | { kind: 'audited'; audit: Audit }
+  /** `readingCopy`: the PDF that a Word document was turned into. */
+  | { kind: 'read'; document: ReadDocument; readingCopy: Uint8Array | null }
+  | { kind: 'audited'; audit: Audit; readingCopy: Uint8Array | null }
   | { kind: 'refused'; refusal: RefusalKind; message: string }
   /** Where it broke: while reading the PDF it is the file's trouble, else it is ours. */
   | { kind: 'trouble'; phase: Phase; name: string; message: string; stack: string; code: string | null }

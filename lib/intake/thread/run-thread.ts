@@ -1,8 +1,9 @@
 import { Worker } from 'node:worker_threads'
 import { refuse } from '@/lib/rules/refusal'
+import { isZip } from '../check/check-manuscript'
 import { getThreadFile } from './bundle-thread'
 import type { ThreadMessage, ThreadTask } from './messages'
-import { describeTrouble, troubles } from './troubles'
+import { describeTrouble, troubles, type Format } from './troubles'
 
 export type ReadingLimits = { milliseconds: number; megabytes: number; pages: number }
 
@@ -22,10 +23,16 @@ type Told<T> = {
  * fault is not the file's.
  */
 export async function runThread<T extends object>(told: Told<T>): Promise<T> {
-  return runFile(await getThreadFile(), told)
+  const format: Format = (await isZip(told.task.path)) ? 'word' : 'pdf'
+  return runFile(await getThreadFile(), format, told)
 }
 
-function runFile<T extends object>(file: string, { task, limits, signal, onMessage }: Told<T>): Promise<T> {
+function runFile<T extends object>(
+  file: string,
+  format: Format,
+  { task, limits, signal, onMessage }: Told<T>,
+): Promise<T> {
+  const says = troubles[format]
   return new Promise((resolve, reject) => {
     const worker = new Worker(file, {
       workerData: task,
@@ -40,32 +47,32 @@ function runFile<T extends object>(file: string, { task, limits, signal, onMessa
       void worker.terminate()
     }
     const timer = setTimeout(
-      () => settle(() => reject(unreadable(troubles.slow(limits.milliseconds)))),
+      () => settle(() => reject(unreadable(says.slow(limits.milliseconds)))),
       limits.milliseconds,
     )
     if (signal?.aborted) abort()
     signal?.addEventListener('abort', abort)
     worker.on('message', (message: ThreadMessage) => {
-      const failure = toFailure(message)
+      const failure = toFailure(message, format)
       if (failure) return settle(() => reject(failure))
       const answer = onMessage(message)
       if (answer) settle(() => resolve(answer))
     })
     worker.on('error', (error: NodeJS.ErrnoException) =>
       settle(() =>
-        reject(error.code === 'ERR_WORKER_OUT_OF_MEMORY' ? unreadable(troubles.memory, error) : error),
+        reject(error.code === 'ERR_WORKER_OUT_OF_MEMORY' ? unreadable(says.memory, error) : error),
       ),
     )
-    worker.on('exit', () => settle(() => reject(unreadable(troubles.damaged))))
+    worker.on('exit', () => settle(() => reject(unreadable(says.damaged))))
   })
 }
 
-function toFailure(message: ThreadMessage): Error | null {
+function toFailure(message: ThreadMessage, format: Format): Error | null {
   if (message.kind === 'refused') return refuse(message.refusal, message.message)
   if (message.kind !== 'trouble') return null
   const { phase, name, stack, code } = message
   const cause = Object.assign(new Error(message.message), { name, stack, ...(code ? { code } : {}) })
-  return phase === 'reading' ? unreadable(describeTrouble(name), cause) : cause
+  return phase === 'reading' ? unreadable(describeTrouble(format, name), cause) : cause
 }
 
 function unreadable(message: string, cause?: unknown) {

@@ -1,6 +1,9 @@
+import { createHash } from 'node:crypto'
 import { readFile } from 'node:fs/promises'
 import { parentPort, workerData } from 'node:worker_threads'
+import type { ReadDocument } from '@/lib/checks/types'
 import { isRefusal } from '@/lib/rules/refusal'
+import { isZip } from '../check/check-manuscript'
 import { readPages } from '../pdf/open-document'
 import { readTableFile } from '../table/read-table'
 import type { AuditTask, Phase, ThreadMessage, ThreadTask } from './messages'
@@ -11,16 +14,31 @@ const send = (message: ThreadMessage) => parentPort?.postMessage(message)
 let phase: Phase = 'opening'
 
 try {
-  const bytes = new Uint8Array(await readFile(task.path))
-  phase = 'reading'
-  const document = await readPages(bytes, task.maxPages, (page, of) => send({ kind: 'page', page, of }))
-  if (task.kind === 'read') send({ kind: 'read', document })
-  else send({ kind: 'audited', audit: await judge(task, document) })
+  const { document, readingCopy } = await readManuscript(task)
+  if (task.kind === 'read') send({ kind: 'read', document, readingCopy })
+  else send({ kind: 'audited', audit: await judge(task, document), readingCopy })
 } catch (error) {
   send(describe(error))
 }
 
-async function judge({ table, rules }: AuditTask, document: Awaited<ReturnType<typeof readPages>>) {
+async function readManuscript({ path, maxPages }: ThreadTask) {
+  const onPage = (page: number, of: number) => send({ kind: 'page', page, of })
+  const bytes = new Uint8Array(await readFile(path))
+  if (!(await isZip(path))) {
+    phase = 'reading'
+    return { document: await readPages(bytes, maxPages, onPage), readingCopy: null }
+  }
+  const sha256 = createHash('sha256').update(bytes).digest('hex')
+  const { makeReadingCopy } = await import('../word/make-reading-copy')
+  phase = 'reading'
+  const { pdf, remarks } = await makeReadingCopy(path)
+  const document = await readPages(new Uint8Array(pdf), maxPages, onPage)
+  // The document is the one that was handed in; its pages are those of the copy.
+  const read: ReadDocument = { ...document, sha256, ...(remarks.length > 0 ? { remarks } : {}) }
+  return { document: read, readingCopy: new Uint8Array(pdf) }
+}
+
+async function judge({ table, rules }: AuditTask, document: ReadDocument) {
   phase = 'reading the table'
   const rows = table ? await readTableFile(table.path, table.name) : null
   phase = 'judging'

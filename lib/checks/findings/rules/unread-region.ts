@@ -1,9 +1,14 @@
 import type { Bench } from '../../families/case'
+import type { LaidOut } from '../../types'
 import type { Found, RuleRow } from '../finding'
 
 /** A note to the reviewer: something to look at with one's own eyes. */
 function find({ laidOut }: Bench): Found[] {
-  return laidOut.unread.map((place) => ({
+  return [...findUnread(laidOut), ...findRecognised(laidOut), ...findRemarks(laidOut)]
+}
+
+function findUnread({ unread }: LaidOut): Found[] {
+  return unread.map((place) => ({
     severity: 'note',
     family: null,
     reports: [],
@@ -13,6 +18,22 @@ function find({ laidOut }: Bench): Found[] {
     cites: [],
   }))
 }
+
+/** A character that was recognised from a picture may be another one: 8 for 3, a lost decimal point. */
+function findRecognised({ recognised = [] }: LaidOut): Found[] {
+  return recognised.map((place) => ({
+    ...note,
+    place,
+    says: `Page ${place.page ?? '?'} was recognised from its picture; check each number.`,
+    asks: 'Please supply this page as text, or its numbers as a results table.',
+  }))
+}
+
+function findRemarks({ remarks = [] }: LaidOut): Found[] {
+  return remarks.map(({ says, asks }) => ({ ...note, place: null, says, asks }))
+}
+
+const note = { severity: 'note', family: null, reports: [], cites: [] } satisfies Partial<Found>
 
 export const unreadRegion: RuleRow = {
   rule: 'unread-region',
