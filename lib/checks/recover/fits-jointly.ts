@@ -24,7 +24,8 @@ export type JointFit = Fit & { witness: number[] | null }
  *   holds of the least one, turned around. The order is known where for any two items either their raw intervals do not
  *   overlap, or both ends of both intervals, raw and printed, agree in which item comes first (if a vector with the
  *   two the other way round fits, so does the one with the two exchanged). Values rounded to the same digit are mostly
- *   of this kind. Where an order is not known, one is tried: it may give a witness, but excludes nothing.
+ *   of this kind. Where the order is open, those of the raw and of the printed intervals are tried: they
+ *   may give a witness, but exclude nothing.
  * - Hommel: a few vectors are tried for a witness; nothing is excluded.
  */
 export function fitsJointly(
@@ -34,15 +35,25 @@ export function fitsJointly(
 ): JointFit[] {
   const known = listKnown(printed, raw).sort(compareItems)
   const ordered = isOrderKnown(known)
+  const orders = ordered ? [known] : [known, known.toSorted(compareByPrint)]
   const options = { ...(mMax === undefined ? {} : { mMax }), ...(alpha === undefined ? {} : { alpha }) }
   return fits(printed, raw, options).flatMap((fit): JointFit[] => {
-    const vector = findVector(known, fit)
-    if (vector === null && ordered && fit.procedure !== 'hommel') return []
-    if (vector === null) return [{ ...fit, witness: null }]
-    const witness = raw.map(() => NaN)
-    known.forEach(({ at }, i) => (witness[at] = vector[i] ?? NaN))
-    return [{ ...fit, witness }]
+    const witness = findWitness(orders, fit, raw.length)
+    const excluded = witness === null && ordered && fit.procedure !== 'hommel'
+    return excluded ? [] : [{ ...fit, witness }]
   })
+}
+
+/** The first vector that one of the orders leads to, in input order of `size` items. */
+function findWitness(orders: readonly Known[][], fit: Fit, size: number): number[] | null {
+  for (const known of orders) {
+    const vector = findVector(known, fit)
+    if (vector === null) continue
+    const witness = new Array<number>(size).fill(NaN)
+    known.forEach(({ at }, i) => (witness[at] = vector[i] ?? NaN))
+    return witness
+  }
+  return null
 }
 
 function compareItems(a: Known, b: Known): number {
@@ -52,6 +63,10 @@ function compareItems(a: Known, b: Known): number {
     a.print.low - b.print.low ||
     a.print.high - b.print.high
   )
+}
+
+function compareByPrint(a: Known, b: Known): number {
+  return a.print.low - b.print.low || a.print.high - b.print.high || compareItems(a, b)
 }
 
 function isOrderKnown(known: readonly Known[]): boolean {
