@@ -43,7 +43,7 @@ export function EntryDetail(props: EntryDetailProps) {
       aria-live="polite"
     >
       <div className="flex flex-wrap items-baseline justify-between gap-x-4 gap-y-1">
-        <h3 className="text-base font-semibold">{nameOf(entry, index)}</h3>
+        <h2 className="text-base font-semibold">{nameOf(entry, index)}</h2>
         {outcome ? (
           <OutcomeMark outcome={outcome}>{wordsOf(standing)}</OutcomeMark>
         ) : (

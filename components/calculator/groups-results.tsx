@@ -31,6 +31,8 @@ export function GroupsResults({ groups: given, summary, input }: GroupsResultsPr
   const procedures = [leading, ...others] as const
   const kept = comparisons.filter((one) => decide(one, leading, alpha) === true).length
   const open = comparisons.filter((one) => decide(one, leading, alpha) === null).length
+  // One digit more than the means are printed with.
+  const digits = Math.min(6, 1 + Math.max(0, ...given.map((one) => one.meanDecimals ?? 2)))
   const percent = Number((100 * summary.confidence).toPrecision(4))
   return (
     <div className="flex min-w-0 flex-col gap-6">
@@ -109,10 +111,12 @@ export function GroupsResults({ groups: given, summary, input }: GroupsResultsPr
                     {one.second} – {one.first}
                   </RowTh>
                   <Td number label="Difference">
-                    {formatComputed(one.difference, 3)}
+                    {formatComputed(one.difference, digits)}
                   </Td>
                   <Td number label={`${percent} % limits`}>
-                    {limits ? `${formatComputed(limits.low, 3)} to ${formatComputed(limits.high, 3)}` : '–'}
+                    {limits
+                      ? `${formatComputed(limits.low, digits)} to ${formatComputed(limits.high, digits)}`
+                      : '–'}
                   </Td>
                   <Td number label="t">
                     {formatComputed(one.pooled.t, 3)}
