@@ -115,8 +115,8 @@ for (const procedure of TWO_STAGE) {
     // Boxes that straddle the level of the first stage, searched on a fine grid of two or three p-values.
     const level = procedureTable[procedure].firstStage?.(0.05) ?? NaN
     const narrow = fc.tuple(
-      fc.double({ min: 0.6, max: 1.05, noNaN: true }),
-      fc.double({ min: 0.01, max: 0.3, noNaN: true }),
+      fc.double({ min: 0.1, max: 1.05, noNaN: true }),
+      fc.double({ min: 0.01, max: 0.9, noNaN: true }),
     )
     fc.assert(
       fc.property(fc.array(narrow, { minLength: 2, maxLength: 3 }), (items) => {
