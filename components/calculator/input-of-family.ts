@@ -49,7 +49,9 @@ export function inputOfFamily(parts: FamilyParts): { input: CalculatorInput; lef
 
 /** Signs that would be read as part of a number are taken out of a name. */
 function nameOf(report: Report): string {
-  const name = report.comparison?.join(' – ') ?? report.place.quote
+  const { page, row } = report.place
+  const where = page !== null ? `on page ${page}` : row !== null ? `in row ${row}` : 'without a place'
+  const name = report.comparison?.join(' – ') ?? where
   return name
     .replace(/[=<>≤≥;:|\n\t]+/g, ' ')
     .replace(/\s+/g, ' ')

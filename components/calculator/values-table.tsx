@@ -69,8 +69,8 @@ export function ValuesTable({ entries, calculation, results, alpha, chosen, onCh
               if (!entry || !raw) return null
               return (
                 <Tr key={index} opens selected={chosen === index}>
-                  <Td number label="No." className="text-ink-soft">
-                    {index + 1}
+                  <Td number className="text-ink-soft">
+                    <span data-nothing>{index + 1}</span>
                   </Td>
                   <RowTh className="max-w-64 truncate font-normal">
                     <button
