@@ -52,7 +52,7 @@ export function Calculator({ input, onChange, id }: CalculatorProps) {
                 : 'Nothing in this text was read as a p-value; the list at the left says why.'}
             </EmptyState>
           ) : (
-            <ValuesResults input={late} worked={worked} onChange={onChange} id={id} />
+            <ValuesResults input={late} read={read} worked={worked} onChange={onChange} id={id} />
           )}
         </section>
       </div>

@@ -37,11 +37,7 @@ export function EntryDetail(props: EntryDetailProps) {
   const outcome = outcomeOf(standing)
   const { bonferroni, holm, bh } = calculation.survives
   return (
-    <section
-      aria-label={`About ${nameOf(entry, index)}`}
-      className="border border-rule bg-sheet px-4 py-3"
-      aria-live="polite"
-    >
+    <section aria-label={`About ${nameOf(entry, index)}`} className="border border-rule bg-sheet px-4 py-3">
       <div className="flex flex-wrap items-baseline justify-between gap-x-4 gap-y-1">
         <h2 className="text-base font-semibold">{nameOf(entry, index)}</h2>
         {outcome ? (

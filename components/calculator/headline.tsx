@@ -17,7 +17,7 @@ export function Headline({ calculation, main, alpha }: HeadlineProps) {
   ).length
   const name = capitalise(procedureTable[main.procedure].label)
   return (
-    <div className="max-w-[62ch]">
+    <div role="status" className="max-w-[62ch]">
       <p className="font-serif text-lg">
         {name} at α = {alpha} and <i>m</i> = {m.toLocaleString('en')} keeps{' '}
         <strong className="font-semibold">

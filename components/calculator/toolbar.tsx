@@ -1,5 +1,6 @@
 'use client'
 
+import { useMemo } from 'react'
 import { Button } from '../ui/button'
 import { toast } from '../ui/toast'
 import { encodeInput, LONGEST_LINK, type CalculatorInput } from './calculator-input'
@@ -16,9 +17,10 @@ const tooLong = 'This list is too long for a link. Keep the CSV instead.'
 
 /** Takes the calculation elsewhere: as a link, as a table, as a script. */
 export function Toolbar({ input, writeCsv, writeR }: ToolbarProps) {
+  const fragment = useMemo(() => encodeInput(input), [input])
+  const long = fragment.length > LONGEST_LINK
   const copy = async () => {
-    const fragment = encodeInput(input)
-    if (fragment.length > LONGEST_LINK) {
+    if (long) {
       toast.error(tooLong)
       return
     }
@@ -30,7 +32,7 @@ export function Toolbar({ input, writeCsv, writeR }: ToolbarProps) {
     }
   }
   return (
-    <div className="flex flex-wrap gap-2 print:hidden">
+    <div className="flex max-w-64 flex-wrap gap-2 print:hidden">
       <Button size="small" onClick={() => void copy()}>
         Copy link
       </Button>
@@ -48,6 +50,9 @@ export function Toolbar({ input, writeCsv, writeR }: ToolbarProps) {
       >
         R script
       </Button>
+      {long && (
+        <p className="w-full text-xs text-ink-soft">Too long for the address: a reload starts anew.</p>
+      )}
     </div>
   )
 }

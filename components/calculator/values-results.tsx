@@ -1,6 +1,7 @@
 'use client'
 
 import { useMemo, useState, type ReactNode } from 'react'
+import type { ReadValues } from '@/lib/checks/calculate/read-values'
 import { writeCalculationCsv } from '@/lib/checks/calculate/write-calculation-csv'
 import { classes } from '../ui/classes'
 import { Notice } from '../ui/notice'
@@ -20,13 +21,14 @@ import { writeValuesScript } from './write-values-script'
 type ValuesResultsProps = {
   /** What the results follow from; it may lag behind the typing in a long list. */
   input: CalculatorInput
+  read: ReadValues
   worked: WorkedOut
   onChange: (part: Partial<CalculatorInput>) => void
   id: string
 }
 
 /** All that follows from the list. */
-export function ValuesResults({ input, worked, onChange, id }: ValuesResultsProps) {
+export function ValuesResults({ input, read, worked, onChange, id }: ValuesResultsProps) {
   const { entries, alpha, faults, work } = worked
   const [picked, setPicked] = useState<number | null>(null)
   const firstOpen = useMemo(() => work?.main.significant.indexOf(null) ?? -1, [work])
@@ -47,6 +49,12 @@ export function ValuesResults({ input, worked, onChange, id }: ValuesResultsProp
           writeR={() => writeValuesScript(input, worked)}
         />
       </div>
+      {read.scale === 'adjusted' && read.columns && (
+        <Notice tone="care">
+          By its head the column “{read.header?.[read.columns.value]}” holds adjusted values: correcting them
+          again would correct twice.
+        </Notice>
+      )}
       {refused.length > 0 && (
         <Notice tone="care">
           {refused.map(({ procedure, refused: reason }) => (

@@ -77,6 +77,7 @@ export function ValuesTable({ entries, calculation, results, alpha, chosen, onCh
                       type="button"
                       className="row-link text-left"
                       title={nameOf(entry, index)}
+                      aria-pressed={chosen === index}
                       onClick={() => onChoose(index)}
                     >
                       {nameOf(entry, index)}

@@ -1,4 +1,5 @@
 import { findRoles, type ColumnRole } from '../table/roles'
+import type { Scale } from '../vocabulary'
 import type { Entry, Sides, Unread } from './entry'
 import { readLine, type LineOptions } from './read-line'
 import { readPlainNumber, readPToken } from './read-number'
@@ -11,12 +12,16 @@ export type Columns = { name: number | null; value: number; adjusted: number | n
 /** `alpha` stands for the bound of 'ns'; `columns` overrides what is found in a table's header. */
 export type ReadValuesOptions = { alpha?: number; sides?: Sides; columns?: Partial<Columns> }
 
-/** `header` and `columns` where the text is a table with a header, else null. `cut`: values beyond MOST_VALUES. */
+/**
+ * `header` and `columns` where the text is a table with a header, else null. `scale`: what the head of the values' column
+ * says of them; 'adjusted' values would be corrected twice. `cut`: values beyond MOST_VALUES.
+ */
 export type ReadValues = {
   entries: Entry[]
   unread: Unread[]
   header: string[] | null
   columns: Columns | null
+  scale: Scale
   cut: number
 }
 
@@ -68,7 +73,7 @@ function readList(text: string, how: LineOptions): Omit<ReadValues, 'cut'> {
     for (const one of read.entries) entries.push(one)
     for (const one of read.unread) unread.push(one)
   }
-  return { entries, unread, header: null, columns: null }
+  return { entries, unread, header: null, columns: null, scale: 'unknown' }
 }
 
 function readTable(text: string, how: LineOptions, wanted: Partial<Columns>): Omit<ReadValues, 'cut'> | null {
@@ -96,7 +101,9 @@ function readTable(text: string, how: LineOptions, wanted: Partial<Columns>): Om
       unread.push({ line: record.line, text: record.cells.join(' | ').slice(0, 120), why: entry })
     } else entries.push(entry)
   }
-  return { entries, unread, header: header.cells, columns }
+  const role = roles[columns.value]
+  const scale = role?.kind === 'p' ? role.scale : 'unknown'
+  return { entries, unread, header: header.cells, columns, scale }
 }
 
 const isNumber = (cell: string) => readPlainNumber(cell) !== null

@@ -100,6 +100,12 @@ test('tables with commas, semicolons and decimal commas, and two columns of grou
   expect(names('group 1,group 2,p\nrock,sand,0.01')).toEqual(['rock – sand'])
 })
 
+test('a column whose head says adjusted is told, as it would be corrected twice', () => {
+  expect(readValues('pair,p adj\na,.01\nb,.02')).toMatchObject({ scale: 'adjusted', columns: { value: 1 } })
+  expect(readValues('pair,p\na,.01\nb,.02').scale).not.toBe('adjusted')
+  expect(readValues('.01 .02').scale).toBe('unknown')
+})
+
 test('a table of statistics needs their degrees of freedom', () => {
   expect(readValues('pair,t,df\na,2.05,28\nb,1.00,').entries).toHaveLength(1)
   expect(readValues('pair,t,df\na,2.05,28\nb,1.00,').unread).toMatchObject([{ line: 3 }])
