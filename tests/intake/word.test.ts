@@ -108,7 +108,7 @@ test('a table longer than a page goes on under its head; a very wide one turns i
       wordParagraph('Table 3. Means of many outcomes by surface.') +
       wordTable(
         Array.from({ length: 5 }, (_, i) =>
-          Array.from({ length: 11 }, (__, j) => (i === 0 ? `Outcome ${j}` : `${i}.${j}0 (0.${j}4)`)),
+          Array.from({ length: 11 }, (__, j) => (i === 0 ? `Outcome ${j}` : `${i}.20 (1.14, 1.30)`)),
         ),
       ),
   })

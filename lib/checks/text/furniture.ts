@@ -26,10 +26,13 @@ export function dropFurniture(frames: readonly Frame[]): Frame[] {
     }
   return edges.map(({ frame, rows }) => {
     const dropped = new Set<Word>()
-    for (const { row, key, outermost } of rows) {
+    for (const { row, key, outermost, inTable } of rows) {
       const text = textOf(row)
       const returns =
-        (counts.get(key)?.size ?? 0) >= 2 && captionNumber(text) === null && !/^\(?continued/i.test(text)
+        (counts.get(key)?.size ?? 0) >= 2 &&
+        captionNumber(text) === null &&
+        !/^\(?continued/i.test(text) &&
+        !inTable
       if (returns || (outermost && pageNumber.test(text)))
         for (const segment of row.segments) for (const word of segment.words) dropped.add(word)
     }
@@ -37,22 +40,41 @@ export function dropFurniture(frames: readonly Frame[]): Frame[] {
   })
 }
 
-type EdgeRow = { row: Row; key: string; outermost: boolean }
+type EdgeRow = {
+  row: Row
+  key: string
+  outermost: boolean
+  /** Rows of a table that fills pages look alike at the same place of each. */
+  inTable: boolean
+}
 
 /** Rows in the top and bottom strips, with a key that is equal for the same head on another page. */
 function findEdgeRows(frame: Frame): EdgeRow[] {
   const height = frame.top - frame.bottom
-  const near = frame.words.filter(
-    (w) => w.v > frame.top - 0.13 * height || w.v < frame.bottom + 0.13 * height,
-  )
-  const rows = groupRows(near)
-  return rows.map((row, index) => {
+  const within = (v: number, strip: number) =>
+    v > frame.top - strip * height || v < frame.bottom + strip * height
+  // a little more than the strip, so that its last row has a neighbour
+  const rows = groupRows(frame.words.filter((word) => within(word.v, 0.17)))
+  return rows.flatMap((row, index) => {
+    if (!within(row.v, 0.13)) return []
     const folded = textOf(row).toLowerCase().replace(/\d+/g, '#').replace(/\s+/g, '')
     const place = Math.round(row.v / 6)
     const upper = row.v > frame.bottom + 0.5 * height
     const outermost = upper ? index === 0 : index === rows.length - 1
-    return { row, key: `${folded}|${upper ? 'top' : 'foot'}|${folded.length < 4 ? place : ''}`, outermost }
+    const inTable = isTableRow(row, rows[upper ? index + 1 : index - 1])
+    return {
+      row,
+      inTable,
+      outermost,
+      key: `${folded}|${upper ? 'top' : 'foot'}|${folded.length < 4 ? place : ''}`,
+    }
   })
+}
+
+/** Three pieces or more, with a row of as many pieces close to it, further in on the page. */
+function isTableRow(row: Row, inward: Row | undefined): boolean {
+  if (!inward || row.segments.length < 3 || inward.segments.length < 3) return false
+  return Math.abs(row.v - inward.v) < 2.2 * Math.max(row.size, inward.size)
 }
 
 function groupRows(words: readonly Word[]): Row[] {

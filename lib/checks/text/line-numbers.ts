@@ -59,7 +59,25 @@ function isOutside(frame: Frame, column: readonly Word[]): boolean {
     else within++
   }
   const few = 0.02 * frame.words.length
-  return before < few || after < few || (column.length >= 20 && within < 1.15 * column.length)
+  if (before < few || after < few) return true
+  return column.length >= 20 && within < 1.15 * column.length && standApart(frame, column)
+}
+
+/** Text does not touch a line number: "Trait 7" is a name. */
+function standApart(frame: Frame, column: readonly Word[]): boolean {
+  const rows = new Map<number, Word[]>()
+  for (const word of frame.words) {
+    const row = rows.get(Math.round(word.v)) ?? []
+    rows.set(Math.round(word.v), row)
+    row.push(word)
+  }
+  const touched = column.filter((number) => {
+    const near = 0.5 * number.size
+    return (rows.get(Math.round(number.v)) ?? []).some(
+      (word) => word !== number && Math.max(number.u0 - word.u1, word.u0 - number.u1) < near,
+    )
+  })
+  return touched.length < 0.3 * column.length
 }
 
 /** Numbers of another width in the same column (9, 10, 100). */
