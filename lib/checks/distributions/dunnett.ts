@@ -1,5 +1,7 @@
 import { normalDensity, normalLogUpper, normalUpper } from './normal'
 import { averageOverScale } from './scale-mixture'
+import { UNDERFLOW } from './special'
+import { tLogTwoSided } from './student-t'
 
 const WIDTH = 9.5
 
@@ -51,6 +53,8 @@ export function dunnettUpper(t: number, loadings: readonly number[], df: number,
   if (Number.isNaN(t)) return NaN
   const d = sides === 2 ? Math.abs(t) : t
   if (sides === 2 && d === 0) return 1
+  // Bonferroni's bound: where it is below what a double holds, so is the probability.
+  if (d > 0 && Math.log(loadings.length) + tLogTwoSided(d, df) < UNDERFLOW) return 0
   const count = Math.log(sides * loadings.length)
   const logBound = (s: number) => (d > 0 ? Math.min(0, count + normalLogUpper(d * s)) : 0)
   return Math.min(

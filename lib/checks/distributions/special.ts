@@ -12,6 +12,9 @@ export const erfcx = (x: number): number => erfcxOf(x)
 /** log Γ(x) for x > 0. */
 export const gammaln = (x: number): number => gammalnOf(x)
 
+/** exp of anything below is 0. */
+export const UNDERFLOW = -745.2
+
 export const HALF_LOG_TWO_PI = 0.9189385332046727
 
 /**

@@ -1,5 +1,7 @@
 import { normalDensity, normalLogUpper, normalUpper } from './normal'
 import { averageOverScale } from './scale-mixture'
+import { UNDERFLOW } from './special'
+import { tLogTwoSided } from './student-t'
 
 /** Grid of the trapezoidal rule for the largest of `groups` normals: its values do not depend on the range. */
 type Grid = { start: number; step: number; weight: Float64Array; inverse: Float64Array }
@@ -58,6 +60,8 @@ export function studentizedRangeUpper(q: number, groups: number, df: number): nu
   if (Number.isNaN(q)) return NaN
   if (q <= 0) return 1
   if (q === Infinity) return 0
+  // Bonferroni's bound: where it is below what a double holds, so is the probability.
+  if (Math.log(0.5 * groups * (groups - 1)) + tLogTwoSided(q * Math.SQRT1_2, df) < UNDERFLOW) return 0
   const pairs = Math.log(groups * (groups - 1))
   const logBound = (s: number) => Math.min(0, pairs + normalLogUpper(q * s * Math.SQRT1_2))
   return Math.min(

@@ -11,7 +11,7 @@ export type WelchBox = Piece & { n1: number; n2: number; difference: Interval }
 
 /** How much wider than what is attained a bound may be, relative. */
 const PRECISION = 1e-6
-const MOST_PIECES = 20_000
+const MOST_PIECES = 4000
 
 /** Welch's df over the rectangle: 1 / df is convex in the first group's share, so one turning point at most. */
 export function boundWelchDf({ n1, n2 }: WelchBox, { a, b }: Piece): Interval {
