@@ -16,7 +16,7 @@ export {
 } from './numbers/printed-interval'
 export { pBoundsOverSphericity } from './numbers/sphericity'
 export { adjust, type AdjustOptions } from './procedures/adjust'
-export { adjustBounds, type Bounds } from './procedures/adjust-bounds'
+export { adjustBounds, type BoundOptions, type Bounds } from './procedures/adjust-bounds'
 export { compareByDuncan } from './procedures/duncan'
 export { compareByDunn, compareDataByDunn } from './procedures/dunn'
 export { dunnettLoadings, pDunnettFromT } from './procedures/dunnett'

@@ -40,13 +40,11 @@ export function adjustRanges(
     return known.flatMap((range) => adjustRanges(procedure, [range], Math.max(1, m), alpha))
   }
   // members that are not shown may have any p too: by a step-wise procedure they bear on all others
-  const hidden = isSingleStep(procedure) ? 0 : Math.min(5000, Math.max(0, m - known.length))
-  const all = [...known, ...new Array<Interval>(hidden).fill(unknown)]
   const bounds = adjustBounds(
     procedure,
-    all.map(({ low }) => low),
-    all.map(({ high }) => high),
-    { m: Math.max(m, all.length), alpha },
+    known.map(({ low }) => low),
+    known.map(({ high }) => high),
+    { m: Math.max(m, known.length), alpha, unprinted: Math.max(0, m - known.length) },
   )
   return known.map((_, i) => ({ low: bounds.low[i] ?? 0, high: bounds.high[i] ?? 1 }))
 }

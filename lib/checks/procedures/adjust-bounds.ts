@@ -4,6 +4,19 @@ import { adjust, findRow, type AdjustOptions } from './adjust'
 export type Bounds = { low: number[]; high: number[] }
 
 /**
+ * `unprinted`: how many further members of the family have a p-value of which nothing is printed, so that it may lie
+ * anywhere in [0, 1]; they count in `m`, whose default is then all members. Default 0: members beyond those given act
+ * as p = 1. For procedures on the set of p-values only.
+ */
+export type BoundOptions = AdjustOptions & { unprinted?: number }
+
+/**
+ * Procedures by closed testing whose every local test rejects where a member has p = 0: members at 0 then leave the
+ * others as they would be without them.
+ */
+const CLOSED: readonly CatalogueProcedure[] = ['holm', 'holm-sidak', 'hochberg', 'hommel']
+
+/**
  * The exact bounds of each adjusted p-value when every p[i] ranges over [low[i], high[i]] on its own. Shapes,
  * ranges and errors as in `adjust`; RangeError also where `low` and `high` differ in length, in what is NaN, or in
  * order. Every procedure but the two-stage ones is monotone in each p-value, so that the ends of the box give the
@@ -14,13 +27,41 @@ export function adjustBounds(
   procedure: CatalogueProcedure,
   low: readonly number[],
   high: readonly number[],
-  options: AdjustOptions = {},
+  { unprinted = 0, ...options }: BoundOptions = {},
 ): Bounds {
   checkBox(low, high)
+  if (unprinted !== 0) return boundWithUnprinted(procedure, low, high, unprinted, options)
   const { firstStage } = findRow(procedure)
   const run = (p: readonly number[]) => adjust(procedure, p, options)
   if (firstStage === null) return { low: run(low), high: run(high) }
   return boundTwoStage(low, high, firstStage(options.alpha ?? 0.05), run)
+}
+
+function boundWithUnprinted(
+  procedure: CatalogueProcedure,
+  low: readonly number[],
+  high: readonly number[],
+  unprinted: number,
+  options: AdjustOptions,
+): Bounds {
+  const { adjust: bySet, adjustEach, firstStage } = findRow(procedure)
+  if (bySet === null) throw new RangeError(`${procedure} needs to know which member is not printed`)
+  const known = low.filter((p) => !Number.isNaN(p)).length
+  const m = options.m ?? known + unprinted
+  if (!Number.isSafeInteger(unprinted) || unprinted < 0 || m < known + unprinted) {
+    throw new RangeError(`m = ${m} leaves no room for ${unprinted} members beside the ${known} given`)
+  }
+  const whole = { ...options, m }
+  if (adjustEach !== null) return adjustBounds(procedure, low, high, whole)
+  const largest = () => adjust(procedure, high, whole)
+  if (CLOSED.includes(procedure)) {
+    return { low: adjust(procedure, low, { ...options, m: m - unprinted }), high: largest() }
+  }
+  const zeros = new Array<number>(unprinted).fill(0)
+  const cut = (p: readonly number[]) => p.slice(0, low.length)
+  if (firstStage === null) return { low: cut(adjust(procedure, [...low, ...zeros], whole)), high: largest() }
+  const all = adjustBounds(procedure, [...low, ...zeros], [...high, ...zeros.map(() => 1)], whole)
+  return { low: cut(all.low), high: cut(all.high) }
 }
 
 function checkBox(low: readonly number[], high: readonly number[]) {

@@ -73,3 +73,49 @@ for (const procedure of COMPUTABLE) {
     expect(() => adjustBounds(procedure, [0.1], [], options)).toThrow(RangeError)
   })
 }
+
+const ofSets = CATALOGUE.filter((procedure) => procedureTable[procedure].adjust !== null)
+
+for (const procedure of ofSets) {
+  test(`${procedure}: members of which nothing is printed bound the others as members over [0, 1] would`, () => {
+    const next = createRandom(411)
+    for (let box = 0; box < 40; box++) {
+      const size = 1 + (box % 6)
+      const unprinted = 1 + (box % 4)
+      const low = Array.from({ length: size }, () => next() ** 3)
+      const high = low.map((value) => Math.min(1, value + 0.05 * next()))
+      const m = size + unprinted + (box % 3)
+      const found = adjustBounds(procedure, low, high, { m, unprinted })
+      const written = adjustBounds(
+        procedure,
+        [...low, ...new Array<number>(unprinted).fill(0)],
+        [...high, ...new Array<number>(unprinted).fill(1)],
+        { m },
+      )
+      for (let i = 0; i < size; i++) {
+        expect(found.low[i]).toBeCloseTo(written.low[i] ?? NaN, 12)
+        expect(found.high[i]).toBeCloseTo(written.high[i] ?? NaN, 12)
+      }
+    }
+  })
+}
+
+test('Holm with one value of .01 and five that are not printed: from .01 to .06, by hand', () => {
+  const { low, high } = adjustBounds('holm', [0.01], [0.01], { unprinted: 5 })
+  expect([low[0], high[0]]).toEqual([0.01, 0.06])
+})
+
+test('a million members that are not printed cost no more than the printed ones where that can be had', () => {
+  const { low, high } = adjustBounds('hommel', [1e-8, 0.01], [2e-8, 0.02], {
+    m: 1_000_000,
+    unprinted: 999_998,
+  })
+  expect(low.map((p) => Number(p.toPrecision(6)))).toEqual([2e-8, 0.01])
+  expect(high.map((p) => Number(p.toPrecision(6)))).toEqual([0.02, 1])
+})
+
+test('an order or weights cannot be told for members that are not printed, nor can there be more than m', () => {
+  expect(() => adjustBounds('fixed-sequence', [0.01], [0.02], { unprinted: 1 })).toThrow(RangeError)
+  expect(() => adjustBounds('holm', [0.01], [0.02], { m: 3, unprinted: 3 })).toThrow(RangeError)
+  expect(() => adjustBounds('holm', [0.01], [0.02], { unprinted: 0.5 })).toThrow(RangeError)
+})

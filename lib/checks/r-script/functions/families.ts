@@ -5,6 +5,7 @@ export const families = `
 on_p <- c("bonferroni", "sidak", "holm", "holm-sidak", "hochberg", "hommel", "bh", "by", "bky", "storey")
 on_t <- c("tukey", "games-howell", "dunnett", "scheffe")
 single_step <- c("bonferroni", "sidak")
+closed <- c("holm", "holm-sidak", "hochberg", "hommel")
 
 # The raw p that an adjusted one leaves possible: exact for single-step procedures, else between p / m and p.
 invert <- function(procedure, adjusted, m) {
@@ -39,10 +40,15 @@ adjust_ranges <- function(procedure, raw, m, alpha) {
     return(unlist(lapply(known, function(one) adjust_ranges(procedure, list(one), max(1, m), alpha)),
                   recursive = FALSE))
   }
-  hidden <- if (procedure %in% single_step) 0 else min(5000, max(0, m - length(known)))
-  low <- c(sapply(known, function(range) range[1]), rep(0, hidden))
-  high <- c(sapply(known, function(range) range[2]), rep(1, hidden))
-  bounds <- adjust_bounds(procedure, low, high, max(m, length(low)), alpha)
+  low <- sapply(known, function(range) range[1])
+  high <- sapply(known, function(range) range[2])
+  hidden <- if (procedure %in% single_step) 0 else max(0, m - length(known))
+  if (hidden > 0 && procedure %in% closed) {
+    # members at p = 0 leave a closed procedure on the others as it is without them
+    bounds <- list(low = adjust_p(procedure, low, length(low), alpha), high = adjust_p(procedure, high, m, alpha))
+  } else {
+    bounds <- adjust_bounds(procedure, c(low, rep(0, hidden)), c(high, rep(1, hidden)), max(m, length(low)), alpha)
+  }
   lapply(seq_along(known), function(i) c(bounds$low[i], bounds$high[i]))
 }
 
