@@ -5,6 +5,7 @@ import { Dialog as Radix } from 'radix-ui'
 import type { ReactNode } from 'react'
 import { classes } from './classes'
 import { IconButton } from './icon-button'
+import { useFocusReturn } from './use-focus-return'
 
 type DialogProps = {
   open: boolean
@@ -20,11 +21,13 @@ type DialogProps = {
 
 /** A sheet above the page. Escape and a press outside close it; the focus goes back to where it came from. */
 export function Dialog({ open, onOpenChange, title, description, children, footer, wide }: DialogProps) {
+  const focusReturn = useFocusReturn()
   return (
     <Radix.Root open={open} onOpenChange={onOpenChange}>
       <Radix.Portal>
         <Radix.Overlay className="fixed inset-0 z-40 bg-ink/25 dark:bg-paper/70" />
         <Radix.Content
+          {...focusReturn}
           className={classes(
             'fixed top-[8dvh] left-1/2 z-50 flex max-h-[84dvh] w-[calc(100vw-2rem)] -translate-x-1/2 flex-col',
             'rounded-md border border-rule bg-sheet shadow-sheet focus:outline-none',
