@@ -139,10 +139,9 @@ function sortEntries(entries: readonly Entry[], { raw }: Calculation, { by, dire
   const middle = (i: number) => (raw[i]?.low ?? 0) + (raw[i]?.high ?? 0)
   if (by === 'name') {
     const collator = new Intl.Collator('en', { numeric: true })
-    order.sort((a, b) => collator.compare(nameOf0(entries[a], a), nameOf0(entries[b], b)))
+    const names = entries.map(nameOf)
+    order.sort((a, b) => collator.compare(names[a] ?? '', names[b] ?? ''))
   }
   if (by === 'p') order.sort((a, b) => middle(a) - middle(b))
   return direction === 'descending' ? order.reverse() : order
 }
-
-const nameOf0 = (entry: Entry | undefined, index: number) => (entry ? nameOf(entry, index) : '')

@@ -1,4 +1,20 @@
 export { audit, ENGINE, STAGES, type Stage } from './audit'
+export {
+  calculate,
+  listComputable,
+  type Adjusted,
+  type CalculateOptions,
+  type Calculation,
+  type Reading,
+  type Survives,
+} from './calculate/calculate'
+export { findDecidingDigit, type NextDigit } from './calculate/deciding-digit'
+export type { Entry, EntryStatistic, Sides, Unread } from './calculate/entry'
+export { fitPrinted } from './calculate/fit-printed'
+export { readGroups, type GroupEntry, type ReadGroups } from './calculate/read-groups'
+export { readValues, type Columns, type ReadValues, type ReadValuesOptions } from './calculate/read-values'
+export { writeCalculationCsv } from './calculate/write-calculation-csv'
+export { writeSummaryCsv } from './calculate/write-summary-csv'
 export { dunnettUpper } from './distributions/dunnett'
 export { noncentralFTails } from './distributions/noncentral-f'
 export { noncentralTBeyond, noncentralTLower, noncentralTUpper } from './distributions/noncentral-t'
@@ -33,6 +49,8 @@ export { compareBySteelDwass } from './procedures/steel-dwass'
 export { procedureTable, type ProcedureRow } from './procedures/table'
 export { pTukeyFromT } from './procedures/tukey'
 export { writeAuditScript, writeFamilyScript } from './r-script/audit-script'
+export { writeCalculationScript, type ShownBeside } from './r-script/calculation-script'
+export { writeSummaryScript } from './r-script/summary-script'
 export { fits, fitsAdaptive, type AdaptiveFit, type FitOptions } from './recover/fits'
 export {
   fitsFromStatistics,
