@@ -28,6 +28,7 @@ export function auditFiles(files: AuditFiles, watch: Watch = {}): Promise<Audite
       kind: 'audit',
       path: files.manuscript,
       maxPages: limits.pages,
+      recognition: limits.recognition,
       table: files.table,
       rules: files.rules,
     },

@@ -14,7 +14,7 @@ export function readManuscript(
   onPage: (page: number, of: number) => void = () => undefined,
 ): Promise<ReadManuscript> {
   return runThread({
-    task: { kind: 'read', path, maxPages: limits.pages },
+    task: { kind: 'read', path, maxPages: limits.pages, recognition: limits.recognition },
     limits,
     onMessage: (message) => {
       if (message.kind === 'page') onPage(message.page, message.of)

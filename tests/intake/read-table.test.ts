@@ -85,7 +85,7 @@ test('a formula counts by its last result; an error, a truth and a date hold no 
     { text: '0.04', value: 0.04 },
     { text: '#DIV/0!', value: null },
     { text: 'TRUE', value: null },
-    { text: '2023-03-15', value: null },
+    { text: '2023-03-15', value: null, date: true },
   ])
 })
 

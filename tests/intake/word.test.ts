@@ -8,6 +8,7 @@ import { layOut } from '@/lib/checks/text/lay-out'
 import { auditFiles } from '@/lib/intake/audit-files'
 import { checkManuscript } from '@/lib/intake/check/check-manuscript'
 import { readManuscript } from '@/lib/intake/read-manuscript'
+import { defaultLimits } from '@/lib/intake/thread/run-thread'
 import { getReadingCopyPath, keepReadingCopy } from '@/lib/intake/store/reading-copy'
 import { WORD_DOCUMENT } from '@/lib/rules/words'
 import { listAll, makeFolder } from '../support/folder'
@@ -245,6 +246,6 @@ test('a Word document that nests without end, is empty or is slow ends in a sent
     message: expect.stringContaining('Word document'),
   })
   await expect(readManuscript(put(makeWord({ body: '' })))).rejects.toThrow('holds no text')
-  const rushed = readManuscript(put(makeWord({ body })), { milliseconds: 5, megabytes: 512, pages: 10 })
+  const rushed = readManuscript(put(makeWord({ body })), { ...defaultLimits, milliseconds: 5 })
   await expect(rushed).rejects.toThrow('The Word document could not be read within 1 second')
 })

@@ -2,12 +2,20 @@ import { createHash } from 'node:crypto'
 import { createRequire } from 'node:module'
 import { dirname, join } from 'node:path'
 import type { PDFDocumentProxy, PDFPageProxy } from 'pdfjs-dist'
-import { getDocument, VerbosityLevel } from 'pdfjs-dist/legacy/build/pdf.mjs'
+import { getDocument, OPS, VerbosityLevel } from 'pdfjs-dist/legacy/build/pdf.mjs'
 import type { ReadDocument, ReadFont, ReadPage, TextRun } from '@/lib/checks/types'
+import { makePageRecogniser, type PageRecogniser, type RecognitionLimits } from '../recognise/recognise-pages'
+import { recognisedFont } from '../recognise/to-runs'
 
 const assets = dirname(createRequire(import.meta.url).resolve('pdfjs-dist/package.json'))
 
-export type PageRead = (page: number, of: number) => void
+export type Reading = {
+  maxPages: number
+  recognition: RecognitionLimits
+  onPage: (page: number, of: number) => void
+  /** A page is a picture, and its text will be recognised, which takes seconds. */
+  onRecognise: () => void
+}
 
 type PositionedItem = {
   str: string
@@ -19,14 +27,11 @@ type PositionedItem = {
 }
 
 /**
- * Reads every page's positioned text. Throws pdfjs's own errors (PasswordException, InvalidPDFException, …), a
+ * Reads every page's positioned text; that of a page which is a picture is recognised. Throws pdfjs's own errors (PasswordException, InvalidPDFException, …), a
  * TooManyPagesException for more than `maxPages` pages and a NoTextException where no page holds a letter or a digit.
  */
-export async function readPages(
-  bytes: Uint8Array,
-  maxPages: number,
-  onPage: PageRead,
-): Promise<ReadDocument> {
+export async function readPages(bytes: Uint8Array, reading: Reading): Promise<ReadDocument> {
+  const { maxPages, onPage } = reading
   const sha256 = createHash('sha256').update(bytes).digest('hex')
   const loading = getDocument({
     data: bytes,
@@ -40,6 +45,7 @@ export async function readPages(
     stopAtErrors: false,
     verbosity: VerbosityLevel.ERRORS,
   })
+  const recogniser = makePageRecogniser(reading.recognition, reading.onRecognise)
   try {
     const pdf = await loading.promise
     if (pdf.numPages > maxPages) throw named('TooManyPagesException', `${pdf.numPages} pages`)
@@ -47,20 +53,45 @@ export async function readPages(
     const pages: ReadPage[] = []
     for (let number = 1; number <= pdf.numPages; number++) {
       const page = await pdf.getPage(number)
-      pages.push(await readPage(page, fonts))
+      pages.push(await recognisePicture(page, await readPage(page, fonts), recogniser))
       page.cleanup()
       onPage(number, pdf.numPages)
     }
     if (!pages.some((page) => page.runs.some((run) => /[\p{L}\p{N}]/u.test(run.text))))
       throw named('NoTextException', 'no text on any page')
+    if (pages.some((page) => page.recognised))
+      fonts[recognisedFont] = { family: 'serif', ascent: 0.75, descent: -0.25, vertical: false }
     return { sha256, title: await getTitle(pdf), pages, fonts }
   } finally {
+    recogniser.close()
     await loading.destroy()
   }
 }
 
 function named(name: string, message: string): Error {
   return Object.assign(new Error(message), { name })
+}
+
+/** Fewer letters and digits are a stamp on a scanned page: "Downloaded on 1 December". */
+const stamp = 60
+
+/** The page with its text recognised where it is a picture, else as it is. */
+async function recognisePicture(
+  page: PDFPageProxy,
+  read: ReadPage,
+  recogniser: PageRecogniser,
+): Promise<ReadPage> {
+  const characters = read.runs.reduce((sum, run) => sum + run.text.replace(/[^\p{L}\p{N}]/gu, '').length, 0)
+  if (characters >= stamp || (characters > 0 && !(await showsPicture(page)))) return read
+  const runs = await recogniser.recognise(page)
+  return runs ? { ...read, runs, recognised: true } : read
+}
+
+async function showsPicture(page: PDFPageProxy): Promise<boolean> {
+  const { fnArray } = await page.getOperatorList()
+  return fnArray.some(
+    (operator) => operator === OPS.paintImageXObject || operator === OPS.paintImageMaskXObject,
+  )
 }
 
 async function readPage(page: PDFPageProxy, fonts: Record<string, ReadFont>): Promise<ReadPage> {

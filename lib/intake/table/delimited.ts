@@ -45,7 +45,31 @@ export function guessDelimiter(text: string): string | null {
     .map(withoutQuoted)
   const scored = ['\t', ';', '|', ','].map((delimiter) => ({ delimiter, score: score(lines, delimiter) }))
   const best = scored.reduce((a, b) => (b.score > a.score ? b : a))
-  return best.score > 0 ? best.delimiter : null
+  if (best.score > 0) return best.delimiter
+  // blanks part values only where names stand in quotes, and every line has as many
+  const counts = lines.map((line) => line.trim().split(' ').length)
+  const quoted = lines.length > 1 && text.includes('"') && Math.min(...counts) > 1
+  return quoted && Math.max(...counts) - Math.min(...counts) <= 1 ? ' ' : null
+}
+
+/** 'sep=;' in the first line, by which a spreadsheet is told the delimiter; `length`: of that line with its end. */
+export function getDeclaredDelimiter(text: string): { delimiter: string; length: number } | null {
+  const line = /^\ufeff?"?sep=(.)"?\r?\n/i.exec(text)
+  return line?.[1] === undefined ? null : { delimiter: line[1], length: line[0].length }
+}
+
+/**
+ * A line of heads that is one short of every other line lacks the head of the row names, its first: so are tables
+ * written whose rows have names of their own, all different.
+ */
+export function placeHeads(rows: string[][]): string[][] {
+  const [heads, ...body] = rows.filter((row) => row.some((cell) => cell !== ''))
+  const width = (heads?.length ?? 0) + 1
+  if (!heads || heads.length < 2 || body.length < 2) return rows
+  const names = new Set(body.map(([name]) => name))
+  const fits = body.every((row) => row.length === width) && body.some((row) => row[width - 1] !== '')
+  if (!fits || names.size < body.length || names.has('')) return rows
+  return rows.map((row) => (row === heads ? ['', ...row] : row))
 }
 
 function score(lines: readonly string[], delimiter: string): number {
@@ -58,5 +82,5 @@ function score(lines: readonly string[], delimiter: string): number {
 
 /** A line without what stands in quotes, where a delimiter is only text: a,"b, c",d. */
 function withoutQuoted(line: string): string {
-  return line.replace(/"[^"]*"/g, '')
+  return line.replace(/"[^"]*"/g, 'x')
 }

@@ -5,7 +5,7 @@ import { parse } from 'csv-parse/sync'
 import type { ReadCell, ReadTable } from '@/lib/checks/types'
 import { isRefusal, refuse } from '@/lib/rules/refusal'
 import { checkWorkbook } from '../check/check-workbook'
-import { decodeText, guessDelimiter } from './delimited'
+import { decodeText, getDeclaredDelimiter, guessDelimiter, placeHeads } from './delimited'
 import { maxCells, maxColumns, maxRows, tooManyRows } from './limits'
 import { readWorkbook } from './workbook'
 
@@ -17,15 +17,17 @@ export async function readTableFile(path: string, name = basename(path)): Promis
     return { file: name, sha256, sheets: [{ name: null, rows: readDelimited(bytes) }] }
   }
   await checkWorkbook(path)
-  return { file: name, sha256, sheets: readWorkbook(bytes) }
+  return { file: name, sha256, ...readWorkbook(bytes) }
 }
 
 function readDelimited(bytes: Buffer): ReadCell[][] {
-  const text = decodeText(bytes)
-  if (text === null) throw refuse('unreadable', notDelimited)
+  const decoded = decodeText(bytes)
+  if (decoded === null) throw refuse('unreadable', notDelimited)
+  const declared = getDeclaredDelimiter(decoded)
+  const text = declared === null ? decoded : decoded.slice(declared.length)
   try {
     const rows: string[][] = parse(text, {
-      delimiter: guessDelimiter(text) ?? ',',
+      delimiter: declared?.delimiter ?? guessDelimiter(text) ?? ',',
       relax_column_count: true,
       relax_quotes: true,
       skip_empty_lines: false,
@@ -35,7 +37,9 @@ function readDelimited(bytes: Buffer): ReadCell[][] {
     })
     const cells = rows.reduce((sum, row) => sum + Math.min(row.length, maxColumns), 0)
     if (rows.length > maxRows || cells > maxCells) throw refuse('too-large', tooManyRows)
-    return rows.map((row) => row.slice(0, maxColumns).map((cell) => ({ text: cell, value: null })))
+    return placeHeads(rows).map((row) =>
+      row.slice(0, maxColumns).map((cell) => ({ text: cell, value: null })),
+    )
   } catch (cause) {
     if (isRefusal(cause)) throw cause
     throw Object.assign(refuse('unreadable', notDelimited), { cause })

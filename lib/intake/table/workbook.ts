@@ -1,18 +1,47 @@
 import { read, SSF, type CellObject, type WorkSheet } from '@e965/xlsx'
-import type { ReadCell, ReadTable } from '@/lib/checks/types'
+import type { ReadCell, ReadSheet, ReadTable } from '@/lib/checks/types'
 import { refuse } from '@/lib/rules/refusal'
+import { remarkOnHidden } from './hidden'
 import { maxCells, maxColumns, maxRows, tooManyRows } from './limits'
 
-/** Reads the sheets of a workbook: values and how they are shown; formulas count by their last result. */
-export function readWorkbook(bytes: Buffer): ReadTable['sheets'] {
+/**
+ * Reads the sheets of a workbook: values and how they are shown; formulas count by their last result. What is hidden
+ * is read with the rest, and said.
+ */
+export function readWorkbook(bytes: Buffer): Pick<ReadTable, 'sheets' | 'remarks'> {
   const book = open(bytes)
   let cells = 0
-  return book.SheetNames.map((name) => {
+  const sheets = book.SheetNames.map((name) => {
     const rows = readSheet(book.Sheets[name])
     cells += rows.reduce((sum, row) => sum + row.length, 0)
     if (cells > maxCells) throw refuse('too-large', tooManyRows)
-    return { name, rows }
+    return withMerges({ name, rows }, book.Sheets[name])
   })
+  const remarks = sheets.flatMap((sheet, i) =>
+    remarkOnHidden(
+      sheet,
+      book.Sheets[book.SheetNames[i] ?? ''],
+      (book.Workbook?.Sheets?.[i]?.Hidden ?? 0) > 0,
+    ),
+  )
+  return remarks.length > 0 ? { sheets, remarks } : { sheets }
+}
+
+/** Merges of the cells that were read; a sheet may declare them over columns that nobody sees. */
+function withMerges(sheet: ReadSheet, from: WorkSheet | undefined): ReadSheet {
+  const merges = (from?.['!merges'] ?? []).filter(
+    ({ s, e }) => s.r < sheet.rows.length && s.c < maxColumns && (e.r > s.r || e.c > s.c),
+  )
+  if (merges.length === 0) return sheet
+  return {
+    ...sheet,
+    merges: merges.map(({ s, e }) => [
+      s.r,
+      s.c,
+      Math.min(e.r, sheet.rows.length) - s.r + 1,
+      Math.min(e.c, maxColumns) - s.c + 1,
+    ]),
+  }
 }
 
 function open(bytes: Buffer) {
@@ -24,6 +53,8 @@ function open(bytes: Buffer) {
       cellHTML: false,
       cellNF: true,
       cellDates: false,
+      // tells which rows and columns are hidden
+      cellStyles: true,
       sheetRows: maxRows + 1,
     })
   } catch (cause) {
@@ -46,8 +77,14 @@ function readSheet(sheet: WorkSheet | undefined): ReadCell[][] {
 function toCell(cell: CellObject | undefined): ReadCell {
   if (!cell || cell.v === undefined || cell.v === null) return { text: '', value: null }
   if (cell.t !== 'n' || typeof cell.v !== 'number') return { text: shown(cell), value: null }
-  if (isDate(cell)) return { text: shown(cell), value: null }
-  return { text: isGeneral(cell) ? shortest(cell.v) : shown(cell), value: cell.v }
+  if (isDate(cell)) return { text: shown(cell), value: null, date: true }
+  const text = isGeneral(cell) || isRoundedAway(cell) ? shortest(cell.v) : shown(cell)
+  return { text, value: cell.v }
+}
+
+/** '0.000' or '0%' over a number that is not zero: its format hides all of it. */
+function isRoundedAway(cell: CellObject): boolean {
+  return cell.v !== 0 && /^-?0(?:[.,]0*)?\s?%?$/.test(shown(cell))
 }
 
 function shown(cell: CellObject): string {

@@ -1,11 +1,12 @@
 import type { Audit, HouseRules, ReadDocument } from '@/lib/checks/types'
+import type { RecognitionLimits } from '../recognise/recognise-pages'
 import type { RefusalKind } from '@/lib/rules/refusal'
 
-export type ReadTask = { kind: 'read'; path: string; maxPages: number }
-export type AuditTask = {
+type Reading = { path: string; maxPages: number; recognition: RecognitionLimits }
+
+export type ReadTask = Reading & { kind: 'read' }
+export type AuditTask = Reading & {
   kind: 'audit'
-  path: string
-  maxPages: number
   table: { path: string; name: string } | null
   rules: HouseRules
 }
@@ -14,6 +15,8 @@ export type ThreadTask = ReadTask | AuditTask
 /** `opening` and `reading` are the reader's stages; the engine tells the others. */
 export type ThreadMessage =
   | { kind: 'page'; page: number; of: number }
+  /** A page is a picture; from the first one on the reading may take longer. */
+  | { kind: 'recognising' }
   | { kind: 'stage'; stage: string }
   /** `readingCopy`: the PDF that a Word document was turned into. */
   | { kind: 'read'; document: ReadDocument; readingCopy: Uint8Array | null }

@@ -1,13 +1,25 @@
 import { Worker } from 'node:worker_threads'
 import { refuse } from '@/lib/rules/refusal'
+import type { RecognitionLimits } from '../recognise/recognise-pages'
 import { isZip } from '../check/check-manuscript'
 import { getThreadFile } from './bundle-thread'
 import type { ThreadMessage, ThreadTask } from './messages'
 import { describeTrouble, troubles, type Format } from './troubles'
 
-export type ReadingLimits = { milliseconds: number; megabytes: number; pages: number }
+export type ReadingLimits = {
+  milliseconds: number
+  megabytes: number
+  pages: number
+  /** What recognising the text of scanned pages may take, beside all else. */
+  recognition: RecognitionLimits
+}
 
-export const defaultLimits: ReadingLimits = { milliseconds: 120_000, megabytes: 1_024, pages: 2_000 }
+export const defaultLimits: ReadingLimits = {
+  milliseconds: 120_000,
+  megabytes: 1_024,
+  pages: 2_000,
+  recognition: { pages: 40, milliseconds: 480_000 },
+}
 
 type Told<T> = {
   task: ThreadTask
@@ -46,13 +58,18 @@ function runFile<T extends object>(
       finish()
       void worker.terminate()
     }
-    const timer = setTimeout(
-      () => settle(() => reject(unreadable(says.slow(limits.milliseconds)))),
-      limits.milliseconds,
-    )
+    const wait = (milliseconds: number) =>
+      setTimeout(() => settle(() => reject(unreadable(says.slow(milliseconds)))), milliseconds)
+    let timer = wait(limits.milliseconds)
+    let recognises = false
     if (signal?.aborted) abort()
     signal?.addEventListener('abort', abort)
     worker.on('message', (message: ThreadMessage) => {
+      if (message.kind === 'recognising' && !recognises) {
+        recognises = true
+        clearTimeout(timer)
+        timer = wait(limits.milliseconds + limits.recognition.milliseconds)
+      }
       const failure = toFailure(message, format)
       if (failure) return settle(() => reject(failure))
       const answer = onMessage(message)

@@ -21,18 +21,23 @@ try {
   send(describe(error))
 }
 
-async function readManuscript({ path, maxPages }: ThreadTask) {
-  const onPage = (page: number, of: number) => send({ kind: 'page', page, of })
+async function readManuscript({ path, maxPages, recognition }: ThreadTask) {
+  const reading = {
+    maxPages,
+    recognition,
+    onPage: (page: number, of: number) => send({ kind: 'page', page, of }),
+    onRecognise: () => send({ kind: 'recognising' }),
+  }
   const bytes = new Uint8Array(await readFile(path))
   if (!(await isZip(path))) {
     phase = 'reading'
-    return { document: await readPages(bytes, maxPages, onPage), readingCopy: null }
+    return { document: await readPages(bytes, reading), readingCopy: null }
   }
   const sha256 = createHash('sha256').update(bytes).digest('hex')
   const { makeReadingCopy } = await import('../word/make-reading-copy')
   phase = 'reading'
   const { pdf, remarks } = await makeReadingCopy(path)
-  const document = await readPages(new Uint8Array(pdf), maxPages, onPage)
+  const document = await readPages(new Uint8Array(pdf), reading)
   // The document is the one that was handed in; its pages are those of the copy.
   const read: ReadDocument = { ...document, sha256, ...(remarks.length > 0 ? { remarks } : {}) }
   return { document: read, readingCopy: new Uint8Array(pdf) }
