@@ -1,16 +1,24 @@
+import type { ReadRemark } from '../types'
 import type { Frame, Word } from './words'
 
 /**
  * Repairs relation signs, minus signs and χ that a damaged font prints as other characters. What a character
  * stands for is told by where it stands in this document: between 'p' and a decimal, or between a statistic
  * or a count and a number, there must be a relation. A common replacement found in typeset papers decides
- * only between '=', '<' and '>'; by itself it repairs nothing. Works per font, in place.
+ * only between '=', '<' and '>'; by itself it repairs nothing. Works per font, in place. Answers what was repaired,
+ * and that it stays in doubt where the values alone told '<' from '='.
  */
-export function repairGlyphs(frames: readonly Frame[]): void {
+export function repairGlyphs(frames: readonly Frame[]): ReadRemark[] {
   const lines = frames.flatMap(toLines)
-  repairRelations(lines)
-  repairSigns(lines)
-  repairChi(lines)
+  return [...repairRelations(lines), ...repairSigns(lines), ...repairChi(lines)]
+}
+
+function remark(printed: string, read: string, count: number, doubt = ''): ReadRemark {
+  const places = count === 1 ? 'one place' : `${count} places`
+  return {
+    says: `A font of this PDF gives "${printed}" where "${read}" must stand; it was read as "${read}" in ${places}.${doubt}`,
+    asks: 'Please supply the manuscript as a PDF whose fonts carry the usual characters.',
+  }
 }
 
 /** A drawn line as text, with the word and index of every character (null for a space). */
@@ -58,7 +66,8 @@ const thresholds: ReadonlySet<number> = new Set([0.05, 0.01, 0.001, 0.0001, 0.00
 const equals = '¼5Z⫽ϭ'
 const greater = '[.4N⬎Ͼ'
 
-function repairRelations(lines: readonly Line[]): void {
+function repairRelations(lines: readonly Line[]): ReadRemark[] {
+  const remarks: ReadRemark[] = []
   const evidence = new Map<string, Evidence>()
   for (const line of lines) {
     for (const match of line.text.matchAll(afterP)) note(evidence, line, match, true)
@@ -71,7 +80,12 @@ function repairRelations(lines: readonly Line[]): void {
     const everywhere = !isPlain(found.char) || found.total <= 1.5 * found.slots.length
     if (everywhere) replaceAll(lines, found, relation)
     else for (const { line, at } of found.slots) put(line, at, relation)
+    // beside conventional levels '<' is likelier than '=', and no more than that
+    const doubt =
+      relation === '<' ? ' Whether "=" is meant the values alone cannot tell; compare the page.' : ''
+    remarks.push(remark(found.char, relation, everywhere ? found.total : found.slots.length, doubt))
   }
+  return remarks
 }
 
 function note(
@@ -147,7 +161,8 @@ function put(line: Line, at: number, by: string): void {
 const sign =
   /[=<>(,] ?([\u00c0-\u00d6\u00d8-\u00f6\u00f8-\u00ff\u03e2-\u03ef\u2a00-\u2aff\ue000-\uf8ff?]) ?(?=\d*[.·]?\d)/dgu
 
-function repairSigns(lines: readonly Line[]): void {
+function repairSigns(lines: readonly Line[]): ReadRemark[] {
+  const remarks: ReadRemark[] = []
   const places = new Map<string, { line: Line; at: number }[]>()
   for (const line of lines)
     for (const match of line.text.matchAll(sign)) {
@@ -160,18 +175,27 @@ function repairSigns(lines: readonly Line[]): void {
   for (const [key, found] of places) {
     if (key.endsWith('?') && found.length < 2) continue
     for (const { line, at } of found) put(line, at, '-')
+    remarks.push(remark(key.slice(key.lastIndexOf('|') + 1), '−', found.length))
   }
+  return remarks
 }
 
 // "v2(2) = 6.15", "(w2 = 4.1": a letter with a raised 2, as a test statistic
 const chi = /(?<![\p{L}\d])([vwc])(2) ?(?:\(\d|[=<>])/dgu
 
-function repairChi(lines: readonly Line[]): void {
+function repairChi(lines: readonly Line[]): ReadRemark[] {
+  const letters: string[] = []
   for (const line of lines)
     for (const match of line.text.matchAll(chi)) {
       const at = match.indices?.[1]?.[0]
       if (at === undefined) continue
       const [letter, two] = [line.at[at]?.word, line.at[at + 1]?.word]
-      if (letter && two && letter !== two && two.size < 0.9 * letter.size) put(line, at, 'χ')
+      if (letter && two && letter !== two && two.size < 0.9 * letter.size) {
+        letters.push(match[1] ?? '')
+        put(line, at, 'χ')
+      }
     }
+  return [...new Set(letters)].map((letter) =>
+    remark(letter, 'χ', letters.filter((one) => one === letter).length),
+  )
 }

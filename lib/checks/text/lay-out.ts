@@ -29,7 +29,7 @@ export function layOut(document: ReadDocument): LaidOut {
   const pages = document.pages.map((page) => ({ page, frames: readFrames(document, page, digits) }))
   const unread = pages.filter(({ frames }) => frames.length === 0).map(({ page }) => toWholePage(page))
   const told = pages.flatMap(({ frames }) => frames.filter((frame, i) => i === 0 || frame.words.length > 25))
-  repairGlyphs(told)
+  const remarks = [...(document.remarks ?? []), ...repairGlyphs(told)]
   const frames = dropFurniture(dropHiddenLayers(told)).filter((frame) => frame.words.length > 0)
   const usual = findUsual(frames)
   const segments = frames.map((frame) => findSegments(frame.words))
@@ -42,7 +42,7 @@ export function layOut(document: ReadDocument): LaidOut {
   return {
     ...write(toParts(flows, usual), flows, unread),
     ...(recognised.length > 0 ? { recognised } : {}),
-    ...(document.remarks ? { remarks: document.remarks } : {}),
+    ...(remarks.length > 0 ? { remarks } : {}),
   }
 }
 

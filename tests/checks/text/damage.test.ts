@@ -55,3 +55,22 @@ test('sound text is left alone: references to pages, lists of values, plain lett
   ])
     expect(textOf(text)).toBe(text)
 })
+
+test('what was repaired is told, and that it is in doubt where only the values speak', () => {
+  const lines = [
+    'The first differed (t(28) ⟨¼⟩ ⟨À⟩2.46, p ⟨¼⟩ 0.021; v⟪2⟫(2) ⟨¼⟩ 6.15, p ⟨¼⟩ 0.046);',
+    'others differed clearly (p ⟨\\⟩ 0.001 and p ⟨\\⟩ 0.01).',
+  ]
+  const { remarks } = layOut(document(page(lines.flatMap((text, i) => line(text, 700 - i * 12)))))
+  expect(remarks?.map(({ says }) => says)).toEqual([
+    'A font of this PDF gives "¼" where "=" must stand; it was read as "=" in 4 places.',
+    'A font of this PDF gives "\\" where "<" must stand; it was read as "<" in 2 places. Whether "=" is meant the values alone cannot tell; compare the page.',
+    'A font of this PDF gives "À" where "−" must stand; it was read as "−" in one place.',
+    'A font of this PDF gives "v" where "χ" must stand; it was read as "χ" in one place.',
+  ])
+})
+
+test('of sound text nothing is told', () => {
+  const told = layOut(document(page(line('The first differed (t(28) = 2.46, p = 0.021; see p. 0.5).', 700))))
+  expect(told.remarks ?? []).toEqual([])
+})
