@@ -95,5 +95,11 @@ export {
   type SummaryComparison,
   type SummaryOptions,
 } from './summary/summarize'
+export {
+  describeTable,
+  type ColumnDescription,
+  type ReadValue,
+  type TableDescription,
+} from './table/describe-table'
 export * from './types'
 export * from './vocabulary'

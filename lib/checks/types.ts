@@ -1,6 +1,7 @@
 import type {
   Call,
   ClaimedProcedure,
+  NamedRole,
   Outcome,
   Procedure,
   Relation,
@@ -55,14 +56,35 @@ export type ReadDocument = {
   remarks?: ReadRemark[]
 }
 
-/** A cell as it is shown; `value` is the stored number where the file stores a number, else null. */
-export type ReadCell = { text: string; value: number | null }
+/**
+ * A cell as it is shown; `value` is the stored number where the file stores a number, else null. `date`: the file
+ * stores a date.
+ */
+export type ReadCell = { text: string; value: number | null; date?: true }
+
+/** Cells that a spreadsheet shows as one: 0-based row and column of the first, and how many rows and columns. */
+export type Merge = [row: number, column: number, rows: number, columns: number]
 
 /** `name` is null for CSV and TSV. `rows` includes header and blank rows; rows may differ in length. */
-export type ReadSheet = { name: string | null; rows: ReadCell[][] }
+export type ReadSheet = { name: string | null; rows: ReadCell[][]; merges?: Merge[] }
 
-/** A results table handed in beside the manuscript. `file` is the file's own name without folder. */
-export type ReadTable = { file: string; sha256: string; sheets: ReadSheet[] }
+/**
+ * What a person says that a column holds: sheet (0-based), the table by the row of the sheet at which it begins
+ * (0-based, as `describeTable` gives it), and the column of the sheet (0-based).
+ */
+export type NamedColumn = { sheet: number; row: number; column: number; role: NamedRole }
+
+/**
+ * A results table handed in beside the manuscript. `file` is the file's own name without folder. `roles`: columns
+ * that a person named, which are read as named and no other way.
+ */
+export type ReadTable = {
+  file: string
+  sha256: string
+  sheets: ReadSheet[]
+  roles?: readonly NamedColumn[]
+  remarks?: ReadRemark[]
+}
 
 /** What the house decides; the defaults are in `defaultHouseRules`. */
 export type HouseRules = {
@@ -282,7 +304,13 @@ export type ReadReport = Report & {
   markOnly: boolean
 }
 
-export type ReadStatistic = Statistic & { offset: number; table: number | null; sentence: string }
+export type ReadStatistic = Statistic & {
+  offset: number
+  table: number | null
+  sentence: string
+  /** As of a report; absent outside a column of statistics. */
+  cell?: { row: number; column: number }
+}
 
 export type ReadClaim = Claim & {
   offset: number
@@ -300,4 +328,9 @@ export type Reading = {
   reports: ReadReport[]
   statistics: ReadStatistic[]
   claims: ReadClaim[]
+  /** What of the results table could not be read, or should be looked at. */
+  tableRemarks?: TableRemark[]
 }
+
+/** Something about the results table, at the cell where it is about one; `asks` is to the authors. */
+export type TableRemark = ReadRemark & { place: Place | null }

@@ -58,6 +58,36 @@ export type Call = (typeof CALLS)[number]
 export const SOURCES = ['text', 'pdf-table', 'results-table'] as const
 export type Source = (typeof SOURCES)[number]
 
+/** What a person can say that a column of a results table holds. */
+export const NAMED_ROLES = [
+  'p',
+  'p-unadjusted',
+  'p-adjusted',
+  't',
+  'F',
+  'chi2',
+  'z',
+  'r',
+  'other-statistic',
+  'df',
+  'df-error',
+  'comparison',
+  'group',
+  'second-group',
+  'outcome',
+  'label',
+  'n',
+  'mean',
+  'sd',
+  'se',
+  'estimate',
+  'interval',
+  'marks',
+  'call',
+  'unused',
+] as const
+export type NamedRole = (typeof NAMED_ROLES)[number]
+
 export const OUTCOMES = ['holds', 'fails', 'undecidable', 'uncorrected'] as const
 export type Outcome = (typeof OUTCOMES)[number]
 

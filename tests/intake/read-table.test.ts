@@ -131,3 +131,91 @@ test('bytes that are no table are refused', async () => {
     refusal: 'unreadable',
   })
 })
+
+test('a first line that declares the delimiter is no row', async () => {
+  expect(await texts('sep=;\r\na;p\r\nx;0,02\r\n')).toEqual([
+    ['a', 'p'],
+    ['x', '0,02'],
+  ])
+})
+
+test('row names without a head, and blanks between quoted names', async () => {
+  expect(await texts('"t" "p"\n"A - B" 2.1 0.047\n"A - C" 3.0 0.006\n')).toEqual([
+    ['', 't', 'p'],
+    ['A - B', '2.1', '0.047'],
+    ['A - C', '3.0', '0.006'],
+  ])
+  expect(await texts('t\tp\nA - B\t2.1\t0.047\nA - C\t3.0\t0.006\n')).toEqual([
+    ['', 't', 'p'],
+    ['A - B', '2.1', '0.047'],
+    ['A - C', '3.0', '0.006'],
+  ])
+})
+
+test('UTF-16 with its bytes the other way round, and quoted cells with a decimal comma', async () => {
+  const swapped = Buffer.from('\ufeffa\tp\nx\t,020\n', 'utf16le').swap16()
+  expect(await texts(swapped)).toEqual([
+    ['a', 'p'],
+    ['x', ',020'],
+  ])
+  expect(await texts('a,t,p\nx,"2,10","0,041"\ny,"3,00","0,004"\n')).toEqual([
+    ['a', 't', 'p'],
+    ['x', '2,10', '0,041'],
+    ['y', '3,00', '0,004'],
+  ])
+})
+
+async function readBook(bytes: Buffer) {
+  const path = join(makeFolder(), 'results.xlsx')
+  writeFileSync(path, bytes)
+  return readTableFile(path)
+}
+
+test('a format that rounds a p-value away does not make it zero; percent keeps its sign', async () => {
+  const bytes = makeWorkbook([['p'], [0.0000213], [0.0321], [0]], (sheet) => {
+    for (const cell of ['A2', 'A4']) sheet[cell].z = '0.000'
+    sheet.A3.z = '0.0%'
+  })
+  expect((await readBook(bytes)).sheets[0]?.rows.slice(1).map(([cell]) => cell)).toEqual([
+    { text: '0.0000213', value: 0.0000213 },
+    { text: '3.2%', value: 0.0321 },
+    { text: '0.000', value: 0 },
+  ])
+})
+
+test('merged cells are told by their first cell and their size', async () => {
+  const bytes = makeWorkbook(
+    [
+      ['Grazing', '', 'x'],
+      ['t', 'p', 'q'],
+    ],
+    (sheet) => {
+      sheet['!merges'] = [{ s: { r: 0, c: 0 }, e: { r: 0, c: 1 } }]
+    },
+  )
+  expect((await readBook(bytes)).sheets[0]?.merges).toEqual([[0, 0, 1, 2]])
+})
+
+test('hidden rows and columns are read, and said', async () => {
+  const rows = [
+    ['Pair', 'p', 'n'],
+    ['A vs B', 0.02, 8],
+    ['A vs C', 0.03, 8],
+    ['B vs C', 0.04, 8],
+  ]
+  const bytes = makeWorkbook(rows, (sheet) => {
+    sheet['!rows'] = [{}, { hidden: true }, { hidden: true }]
+    sheet['!cols'] = [{}, {}, { hidden: true }]
+  })
+  const read = await readBook(bytes)
+  expect(read.sheets[0]?.rows).toHaveLength(4)
+  expect(read.remarks?.map(({ says }) => says)).toEqual([
+    'Hidden in the results table: rows 2–3 and column C of the sheet "results". It was read with the rest; check whether it belongs to the results.',
+  ])
+  const hidden = makeWorkbook(rows, (_sheet, book) => {
+    book.Workbook = { Sheets: [{ Hidden: 1 }] }
+  })
+  expect((await readBook(hidden)).remarks?.map(({ says }) => says)).toEqual([
+    'Hidden in the results table: the sheet "results". It was read with the rest; check whether it belongs to the results.',
+  ])
+})

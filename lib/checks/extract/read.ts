@@ -21,7 +21,9 @@ export function read(laidOut: LaidOut, table: ReadTable | null, rules: HouseRule
     scope.control === null ? [] : [{ name: scope.control, sentence }],
   )
   const inTables = readPdfTables(laidOut, alpha.value, controls)
-  const inResults = table ? readResultsTable(table, alpha.value) : { reports: [], statistics: [] }
+  const inResults = table
+    ? readResultsTable(table, alpha.value)
+    : { reports: [], statistics: [], remarks: [] }
   const names = collectNames([...inTables.reports, ...inResults.reports], laidOut.tables)
   const inText = readProse(
     laidOut,
@@ -40,6 +42,7 @@ export function read(laidOut: LaidOut, table: ReadTable | null, rules: HouseRule
       claims,
     ),
     statistics: parts.flatMap(({ statistics }) => statistics),
+    tableRemarks: inResults.remarks,
   })
 }
 

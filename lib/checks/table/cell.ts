@@ -49,6 +49,10 @@ export function isMark(cell: string): boolean {
   return new RegExp(String.raw`^(?:${MARK}|\(\s?n\.?s\.?\s?\))$`).test(fold(cell).trim())
 }
 
+/** What stands for a missing value: '–', '-', '.', 'NA', 'n/a', 'n.a.', 'NaN', '#N/A', '#DIV/0!', 'null', 'missing'. */
+export const isMissing = (cell: string): boolean =>
+  /^(?:[-–—−.]{1,3}|#?n\/a!?|n\.\s?a\.?|NA|nan|null|none|missing|#[A-Z]+(?:\/0)?[!?])$/i.test(cell.trim())
+
 export const isNotSignificantMark = (mark: string): boolean => /^\(?n/i.test(mark)
 
 /** 'yes', 'no', 'TRUE', 'significant', 'not significant', '*', 'n.s.', 'reject' as a call. */

@@ -1,9 +1,10 @@
 import { printedInterval } from '../numbers/printed-interval'
 import type { Box, ReadReport, ReadStatistic, SectionKind } from '../types'
-import type { Call, Scale, Source } from '../vocabulary'
+import type { Call, NamedRole, Scale, Source } from '../vocabulary'
 import { isMark, readLegend, readNumber, readP, type Legend, type PCell } from './cell'
 import { callOfMark, callOfRow, markOf, toValue } from './marks'
 import type { Control } from './pdf-table'
+import { toColumnRole } from './named-role'
 import { findRoles, type ColumnRole } from './roles'
 import { controlOf, findControl, nameRow, pairOfLabel, spanOf, type RowNames } from './row-names'
 import { statedScale } from './stated-scale'
@@ -44,15 +45,28 @@ export type Reader = {
 
 /** Reports and statistics of one table, a row for each comparison or outcome. Ids are provisional. */
 export function readGrid(grid: Grid, controls: readonly Control[] = []): Part {
+  return readRows(makeReader(grid, controls))
+}
+
+/** What a table as a whole is taken for. `named`: by column, the role that a person gave it, which is obeyed. */
+export function makeReader(
+  grid: Grid,
+  controls: readonly Control[] = [],
+  named: ReadonlyMap<number, NamedRole> = new Map(),
+): Reader {
   const columns = grid.headers.map((header, c) => ({
     header,
     cells: grid.rows.map(({ cells }) => cells[c] ?? ''),
   }))
-  const roles = findRoles(columns)
   const around = `${grid.caption} ${grid.notes}`
-  const reader: Reader = {
+  const roles = findRoles(columns).map((role, c) => {
+    const header = grid.headers[c] ?? ''
+    const name = named.get(c)
+    return name === undefined ? statedScale(role, around, header) : toColumnRole(name, header, role)
+  })
+  return {
     grid,
-    roles: roles.map((role, c) => statedScale(role, around, grid.headers[c] ?? '')),
+    roles,
     legend: readLegend(around),
     df: findDf(around),
     control:
@@ -62,6 +76,11 @@ export function readGrid(grid: Grid, controls: readonly Control[] = []): Part {
       cells.some((cell) => /[*†‡]/.test(readP(cell)?.mark ?? readNumber(cell)?.mark ?? '')),
     ),
   }
+}
+
+/** The rows of a table, read by the roles of its columns. */
+export function readRows(reader: Reader): Part {
+  const { grid } = reader
   const part: Part = { reports: [], statistics: [] }
   let heading: string | null = null
   for (const row of grid.rows) {
@@ -127,6 +146,7 @@ function readStatistic(
     report: null,
     offset: grid.offset,
     table: grid.table,
+    cell: { row: row.index, column },
     sentence,
   })
 }

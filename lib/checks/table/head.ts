@@ -1,9 +1,9 @@
 import { fold } from '../extract/grammar/fold'
-import { isMark, readNumber, readP } from './cell'
+import { isMark, isMissing, readCall, readNumber, readP } from './cell'
 
 /** Words by which a line is told to be one of heads: 'p', 't', 'df', 'SE', 'Comparison', 'Group A', 'n', 'mean', 'P adj'. */
 const HEAD =
-  /^(?:p|q|t|F|z|r|n|N|df|d\.f\.|DF|FG|SE|SD|sd|se|m|M|χ2|U|W|H)$|^(?:p|q|adj|raw|sig|t|f|z|chi|num|den|std|diff|mean|median|estimate|compar|contrast|pair|group|treatment|outcome|measure|variable|gene|region|behavio|end-?point|statistic|n\b|ci\b|95|lower|upper|holm|bonf|tukey|fdr|significan|result|condition|effect|term|grade|stream|test)/i
+  /^(?:p|q|t|F|z|r|n|N|df|d\.f\.|DF|FG|SE|SD|sd|se|m|M|χ2|U|W|H)$|^(?:[pqtfz](?![a-z])|p[\s._-]?(?:val|adj|corr|raw|bonf|holm|fdr)|prob|q[\s._-]?val|adj|raw|sig|chi|num|den|std|diff|mean|median|estimate|compar|contrast|pair|group|treatment|outcome|measure|variable|gene|region|behavio|end-?point|statistic|n\b|ci\b|95|lower|upper|holm|bonf|tukey|fdr|significan|result|condition|effect|term|grade|stream|test)/i
 
 /** Whether a cell of a line looks like the head of a column. */
 export const roleIsKnown = (cell: string): boolean => HEAD.test(fold(cell).trim())
@@ -18,3 +18,25 @@ export function isHeadLine(cells: readonly string[]): boolean {
   if (filled.some((cell) => readNumber(cell) !== null || readP(cell) !== null || isMark(cell))) return false
   return filled.filter((cell) => PLAIN_HEAD.test(cell)).length >= 2
 }
+
+/** Whether a line of a results table is one of heads: two or more words, no number and no mark, a known head among them. */
+export function isHead(cells: readonly string[]): boolean {
+  const filled = cells.filter((cell) => cell !== '')
+  return (
+    filled.length >= 2 &&
+    !filled.some((cell) => holdsNumber(cell) || isMissing(cell)) &&
+    filled.some(roleIsKnown)
+  )
+}
+
+/** A head may say 'significant' or 'Sig.', but holds no number and no mark. */
+export const holdsNumber = (cell: string): boolean =>
+  readNumber(cell) !== null || readP(cell) !== null || isMark(cell)
+
+/** Numbers, p-values, marks, calls and signs for missing values are data. */
+export const holdsData = (cell: string): boolean =>
+  holdsNumber(cell) || isMissing(cell) || (readCall(cell) !== null && cell.length > 1)
+
+/** Whether a line of heads says what single columns hold: 'p', 't', 'df', 'SE', 'Std. Error'. */
+export const namesColumns = (cells: readonly string[]): boolean =>
+  cells.some((cell) => PLAIN_HEAD.test(fold(cell).trim()))

@@ -3,7 +3,7 @@ import { fold } from '../extract/grammar/fold'
 import { splitPair } from '../extract/grammar/comparison'
 import { findProcedures } from '../extract/grammar/procedure'
 import { parseDf } from '../extract/grammar/statistic'
-import { isMark, readCall, readNumber, readP } from './cell'
+import { isMark, isMissing, readCall, readNumber, readP } from './cell'
 
 /**
  * What a column of a table holds. `p`: p-values on a scale, by a procedure where the head names one; `df.index`:
@@ -83,13 +83,17 @@ function roleOf({ header, cells }: Column): ColumnRole {
     .replace(/[*†‡§#]+$/, '')
     .replace(/\s+/g, ' ')
     .trim()
-  const filled = cells.filter((cell) => cell.trim() !== '')
+  const all = cells.filter((cell) => cell.trim() !== '')
+  // signs for a missing value say nothing of a column; one of nothing else is judged by them
+  const given = all.filter((cell) => !isMissing(cell))
+  const filled = given.length > 0 ? given : all
   const share = (test: (cell: string) => boolean) =>
     filled.length === 0 ? 0 : filled.filter(test).length / filled.length
   const isP = (cell: string) => readP(cell) !== null
   if (share(isMark) >= 0.99 && filled.length > 0) return { kind: 'stars' }
   if (
-    share((cell) => readCall(cell) !== null) >= 0.8 &&
+    all.length > 0 &&
+    all.filter((cell) => readCall(cell) !== null).length / all.length >= 0.8 &&
     /sig|reject|differ|call|different|result|conclusion|summary|thresh|decision|^$/i.test(head)
   )
     return { kind: 'call' }
@@ -100,14 +104,24 @@ function roleOf({ header, cells }: Column): ColumnRole {
   ) {
     if (share((cell) => isP(cell) || isMark(cell)) >= 0.5) return toP(head)
   }
-  const test = STATISTIC_HEADS.find(([, form]) => form.test(last) || form.test(head))
+  const test =
+    STATISTIC_HEADS.find(([, form]) => form.test(last)) ??
+    // an upper line says it only where the lowest says nothing: 't test | df' holds degrees of freedom
+    (plainKind(last, last, share) === 'other'
+      ? STATISTIC_HEADS.find(([, form]) => form.test(head))
+      : undefined)
   if (test && share((cell) => readNumber(cell) !== null) >= 0.5) {
-    const inside =
-      /[([_]\s?\{?([^)\]}]*\d[^)\]}]*)/.exec(last) ??
-      /^[A-Za-zχ]+\s?(\d[\d.,;\s]*)$/.exec(test[0] === 'chi2' ? '' : last)
-    return { kind: 'statistic', test: test[0], df: inside?.[1] ? (parseDf(inside[1], test[0]) ?? []) : [] }
+    return { kind: 'statistic', test: test[0], df: dfOfHead(last, test[0]) }
   }
   return { kind: plainKind(head, last, share) } as ColumnRole
+}
+
+/** The degrees of freedom printed in a head: 't(28)', 't_28', 'F(2, 57)', 't 28'; [] where there are none. */
+export function dfOfHead(head: string, test: Test): number[] {
+  const inside =
+    /[([_]\s?\{?([^)\]}]*\d[^)\]}]*)/.exec(head) ??
+    /^[A-Za-zχ]+\s?(\d[\d.,;\s]*)$/.exec(test === 'chi2' ? '' : head)
+  return inside?.[1] ? (parseDf(inside[1], test) ?? []) : []
 }
 
 const PLAIN: readonly (readonly [
@@ -189,10 +203,14 @@ function pairGroups(columns: readonly Column[], roles: ColumnRole[]): void {
 }
 
 function toP(head: string): ColumnRole {
-  const scale: Scale = RAW_HEAD.test(head) ? 'raw' : ADJUSTED_HEAD.test(head) ? 'adjusted' : 'unknown'
+  const own = lastPart(head)
+  const scale: Scale = scaleOf(own) ?? scaleOf(head) ?? 'unknown'
   const procedure = scale === 'adjusted' ? (findProcedures(head)[0]?.procedure ?? namedShort(head)) : null
   return { kind: 'p', scale, procedure }
 }
+
+const scaleOf = (head: string): Scale | null =>
+  RAW_HEAD.test(head) ? 'raw' : ADJUSTED_HEAD.test(head) ? 'adjusted' : null
 
 /** 'p_bonf', 'p_holm', 'pB', 'p.adj (BH)' name the procedure by a short form. */
 function namedShort(head: string): ClaimedProcedure | null {
@@ -204,7 +222,7 @@ function namedShort(head: string): ClaimedProcedure | null {
 }
 
 /** Of a head in several lines only the lowest says what the column holds. */
-function lastPart(head: string): string {
+export function lastPart(head: string): string {
   return head.split(' | ').pop()?.trim() ?? head
 }
 

@@ -5,6 +5,7 @@ import type { ReadStatistic } from '../types'
 import type { Test } from '../vocabulary'
 import { readNumber } from './cell'
 import type { Grid, GridRow, Reader } from './grid'
+import type { ColumnRole } from './roles'
 
 /** The statistic of one cell, with the degrees of freedom from wherever the table states them; null where it holds none. */
 export function toStatistic(
@@ -38,9 +39,7 @@ function dfOfRow({ grid, roles, df }: Reader, row: GridRow, column: number, test
   if (test === 'z' || test === 'other') return []
   const at = (c: number, from = row) => readNumber(from.cells[c] ?? '')?.value ?? null
   const columns = roles.flatMap((role, c) => (role.kind === 'df' ? [{ c, index: role.index }] : []))
-  const since = roles.slice(0, column).findLastIndex(({ kind }) => kind === 'statistic')
-  const before = columns.filter(({ c }) => c < column && c > since)
-  const near = before.length > 0 ? before : columns
+  const near = nearColumns(roles, columns, column)
   const first = near.filter(({ index }) => index === 0).pop() ?? near[near.length - 1]
   const own = first === undefined ? null : at(first.c)
   if (own !== null && first) {
@@ -50,6 +49,8 @@ function dfOfRow({ grid, roles, df }: Reader, row: GridRow, column: number, test
     const error = second ? at(second.c) : residualDf(grid, row, first.c, at)
     return error === null ? (df.length === 2 ? df : []) : [own, error]
   }
+  const both = first && test === 'F' ? PAIR_OF_DF.exec((row.cells[first.c] ?? '').trim()) : null
+  if (both) return [Number(both[1]), Number(both[2])]
   if (test === 'r') {
     const n = roles.findIndex((role) => role.kind === 'n')
     const count = n < 0 ? null : at(n)
@@ -58,6 +59,28 @@ function dfOfRow({ grid, roles, df }: Reader, row: GridRow, column: number, test
     if (all) return [Number(all) - 2]
   }
   return df.length === (test === 'F' ? 2 : 1) ? df : []
+}
+
+/** '2, 38', '2/38', '(2; 57.5)' in a column of degrees of freedom. */
+const PAIR_OF_DF = /^\(?(\d+)\s?(?:,\s|[;/])\s?(\d+(?:\.\d+)?)\)?$/
+
+/**
+ * The columns of df that stand with a statistic: those right before it where df come first in the table, else those
+ * between it and the next statistic; all, where none stand there.
+ */
+function nearColumns<C extends { c: number }>(
+  roles: readonly ColumnRole[],
+  columns: readonly C[],
+  column: number,
+): readonly C[] {
+  const statistics = roles.flatMap(({ kind }, c) => (kind === 'statistic' ? [c] : []))
+  const since = statistics.findLast((c) => c < column) ?? -1
+  const until = statistics.find((c) => c > column) ?? roles.length
+  const before = columns.filter(({ c }) => c < column && c > since)
+  const after = columns.filter(({ c }) => c > column && c < until)
+  const leading = (columns[0]?.c ?? 0) < (statistics[0] ?? 0)
+  const near = leading || after.length === 0 ? before : after
+  return near.length > 0 ? near : columns
 }
 
 /** The df of the next line of residuals below the row, else of any. */

@@ -1,10 +1,15 @@
 import type { Bench } from '../../families/case'
-import type { LaidOut } from '../../types'
+import type { LaidOut, Reading } from '../../types'
 import type { Found, RuleRow } from '../finding'
 
 /** A note to the reviewer: something to look at with one's own eyes. */
-function find({ laidOut }: Bench): Found[] {
-  return [...findUnread(laidOut), ...findRecognised(laidOut), ...findRemarks(laidOut)]
+function find({ laidOut, reading }: Bench): Found[] {
+  return [
+    ...findUnread(laidOut),
+    ...findRecognised(laidOut),
+    ...findRemarks(laidOut),
+    ...findTableRemarks(reading),
+  ]
 }
 
 function findUnread({ unread }: LaidOut): Found[] {
@@ -31,6 +36,11 @@ function findRecognised({ recognised = [] }: LaidOut): Found[] {
 
 function findRemarks({ remarks = [] }: LaidOut): Found[] {
   return remarks.map(({ says, asks }) => ({ ...note, place: null, says, asks }))
+}
+
+/** A cell that a spreadsheet made a date of, rows that are hidden: see lib/checks/table. */
+function findTableRemarks({ tableRemarks = [] }: Reading): Found[] {
+  return tableRemarks.map((remark) => ({ ...note, ...remark }))
 }
 
 const note = { severity: 'note', family: null, reports: [], cites: [] } satisfies Partial<Found>
