@@ -44,9 +44,11 @@ export function readNumber(cell: string): (PrintedNumber & { mark: string }) | n
   return parsed ? { ...parsed, mark: (groups?.mark ?? '').replace(/[\s^{}]/g, '') } : null
 }
 
+const LONE_MARK = new RegExp(String.raw`^(?:${MARK}|\(\s?n\.?s\.?\s?\))$`)
+
 /** Cells that hold only a mark: '*', '***', '†', 'n.s.', 'ns'. */
 export function isMark(cell: string): boolean {
-  return new RegExp(String.raw`^(?:${MARK}|\(\s?n\.?s\.?\s?\))$`).test(fold(cell).trim())
+  return LONE_MARK.test(fold(cell).trim())
 }
 
 /** What stands for a missing value: '–', '-', '.', 'NA', 'n/a', 'n.a.', 'NaN', '#N/A', '#DIV/0!', 'null', 'missing'. */

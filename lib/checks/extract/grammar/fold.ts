@@ -36,12 +36,16 @@ const PLAIN_DIGIT = new Map(
   ),
 )
 
+/** Plain characters alone, which stand for themselves: 'A vs B', '0.032*'; a tab and a back quote do not. */
+const PLAIN = /^[\x20-\x5f\x61-\x7e]*$/
+
 /**
  * The text in plain characters, same length as before: one minus, one dash, plain spaces, plain digits for
  * superscript and subscript ones, a point for the middle dot between digits ('0·03'), letters for the
  * mathematical italics ('𝑝'). Every offset into the result is an offset into `text`.
  */
 export function fold(text: string): string {
+  if (PLAIN.test(text)) return text
   return (
     text
       // mathematical italic and sans letters, 𝐀 … 𝟿: the letter and a blank for the second half
