@@ -15,6 +15,7 @@ import { ValueText } from '../ui/value-text'
 import type { CalculatorInput } from './calculator-input'
 import { outcomeOf, standOf, wordsOf } from './judge-entry'
 import { shortNameOf } from './short-names'
+import { MOST_FOR_OWN_RANGES } from './summarize-input'
 import { Toolbar } from './toolbar'
 import { count } from './work-out'
 
@@ -79,6 +80,12 @@ export function GroupsResults({ groups: given, summary, input }: GroupsResultsPr
           )}
         </dd>
       </dl>
+      {groups.length > MOST_FOR_OWN_RANGES && (
+        <p className="text-sm text-ink-soft">
+          Games–Howell takes a range of its own for every pair and is computed here for up to{' '}
+          {MOST_FOR_OWN_RANGES} groups.
+        </p>
+      )}
       <div className="overflow-x-auto" role="region" aria-label="Comparisons" tabIndex={0}>
         <Table stacks caption="Comparisons between the groups">
           <Thead>

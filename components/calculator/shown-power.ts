@@ -1,5 +1,5 @@
 import { compareProcedurePower, type ProcedurePower } from '@/lib/checks/sensitivity/compare-power'
-import { powerOfTTest, sampleSizeOfTTest } from '@/lib/checks/sensitivity/power'
+import { computePower, findSampleSize } from '@/lib/checks/sensitivity/power-of-design'
 import type { CalculatorInput } from './calculator-input'
 import { readBetween, readWhole } from './read-settings'
 import { findGroups } from './shown-beside'
@@ -61,13 +61,14 @@ export function getPower({
 }
 
 function rowOfPaired(procedure: 'none' | 'bonferroni', n: number, effect: number, level: number): PowerRow {
-  const power = powerOfTTest('paired', n, effect, level)
+  const design = { design: 'paired', effect, alpha: level } as const
+  const power = computePower({ ...design, n })
   return {
     procedure,
     criticalValue: null,
     perTestLevel: level,
     power,
     bounds: { low: power, high: power },
-    nFor80: sampleSizeOfTTest('paired', 0.8, effect, level),
+    nFor80: findSampleSize({ ...design, power: 0.8 }).whole,
   }
 }

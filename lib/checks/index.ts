@@ -68,7 +68,6 @@ export {
   protectedLsdError,
   type DependenceOptions,
 } from './sensitivity/family-wise-error'
-export { powerCost, powerOfTTest, sampleSizeOfTTest, type PowerDesign } from './sensitivity/power'
 export {
   computeCorrectionCost,
   computePower,

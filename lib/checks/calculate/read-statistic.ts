@@ -23,7 +23,6 @@ export function readStatisticP(
   if (test === 'other' || relation !== '=' || df.length !== DF_COUNT[test]) return null
   if (df.some((one) => !(one > 0))) return null
   const directed = sides !== 'two-sided' && (test === 't' || test === 'z' || test === 'r')
-  const sign = sides === 'less' ? -1 : 1
   const given = roundingInterval(value, decimals)
   const print: EntryStatistic = {
     test,
@@ -33,13 +32,9 @@ export function readStatisticP(
     sides: directed ? sides : 'two-sided',
     alone: true,
   }
-  if (!directed) {
-    const { low, high } = pBounds(test, given.low, given.high, df)
-    return { value: tail(test, clipTo(test, value), df), low, high, statistic: print }
-  }
-  const [low, high] = sign === 1 ? [given.low, given.high] : [-given.high, -given.low]
-  const upper = (x: number) => tail(test, clipTo(test, x), df, 1)
-  return { value: upper(sign * value), low: upper(high), high: upper(low), statistic: print }
+  const { low, high } = pBounds(test, given.low, given.high, df, directed ? sides : 2)
+  const at = clipTo(test, sides === 'less' && directed ? -value : value)
+  return { value: tail(test, at, df, directed ? 1 : 2), low, high, statistic: print }
 }
 
 function clipTo(test: PrintedStatistic['test'], value: number): number {
