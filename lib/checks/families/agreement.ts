@@ -9,8 +9,21 @@ export function rangeOfStatistic({ value, decimals }: ReadStatistic): Interval {
   return { low: Math.max(0, size - half), high: size + half }
 }
 
+type AsT = { test: string; df: number | undefined; range: Interval }
+
+/** A statistic is compared with many others. */
+const compared = new WeakMap<ReadStatistic, AsT>()
+
+function asT(statistic: ReadStatistic): AsT {
+  const known = compared.get(statistic)
+  if (known) return known
+  const made = makeT(statistic)
+  compared.set(statistic, made)
+  return made
+}
+
 /** F with one numerator degree of freedom is t squared: both are compared as t. */
-function asT(statistic: ReadStatistic): { test: string; df: number | undefined; range: Interval } {
+function makeT(statistic: ReadStatistic): AsT {
   const range = rangeOfStatistic(statistic)
   if (statistic.test === 'F' && statistic.df[0] === 1)
     return {

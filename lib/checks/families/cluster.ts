@@ -66,11 +66,15 @@ function splitBlock(items: readonly Item[]): Cluster[] {
 
 /** Whether one pair stands for several tests: two outcomes, or two values that contradict. */
 function isRepeated(items: readonly Item[]): boolean {
-  return items.some((a, i) =>
-    items.some(
-      (b, j) => j > i && a.pair?.join('|') === b.pair?.join('|') && isOther(a, b) && agreement(a, b) !== true,
-    ),
-  )
+  const byPair = new Map<string, Item[]>()
+  for (const item of items) {
+    const pair = item.pair?.join('|') ?? ''
+    const alike = byPair.get(pair) ?? []
+    byPair.set(pair, alike)
+    if (alike.some((other) => isOther(other, item) && agreement(other, item) !== true)) return true
+    alike.push(item)
+  }
+  return false
 }
 
 function isOther(a: Item, b: Item): boolean {
@@ -80,13 +84,16 @@ function isOther(a: Item, b: Item): boolean {
 function splitByOutcome(items: readonly Item[]): Item[][] {
   if (!isRepeated(items)) return items.length > 0 ? [[...items]] : []
   const parts: { outcome: string | null; items: Item[] }[] = []
+  // Parts are only added behind: the first one that an outcome fits stays the first.
+  const partOf = new Map<string | null, { items: Item[] }>()
   for (const item of items) {
-    const part = parts.find(
-      ({ outcome }) =>
-        outcome === item.outcome || (outcome && item.outcome && isSameName(outcome, item.outcome)),
-    )
-    if (part) part.items.push(item)
-    else parts.push({ outcome: item.outcome, items: [item] })
+    const part =
+      partOf.get(item.outcome) ??
+      parts.find(({ outcome }) => outcome && item.outcome && isSameName(outcome, item.outcome))
+    const into: { items: Item[] } = part ?? { items: [] }
+    if (!part) parts.push({ outcome: item.outcome, items: into.items })
+    partOf.set(item.outcome, into)
+    into.items.push(item)
   }
   return parts.map((part) => part.items)
 }
@@ -133,14 +140,20 @@ function nameTest(kind: Cluster['kind'], { pair, outcome }: Shown): string | nul
 }
 
 function isSameTest(kind: Cluster['kind'], comparison: Comparison, item: Item): boolean {
-  if (kind === 'pairs') return comparison.pair?.join('|') === item.pair?.join('|')
+  if (kind === 'pairs') return isSamePair(comparison.pair, item.pair)
   if (comparison.outcome === null || item.outcome === null) return false
-  const votes = comparison.items.map((other) => agreement(other, item))
-  // one name in two sentences with two values is two tests; with a table the name decides
-  const inProse = [item, ...comparison.items].every(({ report }) => report.place.source === 'text')
-  if (comparison.outcome === item.outcome) return !inProse || !votes.includes(false)
+  const agrees = (verdict: boolean) => comparison.items.some((other) => agreement(other, item) === verdict)
+  if (comparison.outcome === item.outcome) {
+    // one name in two sentences with two values is two tests; with a table the name decides
+    const inProse = [item, ...comparison.items].every(({ report }) => report.place.source === 'text')
+    return !inProse || !agrees(false)
+  }
   const apart = comparison.items.some((other) => other.block === item.block)
-  return !apart && votes.includes(true) && isSameName(comparison.outcome, item.outcome)
+  return !apart && agrees(true) && isSameName(comparison.outcome, item.outcome)
+}
+
+function isSamePair(a: Comparison['pair'], b: Comparison['pair']): boolean {
+  return a === b || (a !== null && b !== null && a[0] === b[0] && a[1] === b[1])
 }
 
 /** Another column of one scale is another test; so is another row, where no pair says that it is the same. */
@@ -182,17 +195,48 @@ function belongTogether(a: Cluster, b: Cluster): boolean {
   if (a.kind !== b.kind) return false
   let agree = 0
   let contradict = 0
+  const pairs = a.kind === 'pairs' ? indexPairs(b) : null
   for (const one of a.comparisons) {
-    for (const other of b.comparisons) {
+    const candidates = pairs ? (pairs.get(one.pair?.join('|')) ?? []) : b.comparisons
+    for (const other of candidates) {
       const shared = other.items[0] && isSameTest(a.kind, one, other.items[0])
       if (!shared) continue
-      const votes = one.items.flatMap((x) => other.items.map((y) => agreement(x, y)))
-      if (votes.includes(true)) agree += 1
-      else if (votes.includes(false)) contradict += 1
+      const verdict = agreementOf(one, other)
+      if (verdict === true) agree += 1
+      else if (verdict === false) contradict += 1
       else agree += 0.5
     }
   }
   return agree > contradict
+}
+
+/** True where any of their prints agree, false where some contradict and none agrees, null where none can be compared. */
+function agreementOf(one: Comparison, other: Comparison): boolean | null {
+  let contradicts = false
+  for (const x of one.items)
+    for (const y of other.items) {
+      const verdict = agreement(x, y)
+      if (verdict === true) return true
+      contradicts ||= verdict === false
+    }
+  return contradicts ? false : null
+}
+
+const indexed = new WeakMap<Cluster, Map<string | undefined, Comparison[]>>()
+
+/** Comparisons by the pair of their first item. A cluster that is being placed does not change meanwhile. */
+function indexPairs(cluster: Cluster): Map<string | undefined, Comparison[]> {
+  const known = indexed.get(cluster)
+  if (known) return known
+  const byPair = new Map<string | undefined, Comparison[]>()
+  for (const comparison of cluster.comparisons) {
+    const pair = comparison.items[0]?.pair?.join('|')
+    const alike = byPair.get(pair) ?? []
+    byPair.set(pair, alike)
+    alike.push(comparison)
+  }
+  indexed.set(cluster, byPair)
+  return byPair
 }
 
 /** Items that name neither pair nor outcome: by their numbers where these identify them, else with their neighbours. */

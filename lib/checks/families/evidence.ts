@@ -82,7 +82,9 @@ export function readSeries(
   comparisons.forEach((comparison, at) => {
     for (const item of comparison.items) {
       const key = `${item.report.place.source} ${item.report.scale}`
-      series.set(key, [...(series.get(key) ?? []), { item, at }])
+      const members = series.get(key) ?? []
+      series.set(key, members)
+      members.push({ item, at })
     }
   })
   return [...series.values()].flatMap((members) => {
@@ -101,18 +103,13 @@ function tell(
   expected: Expected,
   oneSidedStated: boolean,
 ): Pick<Series, 'is' | 'checked' | 'agreeing' | 'telling'> {
+  const truthsOf = makeTruths()
   const votes = { raw: 0, adjusted: 0, oneSided: 0, checked: 0, rawOnly: 0, adjustedOnly: 0, oneSidedOnly: 0 }
   for (const { item, at } of members) {
     const comparison = comparisons[at]
     if (!comparison || item.report.markOnly) continue
     const printed = rangeOfReport(item.report)
-    const others = comparison.items.filter(
-      ({ report }) => report.scale === 'raw' && report.place.source !== item.report.place.source,
-    )
-    const truths = [
-      ...statisticsOf(comparison).flatMap((statistic) => rangeOfP(statistic) ?? []),
-      ...others.map(({ report }) => rangeOfReport(report)),
-    ]
+    const { truths, halves } = truthsOf(comparison, item.report.place.source)
     if (truths.length === 0) continue
     votes.checked += 1
     const raw = truths.some((range) => overlaps(range, printed))
@@ -120,7 +117,7 @@ function tell(
       const range = ranges[at]
       return range ? overlaps(widen(range), printed) : false
     })
-    const half = halfOf(comparison).some((range) => overlaps(range, printed))
+    const half = halves.some((range) => overlaps(range, printed))
     votes.raw += raw ? 1 : 0
     votes.adjusted += adjusted ? 1 : 0
     votes.oneSided += half ? 1 : 0
@@ -140,6 +137,31 @@ function tell(
   if (!telling && checked > 0 && votes.raw === checked)
     return { is: 'unknown', checked, agreeing: checked, telling }
   return { is: 'unknown', checked, agreeing: Math.max(votes.raw, votes.adjusted), telling: false }
+}
+
+type Truths = { truths: Interval[]; halves: Interval[] }
+
+/** What a comparison's p can be by its statistics and by other sources' raw values; made once for its duplicates. */
+function makeTruths(): (comparison: Comparison, source: ReadReport['place']['source']) => Truths {
+  const known = new Map<Comparison, Map<string, Truths>>()
+  return (comparison, source) => {
+    const bySource = known.get(comparison) ?? new Map<string, Truths>()
+    known.set(comparison, bySource)
+    const found = bySource.get(source)
+    if (found) return found
+    const others = comparison.items.filter(
+      ({ report }) => report.scale === 'raw' && report.place.source !== source,
+    )
+    const made = {
+      truths: [
+        ...statisticsOf(comparison).flatMap((statistic) => rangeOfP(statistic) ?? []),
+        ...others.map(({ report }) => rangeOfReport(report)),
+      ],
+      halves: halfOf(comparison),
+    }
+    bySource.set(source, made)
+    return made
+  }
 }
 
 /** Printed values of simulation-based and unbalanced procedures differ in the third digit. */

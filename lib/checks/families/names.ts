@@ -1,8 +1,26 @@
+/** Forms of names that were asked for before: in a long table each name is compared with every other. */
+const forms = new Map<string, string>()
+const splits = new Map<string, readonly string[]>()
+const mostKept = 20_000
+
+function recall<T>(kept: Map<string, T>, name: string, make: (name: string) => T): T {
+  const known = kept.get(name)
+  if (known !== undefined) return known
+  if (kept.size >= mostKept) kept.clear()
+  const made = make(name)
+  kept.set(name, made)
+  return made
+}
+
 /**
  * A group's or outcome's name in the form in which names are compared: lower case, one kind of dash and space, no
  * article, no closing punctuation, no bracketed remark.
  */
 export function normaliseName(name: string): string {
+  return recall(forms, name, makeForm)
+}
+
+function makeForm(name: string): string {
   return (
     name
       .normalize('NFKC')
@@ -19,10 +37,12 @@ export function normaliseName(name: string): string {
 }
 
 /** The words of a name; signs such as "+" and "-20" are kept, as they tell names apart. */
-export function wordsOf(name: string): string[] {
-  return normaliseName(name)
-    .split(/[\s/]+/)
-    .filter((word) => word !== '')
+export function wordsOf(name: string): readonly string[] {
+  return recall(splits, name, () =>
+    normaliseName(name)
+      .split(/[\s/]+/)
+      .filter((word) => word !== ''),
+  )
 }
 
 /** Plural and hyphen do not tell two names apart; in the plural the name stays itself. */

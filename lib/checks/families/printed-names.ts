@@ -9,7 +9,9 @@ export function findPrintedNames(names: readonly string[], prose: string): (form
   const printings = new Map<string, string[]>()
   for (const name of names) {
     const form = normaliseName(name)
-    printings.set(form, [...(printings.get(form) ?? []), trimName(name)])
+    const printed = printings.get(form) ?? []
+    printings.set(form, printed)
+    printed.push(trimName(name))
   }
   const found = new Map<string, string>()
   return (form) => {

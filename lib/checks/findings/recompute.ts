@@ -19,6 +19,17 @@ export type Checked = {
 
 /** Every raw p-value that can be recomputed; duplicates of one print in several places are checked once. */
 export function listChecked(bench: Bench): Checked[] {
+  const known = checkedOf.get(bench)
+  if (known) return known
+  const checked = checkAll(bench)
+  checkedOf.set(bench, checked)
+  return checked
+}
+
+/** Several rules ask for the same. */
+const checkedOf = new WeakMap<Bench, Checked[]>()
+
+function checkAll(bench: Bench): Checked[] {
   const statisticOf = new Map(bench.reading.statistics.map((statistic) => [statistic.id, statistic] as const))
   const seen = new Set<string>()
   return bench.reading.reports.flatMap((report) => {
@@ -39,10 +50,21 @@ export function listChecked(bench: Bench): Checked[] {
   })
 }
 
-function caseOf(report: ReadReport, { cases }: Bench): Case | null {
-  const holds = ({ comparisons }: Case) =>
-    comparisons.some(({ items }) => items.some((item) => item.report.id === report.id))
-  return cases.find(holds) ?? null
+const caseByReport = new WeakMap<Bench, Map<string, Case>>()
+
+/** The first family that a report is a member of. */
+function caseOf(report: ReadReport, bench: Bench): Case | null {
+  const known = caseByReport.get(bench) ?? indexCases(bench)
+  caseByReport.set(bench, known)
+  return known.get(report.id) ?? null
+}
+
+function indexCases({ cases }: Bench): Map<string, Case> {
+  const byReport = new Map<string, Case>()
+  for (const one of cases)
+    for (const { items } of one.comparisons)
+      for (const { report } of items) if (!byReport.has(report.id)) byReport.set(report.id, one)
+  return byReport
 }
 
 /**
