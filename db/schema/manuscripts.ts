@@ -89,6 +89,10 @@ export const files = sqliteTable(
     createdAt: at('created_at').notNull(),
     /** A replaced file is kept; the newest one of a kind that is not replaced counts. */
     replacedAt: at('replaced_at'),
+    /** Columns of a results table that a person named; null where nobody did. */
+    columnRoles: json('column_roles'),
+    /** Raised with every change of `columnRoles`, for two people at once. */
+    columnRolesRevision: integer('column_roles_revision').notNull().default(0),
   },
   (t) => [
     index('files_round_kind').on(t.roundId, t.kind),

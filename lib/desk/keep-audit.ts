@@ -50,10 +50,8 @@ export function keepAudit(
       })
       .where(eq(audits.id, auditId))
       .run()
-    if (at.awaited) {
-      raisePoints(tx, at.roundId, auditId, audit)
-      moveManuscript(tx, actor, at.manuscriptId, 'finish the audit', now)
-    }
+    if (at.awaited || at.renews) raisePoints(tx, at.roundId, auditId, audit)
+    if (at.awaited) moveManuscript(tx, actor, at.manuscriptId, 'finish the audit', now)
     recordEvent(tx, actor, 'audit finished', now, {
       manuscriptId: at.manuscriptId,
       subject: auditId,

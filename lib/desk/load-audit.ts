@@ -3,6 +3,9 @@ import type { Reader } from '@/db/client'
 import { audits, manuscripts, rounds } from '@/db/schema'
 import { refuse, refuseUnknown } from '@/lib/rules/refusal'
 import type { Actor } from '@/lib/rules/roles'
+import type { State } from '@/lib/rules/states'
+
+const RENEWED: readonly State[] = ['assigned', 'in review', 'verdict drafted']
 
 /**
  * For the worker: an audit, its manuscript, and whether it is the one the manuscript waits for. It is not when
@@ -34,5 +37,12 @@ export function loadAudit(tx: Reader, actor: Actor, auditId: string) {
     .limit(1)
     .get()
   const ended = row.status === 'done' || row.status === 'stuck'
-  return { ...row, ended, awaited: row.state === 'received' && newest?.id === auditId }
+  const isNewest = newest?.id === auditId
+  return {
+    ...row,
+    ended,
+    awaited: row.state === 'received' && isNewest,
+    // An audit made again while somebody reviews changes the points and not the state.
+    renews: RENEWED.includes(row.state) && isNewest,
+  }
 }

@@ -1,9 +1,10 @@
 import type { Audit, HouseRules } from '@/lib/checks/types'
+import type { TableFile } from './thread/messages'
 import { defaultLimits, runThread, type ReadingLimits } from './thread/run-thread'
 
 export type AuditFiles = {
   manuscript: string
-  table: { path: string; name: string } | null
+  table: TableFile | null
   rules: HouseRules
 }
 

@@ -4,6 +4,7 @@ import { audits, files, houseRulesVersions, rounds } from '@/db/schema'
 import type { AuditFiles } from '@/lib/intake/audit-files'
 import { getStoredPath } from '@/lib/intake/store/stored-path'
 import { houseRulesSchema } from '@/lib/rules/house-rules'
+import { parseNamedColumns } from '@/lib/rules/named-columns'
 import type { FileKind } from '@/lib/rules/words'
 
 /**
@@ -25,14 +26,20 @@ export function getAuditFiles(db: Db, uploads: string, auditId: string): AuditFi
   const { alpha, accepted, correctionFrom, secondaryApart } = houseRulesSchema.parse(round.body)
   return {
     manuscript: getStoredPath(uploads, manuscript.sha256),
-    table: table ? { path: getStoredPath(uploads, table.sha256), name: table.name } : null,
+    table: table
+      ? {
+          path: getStoredPath(uploads, table.sha256),
+          name: table.name,
+          roles: parseNamedColumns(table.columnRoles),
+        }
+      : null,
     rules: { alpha: round.alpha ?? alpha, accepted, correctionFrom, secondaryApart },
   }
 }
 
 function findFile(db: Db, roundId: string, kind: FileKind) {
   return db
-    .select({ sha256: files.sha256, name: files.name })
+    .select({ sha256: files.sha256, name: files.name, columnRoles: files.columnRoles })
     .from(files)
     .where(and(eq(files.roundId, roundId), eq(files.kind, kind), isNull(files.replacedAt)))
     .orderBy(desc(files.createdAt))

@@ -8,6 +8,7 @@ export const ACTIONS = [
   'discardDraft',
   'addFile',
   'removeFile',
+  'nameColumns',
   'handIn',
   'handInAgain',
   'withdrawManuscript',
@@ -56,6 +57,20 @@ export type Situation = {
   readonly openConflicts: boolean
 }
 
+/** States in which an audit of the round may be made again without taking a verdict's ground away. */
+export const NAMING_STATES: readonly State[] = ['received', 'stuck', 'ready', 'assigned', 'in review']
+
+/** The submitter while the files are theirs to change, a reviewer at work, an editor until a verdict is drafted. */
+function mayNameColumns(
+  can: (permission: Permission) => boolean,
+  begun: boolean,
+  atWork: boolean,
+  state: State,
+): boolean {
+  if (can('manuscript.replace-file')) return begun || state === 'stuck'
+  return atWork || (can('assignment.offer') && NAMING_STATES.includes(state))
+}
+
 export function listActions(actor: Actor, standing: Standing, at: Situation): Action[] {
   const can = (permission: Permission) => may(actor, permission, standing)
   const begun = at.state === 'draft' || (at.state === 'returned' && at.roundBegun)
@@ -65,6 +80,7 @@ export function listActions(actor: Actor, standing: Standing, at: Situation): Ac
     discardDraft: begun && can('draft.change'),
     addFile: (begun && can('draft.change')) || (at.state === 'stuck' && can('manuscript.replace-file')),
     removeFile: (begun && can('draft.change')) || (at.state === 'stuck' && can('manuscript.replace-file')),
+    nameColumns: can('table.name-columns') && mayNameColumns(can, begun, atWork, at.state),
     handIn:
       (at.state === 'draft' && can('manuscript.hand-in')) ||
       (at.state === 'returned' && at.roundBegun && can('manuscript.open-round')),

@@ -16,6 +16,7 @@ export const EVENTS = [
   'file removed',
   'file refused',
   'file read',
+  'columns named',
   'handed in',
   'audit finished',
   'audit stopped',

@@ -24,6 +24,7 @@ export const PERMISSIONS = {
   'draft.change': { submitter: own },
   'manuscript.hand-in': { submitter: own },
   'manuscript.replace-file': { submitter: own },
+  'table.name-columns': { submitter: own, reviewer: assigned, editor: any },
   'manuscript.withdraw': { submitter: own },
   'manuscript.open-round': { submitter: own },
   'manuscript.close': { editor: any },

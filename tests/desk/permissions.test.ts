@@ -23,6 +23,7 @@ import { invitePerson } from '@/lib/desk/invite-person'
 import { keepAudit } from '@/lib/desk/keep-audit'
 import { liftConflict } from '@/lib/desk/lift-conflict'
 import { movePoint } from '@/lib/desk/move-point'
+import { nameColumns } from '@/lib/desk/name-columns'
 import { offerAssignment } from '@/lib/desk/offer-assignment'
 import { openRound } from '@/lib/desk/open-round'
 import { releaseVerdict } from '@/lib/desk/release-verdict'
@@ -41,6 +42,7 @@ import type { State } from '@/lib/rules/states'
 import { declare, relate, RELATIONS, type Relation } from '../support/relate'
 import { makeSmallAudit } from '../support/small-audit'
 import {
+  addTableRow,
   dump,
   getNewestAudit,
   getRoundId,
@@ -60,6 +62,8 @@ type Row = {
   may: Partial<Record<Role, string>>
   /** What has to be there before, beside the manuscript; gives its id. */
   prepare?: (world: World, actor: Actor, manuscriptId: string) => string
+  /** Who is refused otherwise than as if there were nothing, and how. */
+  refused?: Record<string, string>
   try: Attempt
 }
 
@@ -85,6 +89,11 @@ function commentBy({ db, now }: World, author: Actor, manuscriptId: string): str
     })
     .run()
   return id
+}
+
+function nameOneColumn({ db, now }: World, actor: Actor, _manuscriptId: string, fileId: string) {
+  const columns = [{ sheet: 0, row: 0, column: 2, role: 'p-unadjusted' as const }]
+  return nameColumns(db, actor, { fileId, revision: 0, columns }, now())
 }
 
 function makeVerdictOwn({ db }: World, actor: Actor, manuscriptId: string): string {
@@ -132,6 +141,19 @@ const commands: Record<string, Row> = {
     may: { submitter: 'own' },
     try: (world, actor, manuscriptId) =>
       removeFile(world.db, actor, { fileId: fileOf(world, manuscriptId) }, world.now()),
+  },
+  'nameColumns of a draft': {
+    at: 'draft',
+    may: { submitter: 'own' },
+    prepare: (world, _, manuscriptId) => addTableRow(world.db, manuscriptId),
+    try: nameOneColumn,
+  },
+  'nameColumns of what is reviewed': {
+    at: 'in review',
+    may: { reviewer: 'assigned', editor: notBarred },
+    refused: { 'submitter own': 'conflict' },
+    prepare: (world, _, manuscriptId) => addTableRow(world.db, manuscriptId),
+    try: nameOneColumn,
   },
   handIn: {
     at: 'draft',
@@ -360,7 +382,9 @@ test.each(Object.entries(commands))('%s is done for whom the table names, and fo
   for (const role of ROLES) {
     for (const relation of RELATIONS) {
       const allowed = row.may[role]?.split(' ').includes(relation)
-      expected[`${role} ${relation}`] = allowed ? 'done' : 'not-found'
+      expected[`${role} ${relation}`] = allowed
+        ? 'done'
+        : (row.refused?.[`${role} ${relation}`] ?? 'not-found')
       found[`${role} ${relation}`] = attempt(row, people[role], relation)
     }
   }

@@ -14,6 +14,7 @@ import { draftVerdict } from '@/lib/desk/draft-verdict'
 import { endAssignment } from '@/lib/desk/end-assignment'
 import { handIn } from '@/lib/desk/hand-in'
 import { handInAgain } from '@/lib/desk/hand-in-again'
+import { nameColumns } from '@/lib/desk/name-columns'
 import { offerAssignment } from '@/lib/desk/offer-assignment'
 import { openRound } from '@/lib/desk/open-round'
 import { releaseVerdict } from '@/lib/desk/release-verdict'
@@ -27,6 +28,7 @@ import type { Actor } from '@/lib/rules/roles'
 import { STATES } from '@/lib/rules/states'
 import {
   addManuscriptFile,
+  addTableRow,
   makeManuscript,
   makePerson,
   makeWorld,
@@ -51,6 +53,17 @@ const attempts: Partial<Record<Action, Try>> = {
         mediaType: 'text/csv',
         sha256: 'd'.repeat(64),
         bytes: 9,
+      },
+      now(),
+    ),
+  nameColumns: ({ db, now }, actor, manuscriptId) =>
+    nameColumns(
+      db,
+      actor,
+      {
+        fileId: addTableRow(db, manuscriptId),
+        revision: 0,
+        columns: [{ sheet: 0, row: 0, column: 1, role: 'p' }],
       },
       now(),
     ),

@@ -9,18 +9,25 @@ import { decodeText, getDeclaredDelimiter, guessDelimiter, placeHeads } from './
 import { maxCells, maxColumns, maxRows, tooManyRows } from './limits'
 import { readWorkbook } from './workbook'
 
-/** Reads CSV, TSV or XLSX by its content. Rejects with a refusal `unreadable` or `too-large`. */
-export async function readTableFile(path: string, name = basename(path)): Promise<ReadTable> {
+/**
+ * Reads CSV, TSV or XLSX by its content. Rejects with a refusal `unreadable` or `too-large`. `firstRows`: as many of
+ * each sheet and no more, for a look at it.
+ */
+export async function readTableFile(
+  path: string,
+  name = basename(path),
+  firstRows?: number,
+): Promise<ReadTable> {
   const bytes = await readFile(path)
   const sha256 = createHash('sha256').update(bytes).digest('hex')
   if (bytes[0] !== 0x50 || bytes[1] !== 0x4b) {
-    return { file: name, sha256, sheets: [{ name: null, rows: readDelimited(bytes) }] }
+    return { file: name, sha256, sheets: [{ name: null, rows: readDelimited(bytes, firstRows) }] }
   }
   await checkWorkbook(path)
-  return { file: name, sha256, ...readWorkbook(bytes) }
+  return { file: name, sha256, ...readWorkbook(bytes, firstRows) }
 }
 
-function readDelimited(bytes: Buffer): ReadCell[][] {
+function readDelimited(bytes: Buffer, firstRows?: number): ReadCell[][] {
   const decoded = decodeText(bytes)
   if (decoded === null) throw refuse('unreadable', notDelimited)
   const declared = getDeclaredDelimiter(decoded)
@@ -33,7 +40,7 @@ function readDelimited(bytes: Buffer): ReadCell[][] {
       skip_empty_lines: false,
       trim: true,
       bom: true,
-      to: maxRows + 1,
+      to: firstRows ?? maxRows + 1,
     })
     const cells = rows.reduce((sum, row) => sum + Math.min(row.length, maxColumns), 0)
     if (rows.length > maxRows || cells > maxCells) throw refuse('too-large', tooManyRows)

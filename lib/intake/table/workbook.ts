@@ -8,8 +8,8 @@ import { maxCells, maxColumns, maxRows, tooManyRows } from './limits'
  * Reads the sheets of a workbook: values and how they are shown; formulas count by their last result. What is hidden
  * is read with the rest, and said.
  */
-export function readWorkbook(bytes: Buffer): Pick<ReadTable, 'sheets' | 'remarks'> {
-  const book = open(bytes)
+export function readWorkbook(bytes: Buffer, firstRows?: number): Pick<ReadTable, 'sheets' | 'remarks'> {
+  const book = open(bytes, firstRows ?? maxRows + 1)
   let cells = 0
   const sheets = book.SheetNames.map((name) => {
     const rows = readSheet(book.Sheets[name])
@@ -44,7 +44,7 @@ function withMerges(sheet: ReadSheet, from: WorkSheet | undefined): ReadSheet {
   }
 }
 
-function open(bytes: Buffer) {
+function open(bytes: Buffer, sheetRows: number) {
   try {
     return read(bytes, {
       type: 'buffer',
@@ -55,7 +55,7 @@ function open(bytes: Buffer) {
       cellDates: false,
       // tells which rows and columns are hidden
       cellStyles: true,
-      sheetRows: maxRows + 1,
+      sheetRows,
     })
   } catch (cause) {
     throw Object.assign(refuse('unreadable', damaged), { cause })

@@ -1,13 +1,16 @@
-import type { Audit, HouseRules, ReadDocument } from '@/lib/checks/types'
+import type { Audit, HouseRules, NamedColumn, ReadDocument } from '@/lib/checks/types'
 import type { RecognitionLimits } from '../recognise/recognise-pages'
 import type { RefusalKind } from '@/lib/rules/refusal'
 
 type Reading = { path: string; maxPages: number; recognition: RecognitionLimits }
 
+/** `roles`: columns that a person named. */
+export type TableFile = { path: string; name: string; roles?: readonly NamedColumn[] }
+
 export type ReadTask = Reading & { kind: 'read' }
 export type AuditTask = Reading & {
   kind: 'audit'
-  table: { path: string; name: string } | null
+  table: TableFile | null
   rules: HouseRules
 }
 export type ThreadTask = ReadTask | AuditTask

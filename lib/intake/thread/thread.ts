@@ -45,7 +45,7 @@ async function readManuscript({ path, maxPages, recognition }: ThreadTask) {
 
 async function judge({ table, rules }: AuditTask, document: ReadDocument) {
   phase = 'reading the table'
-  const rows = table ? await readTableFile(table.path, table.name) : null
+  const rows = table ? { ...(await readTableFile(table.path, table.name)), roles: table.roles ?? [] } : null
   phase = 'judging'
   const { audit } = await import('@/lib/checks/audit')
   return audit(document, rows, rules, (stage) => send({ kind: 'stage', stage }))
