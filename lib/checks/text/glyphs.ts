@@ -104,24 +104,41 @@ const numbersOnly = /^[\d.,·<>=≤≥±()[\]*\s\u2212–-]+$/
  */
 export function readGlyphs(text: string, from: number, to: number, even: boolean, digit = 0): Glyph[] {
   const chars = [...text]
-  const shares = chars.map((char) =>
-    invisible.test(char) ? 0 : even ? 1 : roughWidth(space.test(char) ? ' ' : char),
-  )
+  const kinds = chars.map(kindOf)
+  const shares = kinds.map((kind) => (kind.hidden ? 0 : even ? 1 : kind.share))
   if (!even && digit > 0) widenSpaces(text, chars, shares, to - from, digit)
   const total = shares.reduce((sum, share) => sum + share, 0) || 1
   const glyphs: Glyph[] = []
   let at = from
-  chars.forEach((char, index) => {
+  kinds.forEach(({ hidden, chars: read, level }, index) => {
     const start = at
     at += ((shares[index] ?? 0) / total) * (to - from)
-    if (invisible.test(char)) return
-    const read = readCharacter(char)
-    const wide = (at - start) / Math.max(1, read.chars.length)
-    read.chars.forEach((one, part) =>
-      glyphs.push({ char: one, level: read.level, from: start + part * wide, to: start + (part + 1) * wide }),
+    if (hidden) return
+    const wide = (at - start) / Math.max(1, read.length)
+    read.forEach((one, part) =>
+      glyphs.push({ char: one, level, from: start + part * wide, to: start + (part + 1) * wide }),
     )
   })
   return glyphs
+}
+
+type CharacterKind = { hidden: boolean; share: number; chars: string[]; level: -1 | 0 | 1 }
+
+/** What is known of a character; every page has the same few hundred. */
+const known = new Map<string, CharacterKind>()
+const mostKnown = 20_000
+
+function kindOf(char: string): CharacterKind {
+  const found = known.get(char)
+  if (found) return found
+  if (known.size >= mostKnown) known.clear()
+  const kind = {
+    hidden: invisible.test(char),
+    share: roughWidth(space.test(char) ? ' ' : char),
+    ...readCharacter(char),
+  }
+  known.set(char, kind)
+  return kind
 }
 
 function widenSpaces(text: string, chars: string[], shares: number[], width: number, digit: number): void {

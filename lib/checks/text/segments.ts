@@ -18,8 +18,13 @@ export const WIDE_GAP = 0.85
  * gutter parts segments however narrow it is.
  */
 export function findSegments(words: readonly Word[], gutters: readonly Gutter[] = []): Segment[] {
-  return attachRaised(clusterByBaseline(words)).flatMap((row) => splitRow(row, gutters))
+  const rows = rowsOf.get(words) ?? attachRaised(clusterByBaseline(words))
+  rowsOf.set(words, rows)
+  return rows.flatMap((row) => splitRow(row, gutters))
 }
+
+/** The same words are cut twice: before the gutters of the page are known, and with them. */
+const rowsOf = new WeakMap<readonly Word[], Word[][]>()
 
 type Cluster = { words: Word[]; v: number; size: number }
 

@@ -137,9 +137,13 @@ function buildTable(
 /** Rows at the foot that break the columns of those above are no rows of the table. */
 function trimEnd(fine: readonly Row[], from: number, end: number): number {
   let last = end
+  let whole: number | null = null
   for (let cut = 1; cut <= 5 && end - cut - from >= 3; cut++) {
-    const whole = findColumns(fine.slice(from, last)).length
-    if (findColumns(fine.slice(from, end - cut)).length > whole) last = end - cut
+    whole ??= findColumns(fine.slice(from, last)).length
+    const without = findColumns(fine.slice(from, end - cut)).length
+    if (without <= whole) continue
+    last = end - cut
+    whole = without
   }
   return last
 }
