@@ -5,6 +5,7 @@ import Link from 'next/link'
 import type { KeptAudit } from '@/db/queries/audit'
 import type { ManuscriptView } from '@/db/queries/manuscript'
 import { OUTCOMES } from '@/lib/checks/vocabulary'
+import { findTable } from '../columns/find-table'
 import { manuscriptUrl } from '../manuscripts/resources'
 import { OutcomeShape, outcomeWords } from '../shell/outcome-mark'
 import { StateTag } from '../shell/state-tag'
@@ -60,6 +61,11 @@ export function BenchBar({ manuscript, kept }: { manuscript: ManuscriptView; kep
         <span className="max-lg:hidden">
           <KeyHelp keys={keys} />
         </span>
+        {findTable(manuscript) !== null && kept.round === manuscript.round ? (
+          <ButtonLink size="small" href={`${home}/table`}>
+            Results table
+          </ButtonLink>
+        ) : null}
         <Menu
           trigger={
             <Button size="small">

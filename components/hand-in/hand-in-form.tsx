@@ -1,11 +1,14 @@
 'use client'
 
 import { zodResolver } from '@hookform/resolvers/zod'
+import { useIsMutating } from '@tanstack/react-query'
 import { useRouter } from 'next/navigation'
 import { useState } from 'react'
 import { useForm } from 'react-hook-form'
 import type { FileView } from '@/db/queries/manuscript'
 import type { FileKind } from '@/lib/rules/words'
+import { TableReading } from '../columns/table-reading'
+import { namingKey } from '../columns/use-table-columns'
 import { FileSlot } from '../files/file-slot'
 import { useAction, type Answer } from '../shell/use-action'
 import { Button } from '../ui/button'
@@ -32,6 +35,7 @@ export function HandInForm(props: HandInFormProps) {
   const router = useRouter()
   const form = useForm<DraftForm>({ resolver: zodResolver(draftForm), defaultValues: props.drafted })
   const saving = useAutosave(manuscriptId, form)
+  const naming = useIsMutating({ mutationKey: namingKey }) > 0
   const [tried, setTried] = useState(false)
   const handingIn = useAction(props.handIn, () => router.push(`/manuscripts/${manuscriptId}`))
   const removing = useAction(props.removeFile, () => router.refresh())
@@ -81,6 +85,9 @@ export function HandInForm(props: HandInFormProps) {
           onRemove={remove}
           {...slot}
         />
+        {files.table ? (
+          <TableReading key={files.table.id} fileId={files.table.id} manuscriptId={manuscriptId} />
+        ) : null}
         {removing.message ? <Notice tone="trouble">{removing.message}</Notice> : null}
         <Notice tone="care">
           Results only: no data of single participants or patients in the table, please. Nothing leaves this
@@ -94,7 +101,11 @@ export function HandInForm(props: HandInFormProps) {
           withdraw the manuscript until the verdict is released.
         </p>
         <div className="flex flex-wrap items-center gap-4">
-          <Button type="submit" variant="primary" busy={(isSubmitting || handingIn.pending) && 'Handing in…'}>
+          <Button
+            type="submit"
+            variant="primary"
+            busy={isSubmitting || handingIn.pending ? 'Handing in…' : naming && 'Saving…'}
+          >
             {round > 1 ? `Hand in round ${round}` : 'Hand in'}
           </Button>
           <SaveLine state={saving.state} onRetry={() => void saving.flush()} />

@@ -3,6 +3,7 @@
 import { useRouter } from 'next/navigation'
 import type { FileView } from '@/db/queries/manuscript'
 import type { FileKind } from '@/lib/rules/words'
+import { TableReading } from '../columns/table-reading'
 import { FileSlot } from '../files/file-slot'
 import { useAction, type Answer } from '../shell/use-action'
 import { Button } from '../ui/button'
@@ -32,6 +33,9 @@ export function StuckForm({ manuscriptId, trouble, files, limitBytes, handInAgai
       </Notice>
       <FileSlot kind="manuscript" file={files.manuscript ?? null} {...slot} />
       <FileSlot kind="table" optional file={files.table ?? null} {...slot} />
+      {files.table ? (
+        <TableReading key={files.table.id} fileId={files.table.id} manuscriptId={manuscriptId} />
+      ) : null}
       {message ? <Notice tone="trouble">{message}</Notice> : null}
       <Button
         variant="primary"

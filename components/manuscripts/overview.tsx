@@ -2,6 +2,7 @@
 
 import { useState } from 'react'
 import type { ConflictView, ManuscriptView } from '@/db/queries/manuscript'
+import { findTable } from '../columns/find-table'
 import { CommentsSection } from '../comments/comments-section'
 import type { CommentSubject } from '../comments/use-comments'
 import { StateTag } from '../shell/state-tag'
@@ -25,6 +26,7 @@ export function Overview({ manuscript, actions, limitBytes }: OverviewProps) {
   const [subject, setSubject] = useState<CommentSubject | null>(null)
   const may = (action: ManuscriptView['actions'][number]) => manuscript.actions.includes(action)
   const { progress } = manuscript
+  const table = findTable(manuscript)
   return (
     <Page>
       <PageHead
@@ -72,7 +74,13 @@ export function Overview({ manuscript, actions, limitBytes }: OverviewProps) {
               Rounds and files
             </h2>
             {manuscript.rounds.length > 0 ? (
-              <RoundsList rounds={manuscript.rounds} readable={may('readFiles')} />
+              <RoundsList
+                rounds={manuscript.rounds}
+                readable={may('readFiles')}
+                {...(table
+                  ? { table: { fileId: table.id, href: `/manuscripts/${manuscript.id}/table` } }
+                  : {})}
+              />
             ) : (
               <p className="text-ink-soft">The files can be opened once the review is accepted.</p>
             )}

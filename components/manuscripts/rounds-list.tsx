@@ -1,11 +1,19 @@
 import { FileText, Table2 } from 'lucide-react'
+import Link from 'next/link'
 import type { FileView, RoundView } from '@/db/queries/manuscript'
 import { formatBytes } from '../files/format-bytes'
 import { hasReadingCopy } from '../files/pages-url'
 import { Time } from '../ui/time'
 
+type RoundsListProps = {
+  rounds: readonly RoundView[]
+  readable: boolean
+  /** The results table whose columns can be looked at, and where. */
+  table?: { fileId: string; href: string }
+}
+
 /** The rounds with their files and what was said with them; the newest first. */
-export function RoundsList({ rounds, readable }: { rounds: readonly RoundView[]; readable: boolean }) {
+export function RoundsList({ rounds, readable, table }: RoundsListProps) {
   return (
     <ol className="flex flex-col gap-5">
       {[...rounds].reverse().map((round) => (
@@ -25,7 +33,12 @@ export function RoundsList({ rounds, readable }: { rounds: readonly RoundView[];
           {round.files.length > 0 && (
             <ul className="mt-1 flex flex-col gap-1">
               {round.files.map((file) => (
-                <FileLine key={file.id} file={file} readable={readable} />
+                <FileLine
+                  key={file.id}
+                  file={file}
+                  readable={readable}
+                  readHref={table?.fileId === file.id ? table.href : null}
+                />
               ))}
             </ul>
           )}
@@ -36,7 +49,9 @@ export function RoundsList({ rounds, readable }: { rounds: readonly RoundView[];
   )
 }
 
-function FileLine({ file, readable }: { file: FileView; readable: boolean }) {
+type FileLineProps = { file: FileView; readable: boolean; readHref: string | null }
+
+function FileLine({ file, readable, readHref }: FileLineProps) {
   const Icon = file.kind === 'manuscript' ? FileText : Table2
   return (
     <li className="flex flex-wrap items-baseline gap-x-2">
@@ -52,6 +67,11 @@ function FileLine({ file, readable }: { file: FileView; readable: boolean }) {
         {file.kind === 'manuscript' ? 'manuscript' : 'results table'}, {formatBytes(file.bytes)}
         {file.replacedAt !== null && ', replaced'}
       </span>
+      {readHref === null ? null : (
+        <Link href={readHref} className="text-xs text-tide underline underline-offset-2">
+          How it is read
+        </Link>
+      )}
       {hasReadingCopy(file) && file.replacedAt === null ? (
         <span className="w-full pl-6 text-xs text-ink-soft">
           Read from a copy in pages; the page numbers of the audit are those of the copy.

@@ -5,12 +5,15 @@ import { listActions } from '@/lib/rules/actions'
 import { parseNamedColumns, type NamedColumns } from '@/lib/rules/named-columns'
 import type { Actor } from '@/lib/rules/roles'
 import { getFile, type StoredFile } from './file'
+import { getRulesOf } from './rules-in-force'
 import { getSituation } from './situation'
 import { findViewing } from './viewing'
 
 export type TableColumns = {
   file: StoredFile
   round: number
+  /** The level of the round, as its submitter or the house says. */
+  alpha: number
   /** What people named so far, and the revision to name it with. */
   columns: NamedColumns
   revision: number
@@ -27,7 +30,8 @@ export function getTableColumns(db: Reader, actor: Actor, fileId: string): Table
   const row = db
     .select({
       round: rounds.number,
-      handedInAt: rounds.handedInAt,
+      alpha: rounds.alpha,
+      houseRulesVersion: rounds.houseRulesVersion,
       columnRoles: files.columnRoles,
       revision: files.columnRolesRevision,
       replacedAt: files.replacedAt,
@@ -44,6 +48,7 @@ export function getTableColumns(db: Reader, actor: Actor, fileId: string): Table
   return {
     file,
     round: row.round,
+    alpha: row.alpha ?? getRulesOf(db, row.houseRulesVersion).alpha,
     columns: parseNamedColumns(row.columnRoles),
     revision: row.revision,
     mayName: can && row.replacedAt === null && row.round === open,
