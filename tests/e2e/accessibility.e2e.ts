@@ -76,3 +76,20 @@ test('axe finds nothing on a letter and its answers', async ({ browser }) => {
   const home = (await link.getAttribute('href')) ?? ''
   expect(await walk(submitter, [home, `${home}/answer`])).toEqual([])
 })
+
+test('axe finds nothing where the columns of a results table are named', async ({ browser }) => {
+  test.setTimeout(240_000)
+  const editor = await enterAs(browser, 'editor')
+  await editor.goto('/docket')
+  const home = (await editor.getByRole('link', { name: /Fouling on four hull/ }).getAttribute('href')) ?? ''
+  await editor.goto(`${home}/table`)
+  await expect(editor.getByRole('combobox').first()).toBeVisible()
+  expect(await walk(editor, [`${home}/table`])).toEqual([])
+  const submitter = await enterAs(browser, 'secondSubmitter')
+  await submitter.goto('/hand-in')
+  const draft =
+    (await submitter.getByRole('link', { name: /Twelve traits of barnacles/ }).getAttribute('href')) ?? ''
+  await submitter.goto(draft)
+  await expect(submitter.getByRole('combobox').first()).toBeVisible()
+  expect(await walk(submitter, [draft])).toEqual([])
+})

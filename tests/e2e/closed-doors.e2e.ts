@@ -51,6 +51,7 @@ test("another's draft does not exist for anyone else", async ({ browser }) => {
       draft,
       `/manuscripts/${id}`,
       `/manuscripts/${id}/bench`,
+      `/manuscripts/${id}/table`,
       `/manuscripts/${id}/verdict`,
       `/manuscripts/${id}/answer`,
       `/manuscripts/${id}/record`,

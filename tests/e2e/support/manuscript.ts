@@ -11,7 +11,7 @@ const groups = [
   { name: 'pulsed flow', n: 12, mean: 54.1, sd: 5.9 },
 ]
 const all = compareAll(groups)
-const pairs = comparePairs(groups)
+export const pairs = comparePairs(groups)
 const corrected = pairs.map((pair) => Math.min(1, 3 * pair.raw))
 const say = (i: number) => {
   const pair = pairs[i]
