@@ -22,8 +22,8 @@ export function normalise(written: Written): Written {
     // "0·03", not "5·10^-8"
     .replace(/(?<=\d)[·∙•](?=\d)(?!10\^)/g, '.')
     .replace(/(?<![\d\p{L}])[·∙](?=\d{2})/gu, '.')
-    // "= –2.46", "(–2.46": a sign
-    .replace(/(?<=(?:^|[=<>≤≥([,;:/] ?|\s))–(?=\.?\d)/g, '-')
+    // "= –2.46", "(–2.46", "10^–5": a sign
+    .replace(/(?<=(?:^|[=<>≤≥([,;:/] ?|\s|\^))–(?=\.?\d)/g, '-')
     .replace(/[∼˜]/g, '~')
   return { text, origins }
 }

@@ -84,7 +84,8 @@ function runFile<T extends object>(
   })
 }
 
-function toFailure(message: ThreadMessage, format: Format): Error | null {
+/** What a message of the thread fails with: a refusal, or a plain error for a fault of ours; null where it does not. */
+export function toFailure(message: ThreadMessage, format: Format): Error | null {
   if (message.kind === 'refused') return refuse(message.refusal, message.message)
   if (message.kind !== 'trouble') return null
   const { phase, name, stack, code } = message
