@@ -48,6 +48,8 @@ export function readGrid(grid: Grid, controls: readonly Control[] = []): Part {
   return readRows(makeReader(grid, controls))
 }
 
+const STAR = /[*∗†‡]/
+
 /** What a table as a whole is taken for. `named`: by column, the role that a person gave it, which is obeyed. */
 export function makeReader(
   grid: Grid,
@@ -73,7 +75,7 @@ export function makeReader(
       findControl(`${grid.caption}. ${grid.headers.join('. ')}. ${grid.notes}`) ??
       controlOf(grid, roles, controls),
     starred: columns.map(({ cells }) =>
-      cells.some((cell) => /[*†‡]/.test(readP(cell)?.mark ?? readNumber(cell)?.mark ?? '')),
+      cells.some((cell) => STAR.test(cell) && STAR.test(readP(cell)?.mark ?? readNumber(cell)?.mark ?? '')),
     ),
   }
 }

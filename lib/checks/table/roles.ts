@@ -64,7 +64,8 @@ const STATISTIC_HEADS: readonly (readonly [Test, RegExp])[] = [
 ]
 
 /** Roles by head, checked against what the cells hold; the first column of words that has no role is the label. */
-export function findRoles(columns: readonly Column[]): ColumnRole[] {
+export function findRoles(all: readonly Column[]): ColumnRole[] {
+  const columns = all.map(sampleCells)
   const roles = columns.map(roleOf)
   const hasAdjusted = roles.some((role) => role.kind === 'p' && role.scale === 'adjusted')
   const settled = roles.map((role): ColumnRole =>
@@ -76,6 +77,16 @@ export function findRoles(columns: readonly Column[]): ColumnRole[] {
   if (label >= 0 && (!named || label === 0))
     settled[label] = { kind: isPairs(columns[label]?.cells ?? []) ? 'comparison' : 'label' }
   return settled
+}
+
+const SAMPLE = 2000
+
+/** Of a long column every so many cells tell what it holds, the first among them. */
+function sampleCells(column: Column): Column {
+  const { cells } = column
+  if (cells.length <= SAMPLE) return column
+  const step = cells.length / SAMPLE
+  return { ...column, cells: Array.from({ length: SAMPLE }, (_, i) => cells[Math.floor(i * step)] ?? '') }
 }
 
 function roleOf({ header, cells }: Column): ColumnRole {
@@ -107,7 +118,7 @@ function roleOf({ header, cells }: Column): ColumnRole {
   const test =
     STATISTIC_HEADS.find(([, form]) => form.test(last)) ??
     // an upper line says it only where the lowest says nothing: 't test | df' holds degrees of freedom
-    (plainKind(last, last, share) === 'other'
+    (head !== last && plainKind(last, last, share) === 'other'
       ? STATISTIC_HEADS.find(([, form]) => form.test(head))
       : undefined)
   if (test && share((cell) => readNumber(cell) !== null) >= 0.5) {

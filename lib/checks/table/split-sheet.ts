@@ -41,7 +41,11 @@ export function splitSheet(sheet: ReadSheet): Block[] {
   return blocks
 }
 
-type Line = { at: number; cells: string[]; filled: string[]; afterBlank: boolean }
+/** `data`: a plain number is among the cells, so that it is no line of heads. */
+type Line = { at: number; cells: string[]; filled: string[]; afterBlank: boolean; data: boolean }
+
+/** '12', '-0.3', ',05' */
+const PLAIN_NUMBER = /^[-+]?\d*[.,]?\d+$/
 
 function splitRegion(texts: readonly string[][], region: Region, merges: readonly Merge[]): Block[] {
   const lines = listLines(texts, region)
@@ -106,7 +110,8 @@ function listLines(texts: readonly string[][], { top, bottom, left, right }: Reg
   for (let at = top; at < bottom; at += 1) {
     const cells = (texts[at] ?? []).slice(left, right)
     const filled = cells.filter((cell) => cell !== '')
-    if (filled.length > 0) lines.push({ at, cells, filled, afterBlank })
+    const data = filled.some((cell) => PLAIN_NUMBER.test(cell))
+    if (filled.length > 0) lines.push({ at, cells, filled, afterBlank, data })
     afterBlank = filled.length === 0
   }
   return lines
@@ -115,7 +120,7 @@ function listLines(texts: readonly string[][], { top, bottom, left, right }: Reg
 /** How many lines of heads begin here: the lowest names columns, those above it spans of columns. At most four. */
 function countHeadLines(lines: readonly Line[], from: number, merges: readonly Merge[]): number {
   const first = lines[from]
-  if (!first) return 0
+  if (!first || first.data) return 0
   let last = isHead(first.cells) ? 1 : 0
   for (let k = 1; k < 4; k += 1) {
     const [above, line] = [lines[from + k - 1], lines[from + k]]
@@ -128,8 +133,12 @@ function countHeadLines(lines: readonly Line[], from: number, merges: readonly M
 }
 
 /** Names of spans over the heads of the next line: no numbers, and not a title in the first column alone. */
-function isSpans({ at, cells, filled }: Line, next: Line | undefined, merges: readonly Merge[]): boolean {
-  if (!next || filled.some(holdsData)) return false
+function isSpans(
+  { at, cells, filled, data }: Line,
+  next: Line | undefined,
+  merges: readonly Merge[],
+): boolean {
+  if (!next || data || filled.some(holdsData)) return false
   if (filled.length >= 2) return true
   const c = cells.findIndex((cell) => cell !== '')
   const merge = merges.find(([row, column]) => row === at && column === c)
