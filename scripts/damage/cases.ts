@@ -1,5 +1,5 @@
 import { DAMAGES } from './damages'
-import { FORMATS, makeFixtures, type Format } from './fixtures'
+import { FORMATS, type makeFixtures, type Format } from './fixtures'
 import { makeRandom } from './random'
 
 export type DamagedFile = { number: number; format: Format; damage: string; bytes: Buffer }

@@ -41,11 +41,17 @@ async function unpackAll(zip: ZipFile, limits: ZipLimits, keeps: (name: string) 
   for await (const entry of zip.eachEntry()) {
     entries += 1
     unpacked += entry.uncompressedSize
-    if (entries > limits.entries || unpacked > limits.bytes) throw refuse('too-large', limits.tooLarge)
+    if (entries > limits.entries || unpacked > limits.bytes || isBomb(entry))
+      throw refuse('too-large', limits.tooLarge)
     if (entry.isEncrypted()) throw refuse('unreadable', limits.locked)
     parts.set(entry.fileName, await unpack(zip, entry, keeps(entry.fileName)))
   }
   return parts
+}
+
+/** Text and numbers shrink to a thirtieth at best; only what repeats one byte shrinks to this part of itself. */
+function isBomb({ uncompressedSize, compressedSize }: Entry): boolean {
+  return uncompressedSize > 10 * 1024 * 1024 && uncompressedSize > 200 * compressedSize
 }
 
 async function unpack(zip: ZipFile, entry: Entry, kept: boolean): Promise<Buffer> {
