@@ -1,11 +1,11 @@
 import { createHash } from 'node:crypto'
 import { readFile } from 'node:fs/promises'
-import type { ReadDocument } from '@/lib/checks/types'
+import type { ReadDocument, ReadTable } from '@/lib/checks/types'
 import { isRefusal } from '@/lib/rules/refusal'
 import { isZip } from '../check/check-manuscript'
 import { readPages } from '../pdf/open-document'
 import { readTableFile } from '../table/read-table'
-import type { Phase, ThreadMessage, ThreadTask } from './messages'
+import type { Phase, TableFile, ThreadMessage, ThreadTask } from './messages'
 
 type Send = (message: ThreadMessage) => void
 
@@ -19,7 +19,7 @@ export async function runTask(task: ThreadTask, send: Send): Promise<void> {
     const { document, readingCopy } = await readManuscript(task, send, enter)
     if (task.kind === 'read') return send({ kind: 'read', document, readingCopy })
     enter('reading the table')
-    const table = task.table ? await readTableFile(task.table.path, task.table.name) : null
+    const table = task.table ? await readNamed(task.table) : null
     enter('judging')
     const { audit } = await import('@/lib/checks/audit')
     const result = audit(document, table, task.rules, (stage) => send({ kind: 'stage', stage }))
@@ -61,4 +61,9 @@ function describe(error: unknown, phase: Phase): ThreadMessage {
   const { name, message, stack = '' } = thrown
   const code = 'code' in thrown && typeof thrown.code === 'string' ? thrown.code : null
   return { kind: 'trouble', phase, name, message, stack, code }
+}
+
+/** The results table with the columns that a person named. */
+async function readNamed({ path, name, roles = [] }: TableFile): Promise<ReadTable> {
+  return { ...(await readTableFile(path, name)), roles }
 }
