@@ -83,6 +83,9 @@ test('an audit is exported as JSON and as CSV under a dated name', async () => {
   expect((await call(exportAudit, world.reviewer, { id }, { query: '?format=r&family=f99' })).status).toBe(
     404,
   )
+  expect((await call(exportAudit, world.reviewer, { id }, { query: '?format=csv&family=f1' })).status).toBe(
+    422,
+  )
   expect((await call(exportAudit, world.submitter, { id }, { query: '?format=r' })).status).toBe(404)
   expect((await call(exportAudit, world.submitter, { id }, { query: '?format=csv' })).status).toBe(404)
   expect((await call(exportAudit, world.reviewer, { id }, { query: '?format=exe' })).status).toBe(422)

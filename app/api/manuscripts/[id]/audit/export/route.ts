@@ -18,10 +18,13 @@ const FORMATS = {
   r: { type: 'text/plain; charset=utf-8', ending: 'R', write: writeAuditScript },
 } as const
 
-const asked = z.union([
-  z.object({ format: z.enum(['json', 'csv', 'r']).default('json'), family: z.undefined() }),
-  z.object({ format: z.literal('r'), family: z.string() }),
-])
+// a family is given as R alone
+const asked = z
+  .object({ format: z.enum(['json', 'csv', 'r']).default('json'), family: z.string().optional() })
+  .refine(({ format, family }) => family === undefined || format === 'r', {
+    path: ['family'],
+    error: 'A family can be had as an R script only.',
+  })
 
 /** The audit as JSON, CSV or R script; `family` asks for the R script of that one alone. */
 export const GET = route<{ id: string }>(({ request, db, actor, params, now }) => {
