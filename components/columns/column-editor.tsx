@@ -15,26 +15,37 @@ import { TablePreview } from './table-preview'
 import { useNameColumns, useTableColumns, type TableColumnsView } from './use-table-columns'
 import { ValuesRead } from './values-read'
 
-type ColumnEditorProps = { fileId: string; manuscriptId: string }
+type ColumnEditorProps = {
+  fileId: string
+  manuscriptId: string
+  /** Level of each table's heading: below that of the place where it stands. */
+  heading: 'h2' | 'h3'
+}
 
 /** How a results table is read: each of its tables with what every column was taken for, to be put right by hand. */
-export function ColumnEditor({ fileId, manuscriptId }: ColumnEditorProps) {
+export function ColumnEditor({ fileId, manuscriptId, heading }: ColumnEditorProps) {
   const { data, error, isPending, refetch } = useTableColumns(fileId)
   if (isPending) return <LoadingSteps label="Reading the results table" />
   if (error) return <Failed error={error} onRetry={() => void refetch()} />
-  return <Editor view={data} manuscriptId={manuscriptId} reload={() => void refetch()} />
+  return <Editor view={data} manuscriptId={manuscriptId} heading={heading} reload={() => void refetch()} />
 }
 
 const mostTables = 30
+const mostValues = 6
 
-function Editor(props: { view: TableColumnsView; manuscriptId: string; reload: () => void }) {
-  const { view, manuscriptId } = props
+type EditorProps = Omit<ColumnEditorProps, 'fileId'> & { view: TableColumnsView; reload: () => void }
+
+function Editor(props: EditorProps) {
+  const { view, manuscriptId, heading: Heading } = props
   const { table, alpha, mayName, asksAudit } = view
   const [draft, setDraft] = useState<readonly NamedColumn[] | null>(null)
   const naming = useNameColumns(view.fileId, manuscriptId)
   const named = draft ?? view.columns
   const found = useMemo(() => describeTable(table, { alpha }), [table, alpha])
-  const shown = useMemo(() => describeTable({ ...table, roles: named }, { alpha }), [table, alpha, named])
+  const shown = useMemo(
+    () => describeTable({ ...table, roles: named }, { alpha }, mostValues),
+    [table, alpha, named],
+  )
   const save = (columns: readonly NamedColumn[]) => naming.mutate(columns)
   const set = (columns: readonly NamedColumn[]) => {
     setDraft(columns)
@@ -51,13 +62,13 @@ function Editor(props: { view: TableColumnsView; manuscriptId: string; reload: (
           .join(': ')
         const spot = { sheet: one.sheet, row: one.row }
         return (
-          <section key={`${one.sheet}-${one.row}-${one.columns[0]?.column ?? 0}`} aria-label={title}>
-            <h3 className="mb-2 font-semibold">
+          <section key={`${one.sheet}-${one.row}-${one.columns[0]?.column ?? 0}`}>
+            <Heading className="mb-2 font-semibold">
               {title}{' '}
               <span className="font-normal text-ink-soft">
                 {one.rows} {one.rows === 1 ? 'row' : 'rows'}
               </span>
-            </h3>
+            </Heading>
             <TablePreview
               table={one}
               name={title}

@@ -27,7 +27,12 @@ const ofWords = new Set<NamedRole>([
 /** The first rows of one table with a list over each column that says what it holds. */
 export function TablePreview({ table, name, onRole }: TablePreviewProps) {
   return (
-    <div className="overflow-x-auto border border-rule bg-sheet" role="region" aria-label={name} tabIndex={0}>
+    <div
+      className="overflow-x-auto border border-rule bg-sheet"
+      role="region"
+      aria-label={`Columns of ${name}`}
+      tabIndex={0}
+    >
       <table className="tabular border-collapse text-left text-sm">
         <caption className="sr-only">{name}: the first rows, with what each column was taken for</caption>
         <thead>

@@ -9,7 +9,7 @@ export function TableReading(props: { fileId: string; manuscriptId: string }) {
         What each column was taken for, and what was read with it. Where that is wrong, say what the column
         holds.
       </p>
-      <ColumnEditor {...props} />
+      <ColumnEditor heading="h3" {...props} />
     </details>
   )
 }

@@ -25,7 +25,9 @@ export function useTableColumns(fileId: string) {
   return useQuery({
     queryKey: keyOf(fileId),
     queryFn: ({ signal }) => fetchJson<TableColumnsView>(urlOf(fileId), { signal }),
-    staleTime: Infinity,
+    // Whether one may name columns changes with the state of the manuscript.
+    staleTime: 0,
+    refetchOnWindowFocus: false,
   })
 }
 

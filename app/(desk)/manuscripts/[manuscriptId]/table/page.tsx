@@ -32,7 +32,7 @@ export default async function TablePage({ params }: Props) {
         {file.name}: what each column was taken for, and what was read with it. A column that was misread can
         be named by hand.
       </p>
-      <ColumnEditor key={file.id} fileId={file.id} manuscriptId={manuscriptId} />
+      <ColumnEditor heading="h2" key={file.id} fileId={file.id} manuscriptId={manuscriptId} />
     </Page>
   )
 }
