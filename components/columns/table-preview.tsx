@@ -38,7 +38,7 @@ export function TablePreview({ table, name, onRole }: TablePreviewProps) {
         <thead>
           <tr className="align-top">
             {table.columns.map(({ column, header, role, named }) => (
-              <th key={column} scope="col" className="min-w-44 border-b border-edge px-2 py-2 font-normal">
+              <th key={column} scope="col" className="min-w-52 border-b border-edge px-2 py-2 font-normal">
                 <RoleChoice
                   label={`Column ${letterOf(column)}${header ? `, “${header}”` : ''}, holds`}
                   role={role}
