@@ -27,7 +27,8 @@ export const FILE_KINDS = ['manuscript', 'table'] as const
 export type FileKind = (typeof FILE_KINDS)[number]
 
 /** Media type of a Word document (.docx). */
-export const WORD_DOCUMENT = 'application/vnd.openxmlformats-officedocument.wordprocessingml.document' as const
+export const WORD_DOCUMENT =
+  'application/vnd.openxmlformats-officedocument.wordprocessingml.document' as const
 
 export const AUDIT_STATUSES = ['queued', 'running', 'done', 'stuck'] as const
 export type AuditStatus = (typeof AUDIT_STATUSES)[number]
