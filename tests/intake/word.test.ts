@@ -118,6 +118,31 @@ test('a table longer than a page goes on under its head; a very wide one turns i
   expect(wide.tables[0]?.columns).toBe(11)
 })
 
+test('a number in a table is never broken over lines, in a narrow table or in one wider than the page', async () => {
+  const plain = await readWord({
+    body:
+      wordParagraph(wordRun('Comparisons of lights are listed in the table that follows this line.')) +
+      wordTable([
+        ['Comparison', 't', 'df', 'p'],
+        ['red vs blue', '2.43', '36', '.061'],
+        ['red vs white', '3.31', '36', '.006'],
+        ['red vs green', '0.52', '136', '.604'],
+      ]),
+  })
+  expect(plain.tables.flatMap((table) => texts(table.rows))).toEqual([
+    ['red vs blue', '2.43', '36', '.061'],
+    ['red vs white', '3.31', '36', '.006'],
+    ['red vs green', '0.52', '136', '.604'],
+  ])
+  const heads = Array.from({ length: 26 }, (_, i) => `p${i + 1}`)
+  const row = heads.map((_, i) => `0.${10_000 + 37 * i}`)
+  const wide = await readWord({
+    body: wordParagraph(wordRun('All p-values stand in the table.')) + wordTable([heads, row, row, row]),
+  })
+  const drawn = wide.document.pages.flatMap(({ runs }) => runs.map(({ text }) => text.trim()))
+  for (const number of row) expect(drawn.filter((text) => text === number)).toHaveLength(3)
+}, 30_000)
+
 test('a footnote stands at the foot of the page that refers to it', async () => {
   const { prose } = await readWord({
     body:

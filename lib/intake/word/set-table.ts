@@ -7,7 +7,10 @@ const leading = 1.28
 /** White space at either side of a cell's text: neighbours must stand clearly apart. */
 const padding = 6
 const sizes = [9, 8, 7]
-const smallest = 6.5
+/** A table too wide even turned is set smaller and smaller: a number that is broken would be read as two. */
+const narrow = [6.5, 6, 5.5, 5, 4.5, 4, 3.5, 3]
+/** What sums of widths may be off by. */
+const slack = 0.01
 
 type Placed = { lines: Line[]; from: number; span: number }
 type SetRow = { cells: Placed[]; height: number }
@@ -37,19 +40,22 @@ export function planTable(table: WordTable, sheet: Sheet): TablePlan {
     )
     if (sum(natural) <= width) return plan(grid, table.headRows, faces, size, landscape, natural)
   }
-  return plan(grid, table.headRows, faces, smallest, true, squeeze(grid, faces, pageWidths.turned))
+  const widthOfWords = (size: number) =>
+    measureColumns(grid, faces, size, (cell) =>
+      Math.max(0, ...cell.paragraphs.map((spans) => widthOfLongestWord(spans, faces, size))),
+    )
+  const size = narrow.find((one) => sum(widthOfWords(one)) <= pageWidths.turned) ?? 3
+  const columns = squeeze(grid, faces, size, widthOfWords(size), pageWidths.turned)
+  return plan(grid, table.headRows, faces, size, true, columns)
 }
 
 /** Words stay whole where they can; what is left goes to the columns that would be widest. */
-function squeeze(grid: Grid, faces: Faces, width: number): number[] {
-  const natural = measureColumns(grid, faces, smallest, (cell) =>
+function squeeze(grid: Grid, faces: Faces, size: number, least: readonly number[], width: number): number[] {
+  const natural = measureColumns(grid, faces, size, (cell) =>
     Math.max(
       0,
-      ...cell.paragraphs.flatMap((spans) => setLines(spans, faces, smallest, Infinity)).map((l) => l.width),
+      ...cell.paragraphs.flatMap((spans) => setLines(spans, faces, size, Infinity)).map((l) => l.width),
     ),
-  )
-  const least = measureColumns(grid, faces, smallest, (cell) =>
-    Math.max(0, ...cell.paragraphs.map((spans) => widthOfLongestWord(spans, faces, smallest))),
   )
   if (sum(least) >= width) return least.map((one) => (one * width) / sum(least))
   const wish = natural.map((one, i) => one - (least[i] ?? 0))
@@ -110,7 +116,9 @@ function plan(
   const rows = grid.rows.map((row): SetRow => {
     const cells = row.map(({ cell, from }) => {
       const inner = (edges[from + cell.colSpan] ?? 0) - (edges[from] ?? 0) - 2 * padding
-      const lines = cell.paragraphs.flatMap((spans) => setLines(spans, faces, size, Math.max(size, inner)))
+      const lines = cell.paragraphs.flatMap((spans) =>
+        setLines(spans, faces, size, Math.max(size, inner + slack)),
+      )
       return { lines, from, span: cell.colSpan }
     })
     const most = Math.max(1, ...cells.map((cell) => cell.lines.length))

@@ -312,4 +312,13 @@ export const CLAIM_PASSAGES: readonly ClaimPassage[] = [
     procedure: 'bonferroni',
   }),
   methods('Correction for multiple testing was by FDR (Benjamini–Hochberg), q < .1.', { procedure: 'bh' }),
+  // the number that the correction is for, not that of the pairs before it
+  methods(
+    'All six pairs of lights were compared with t tests, and p values were Bonferroni-corrected for three comparisons.',
+    { procedure: 'bonferroni', m: 3 },
+  ),
+  methods('The fifteen pairs were compared, with Holm adjustment for the five planned contrasts.', {
+    procedure: 'holm',
+    m: 5,
+  }),
 ]

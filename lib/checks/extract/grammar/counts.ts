@@ -82,6 +82,8 @@ export function findTestCount(text: string): number | null {
     if (n !== null) return n
   }
   const counted = listCounts(text)
+  const after = CORRECTED_FOR.exec(text)?.groups?.n
+  if (after !== undefined) return parseCount(after)
   // comparisons and tests outrank other nouns; after 'for' or 'over' outranks the rest
   const best = counted.find(({ noun }) => /compar|test|contrast|pairs|hypothes/i.test(noun)) ?? counted[0]
   if (best) return best.n
@@ -100,6 +102,12 @@ function listCounts(text: string): { n: number; noun: string }[] {
     return n === null || n < 1 || (/^p/i.test(noun) && n < 2) ? [] : [{ n, noun }]
   })
 }
+
+/** 'All six pairs were compared, and p values were Bonferroni-corrected for three comparisons': the number it is corrected for. */
+const CORRECTED_FOR = new RegExp(
+  String.raw`\b(?:corrected|adjusted|correction|adjustment)\s(?:for|over|across)\s(?:the\s|all\s)?(?<n>${COUNT})[\s-]${KINDS}(?:comparisons?|tests?|contrasts?|pairs)\b`,
+  'i',
+)
 
 const GROUP_NOUN = String.raw`(?:groups?|arms?|treatments?|conditions?|varieties|cultivars?|doses?|concentrations?|levels?|methods?|diets?|strains?|species|sites?|streams?|media|temperatures?|schedules?|materials?|cements?|grades?|adhesives?|amendments?|additives?|inhibitors?|cues?|warm-?ups?|categories|populations?|regimens?|interventions?|genotypes?|means|estimates|samples|locations?|habitats?|seasons?|products?|brands?|formulations?|protocols?|programmes?|programs?|classes|cohorts?|quartiles|tertiles|quintiles|stations?|plots|coatings?|stages?|lines|isolates|breeds|stocks|substrates?|types|settings?|devices?|techniques?|schools?|clinics?|centres?|centers?|designs?)`
 
