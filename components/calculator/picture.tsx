@@ -1,9 +1,9 @@
 'use client'
 
-import { useMemo, type ReactNode } from 'react'
+import { useMemo } from 'react'
 import type { Adjusted, Calculation } from '@/lib/checks/calculate/calculate'
 import type { Entry } from '@/lib/checks/calculate/entry'
-import { OutcomeRing } from '../charts/outcome-ring'
+import { StaircaseLegend } from '../charts/staircase-legend'
 import { Staircase } from '../charts/staircase'
 import { standOf, wordsOf } from './judge-entry'
 import { MOST_DOTS, pictureOf } from './picture-of'
@@ -49,7 +49,7 @@ export function CalculatorPicture(props: PictureProps) {
         }}
       />
       <figcaption className="mt-1 text-xs text-ink-soft">
-        <Legend />
+        <StaircaseLegend words={marks} />
         {picture.left > 0 && (
           <p className="mt-1">
             The {MOST_DOTS} smallest values are drawn; {picture.left.toLocaleString('en')} larger ones are
@@ -61,38 +61,10 @@ export function CalculatorPicture(props: PictureProps) {
   )
 }
 
-function Legend() {
-  return (
-    <ul className="flex flex-wrap gap-x-4 gap-y-0.5" aria-label="Marks of the picture">
-      <Entry word="at or below α alone">
-        <circle r={4} className="fill-ink" />
-      </Entry>
-      <Entry word="above α alone">
-        <circle r={3.6} strokeWidth={1.4} className="fill-sheet stroke-ink" />
-      </Entry>
-      <Entry word="open alone">
-        <path d="M-4 0H4M0 -4V4" strokeWidth={1.6} className="stroke-ink" />
-      </Entry>
-      <Entry word="not after the correction">
-        <OutcomeRing outcome="fails" radius={5} />
-      </Entry>
-      <Entry word="left open by the rounding">
-        <OutcomeRing outcome="undecidable" radius={5.5} />
-      </Entry>
-      <Entry word="rounding interval">
-        <path d="M0 -6V6" strokeWidth={1.4} className="stroke-ink" />
-      </Entry>
-    </ul>
-  )
-}
-
-function Entry({ word, children }: { word: string; children: ReactNode }) {
-  return (
-    <li className="inline-flex items-center gap-1.5">
-      <svg viewBox="-8 -8 16 16" className="size-4" aria-hidden="true">
-        {children}
-      </svg>
-      {word}
-    </li>
-  )
+const marks = {
+  dot: 'at or below α alone',
+  open: 'above α alone',
+  cross: 'open alone',
+  fails: 'not after the correction',
+  undecidable: 'left open by the rounding',
 }

@@ -5,6 +5,7 @@ import type { Family } from '@/lib/checks/types'
 import { procedureNames } from '../charts/thresholds'
 import { rawIntervals } from '../charts/raw-intervals'
 import { Staircase } from '../charts/staircase'
+import { StaircaseLegend } from '../charts/staircase-legend'
 import { StaircaseTable } from '../charts/staircase-table'
 import { isSame } from '../bench/audit-index'
 import { useBench } from '../bench/bench-state'
@@ -15,7 +16,6 @@ import { OutcomeMark, OutcomeShape } from '../shell/outcome-mark'
 import { Button, buttonLook } from '../ui/button'
 import { classes } from '../ui/classes'
 import { DecisionsTable } from './decisions-table'
-import { StaircaseLegend } from './staircase-legend'
 
 /** One family: what is claimed of it, what is due, the picture, each call. */
 export function FamilySheet({ family, number }: { family: Family; number: number }) {
@@ -105,7 +105,7 @@ export function FamilySheet({ family, number }: { family: Family; number: number
               onPick={(id) => show({ kind: 'report', id })}
             />
             <figcaption className="mt-1 text-xs text-ink-soft">
-              <StaircaseLegend />
+              <StaircaseLegend words={marks} />
               <details className="mt-1 print:hidden">
                 <summary className="text-tide">The picture as a table</summary>
                 <StaircaseTable family={family} reports={reports} claim={claim} alpha={alpha} raw={raw} />
@@ -138,6 +138,14 @@ export function FamilySheet({ family, number }: { family: Family; number: number
       </div>
     </article>
   )
+}
+
+const marks = {
+  dot: 'called significant',
+  open: 'called not significant',
+  cross: 'not called',
+  fails: 'call fails',
+  undecidable: 'cannot be decided',
 }
 
 function listFits(family: Family): string {
