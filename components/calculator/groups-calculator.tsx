@@ -4,9 +4,10 @@ import { useMemo } from 'react'
 import { Button } from '../ui/button'
 import { RadioGroup } from '../ui/choice'
 import { EmptyState } from '../ui/empty-state'
-import { Field, Input, Select, Textarea } from '../ui/field'
+import { Field, Select, Textarea } from '../ui/field'
 import { Notice } from '../ui/notice'
 import type { CalculatorInput } from './calculator-input'
+import { LevelField } from './level-field'
 import { kelpGroups } from './examples'
 import { GroupsResults } from './groups-results'
 import { ReadReport } from './read-report'
@@ -64,13 +65,7 @@ export function GroupsCalculator({ input, onChange }: GroupsCalculatorProps) {
             </p>
           )}
           <div className="grid grid-cols-2 gap-3">
-            <Field label="Level α" error={faults.alpha}>
-              <Input
-                inputMode="decimal"
-                value={input.alpha}
-                onChange={(event) => onChange({ alpha: event.target.value })}
-              />
-            </Field>
+            <LevelField input={input} error={faults.alpha} onChange={onChange} />
             <Field label="Control">
               <Select
                 empty="none: all pairs"

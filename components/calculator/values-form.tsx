@@ -5,6 +5,7 @@ import type { ReadValues } from '@/lib/checks/calculate/read-values'
 import { RadioGroup } from '../ui/choice'
 import { Field, Input, Select, Textarea } from '../ui/field'
 import type { CalculatorInput } from './calculator-input'
+import { LevelField } from './level-field'
 import { ProcedureChoice } from './procedure-choice'
 import { ColumnChoice, ReadReport } from './read-report'
 import type { WorkedOut } from './work-out'
@@ -62,13 +63,7 @@ export function ValuesForm({ input, onChange, read, faults, id }: ValuesFormProp
       )}
       <ColumnChoice read={read} input={input} onChange={onChange} />
       <div className="grid grid-cols-2 gap-3">
-        <Field label="Level α" error={faults.alpha}>
-          <Input
-            inputMode="decimal"
-            value={input.alpha}
-            onChange={(event) => onChange({ alpha: event.target.value })}
-          />
-        </Field>
+        <LevelField input={input} error={faults.alpha} onChange={onChange} />
         <Field
           label={
             <>

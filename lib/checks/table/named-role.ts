@@ -11,10 +11,12 @@ const STATISTICS: Partial<Record<NamedRole, Test>> = {
   'other-statistic': 'other',
 }
 
-const KINDS = {
+type PlainKind = Exclude<ColumnRole['kind'], 'p' | 'statistic' | 'df'>
+
+const NAMES = {
   comparison: 'comparison',
   group: 'group',
-  'second-group': 'group2',
+  group2: 'second-group',
   outcome: 'outcome',
   label: 'label',
   n: 'n',
@@ -22,11 +24,16 @@ const KINDS = {
   sd: 'sd',
   se: 'se',
   estimate: 'estimate',
-  interval: 'ci',
-  marks: 'stars',
+  ci: 'interval',
+  stars: 'marks',
   call: 'call',
-  unused: 'other',
-} as const
+  other: 'unused',
+} as const satisfies Record<PlainKind, NamedRole>
+
+const KINDS = Object.fromEntries(Object.entries(NAMES).map(([kind, name]) => [name, kind])) as Record<
+  (typeof NAMES)[PlainKind],
+  PlainKind
+>
 
 /** The role that a person gave a column, with the degrees of freedom and the procedure that its head names. */
 export function toColumnRole(named: NamedRole, header: string, found: ColumnRole): ColumnRole {
@@ -51,20 +58,3 @@ export function nameRole(role: ColumnRole): NamedRole {
   if (role.kind === 'df') return role.index === 0 ? 'df' : 'df-error'
   return NAMES[role.kind]
 }
-
-const NAMES = {
-  comparison: 'comparison',
-  group: 'group',
-  group2: 'second-group',
-  outcome: 'outcome',
-  label: 'label',
-  n: 'n',
-  mean: 'mean',
-  sd: 'sd',
-  se: 'se',
-  estimate: 'estimate',
-  ci: 'interval',
-  stars: 'marks',
-  call: 'call',
-  other: 'unused',
-} as const satisfies Record<Exclude<ColumnRole['kind'], 'p' | 'statistic' | 'df'>, NamedRole>
